@@ -1,0 +1,40 @@
+import type { LevelId } from '../body/types'
+import type { Alteration, BodiceStyle } from '../draft/types'
+import type { ClothDirection, ClothState } from '../textile/types'
+import type { Mm, NewtonPerMetre, Pascal } from '../units/brand'
+
+export interface LayerChoice {
+  readonly id: string
+  readonly label: string
+  readonly clothId: string
+  readonly direction: ClothDirection
+  readonly count: number
+  readonly cutRatio: number
+}
+
+export interface LevelChoice {
+  readonly level: LevelId
+  readonly hold: Pascal
+  /** `cut` solves the cut from the hold; `tension` keeps a typed cut; `gap` solves the gap from cut and lacing tension. */
+  readonly solve: 'cut' | 'tension' | 'gap'
+  /** Typed cut girth, cloth and rigid widths without the gap; used by `tension` and `gap`. */
+  readonly cut: Mm | null
+  readonly lacingTension: NewtonPerMetre | null
+  readonly rigidFront: Mm
+  readonly rigidBack: Mm
+  readonly gapFront: Mm
+  readonly gapBack: Mm
+  readonly squeeze: Mm
+}
+
+/** What the bench edits and the working copy stores. Everything computed is left out. */
+export interface GarmentDocument {
+  readonly schema: 1
+  readonly measuringId: string | null
+  readonly state: ClothState
+  readonly use: { readonly water: boolean; readonly strapless: boolean }
+  readonly plans: { readonly front: readonly LayerChoice[]; readonly back: readonly LayerChoice[] }
+  readonly levels: readonly LevelChoice[]
+  readonly style: BodiceStyle
+  readonly alterations: readonly Alteration[]
+}

@@ -1,0 +1,191 @@
+import type { Mm, Newton, NewtonPerMetre, Pascal, Strain } from '../units/brand'
+
+export type ClothDirection = 'lengthwise' | 'crosswise' | 'bias'
+export type ClothState = 'dry' | 'wet'
+
+/** One reading of a strip under load: L at the load, after the dwell. */
+export interface StretchReading {
+  readonly load: Newton
+  readonly length: Mm
+  /** `return` when the load was being taken off: a garment holds on the return. */
+  readonly on: 'loading' | 'return'
+}
+
+export interface StretchSpecimen {
+  readonly width: Mm
+  readonly gauge: Mm
+  readonly readings: readonly StretchReading[]
+  /** Length after release and rest; null when it was not read. */
+  readonly restLength: Mm | null
+}
+
+/** A stretch test of one cloth in one direction and state, as the workroom entered it. */
+export type StretchTest =
+  | {
+      readonly kind: 'strip'
+      readonly direction: ClothDirection
+      readonly state: ClothState
+      readonly specimens: readonly StretchSpecimen[]
+    }
+  | {
+      /** Only a stretch percentage is known (label, hand pull): the assumed case. */
+      readonly kind: 'label'
+      readonly direction: ClothDirection
+      readonly state: ClothState
+      readonly stretch: Strain
+    }
+
+/**
+ * Load curve T(e) of one cloth in one direction. `cubic`: a e + b e^3 with a, b >= 0. `monotone`: monotone cubic through
+ * `knots` (first knot is the origin), going on with its last slope. `assumed`: as cubic, from a stretch percentage only.
+ */
+export interface LoadCurve {
+  readonly kind: 'cubic' | 'monotone' | 'assumed'
+  readonly a: NewtonPerMetre
+  readonly b: NewtonPerMetre
+  readonly knots: readonly { readonly strain: Strain; readonly tension: NewtonPerMetre }[]
+  readonly testedTo: Strain
+  /** Root mean square residual over the largest tension; 0 for assumed. */
+  readonly residual: number
+  /** Standard deviation over mean of the specimens' tensions; .15 with fewer than three specimens. */
+  readonly spread: number
+  readonly specimens: number
+  /** The readings the curve was fitted to, for drawing. */
+  readonly points: readonly { readonly strain: Strain; readonly tension: NewtonPerMetre; readonly specimen: number }[]
+}
+
+/** What a test says of a cloth, beside its curve. Ratios; null where it was not read. */
+export interface StretchFigures {
+  readonly stretch: Strain
+  readonly growth: Strain | null
+  readonly recovery: number | null
+  readonly testTension: NewtonPerMetre | null
+}
+
+/** A cloth as a layer needs it: one direction, one state. */
+export interface LayerCloth {
+  readonly clothId: string
+  readonly name: string
+  readonly direction: ClothDirection
+  readonly state: ClothState
+  readonly curve: LoadCurve
+  readonly figures: StretchFigures
+  readonly thickness: Mm
+  /** u: the strain at which recovery is still acceptable, else half the tested stretch. */
+  readonly wearLimit: Strain
+  /** p: for the seconds of getting in; .9 of the tested stretch. */
+  readonly pullOnLimit: Strain
+  readonly testedOn: string | null
+}
+
+export interface Layer {
+  readonly id: string
+  readonly label: string
+  readonly cloth: LayerCloth
+  readonly count: number
+  /** r: cut width over the reference cut width; 1 unless meant. */
+  readonly cutRatio: number
+}
+
+/** Layers lying side by side in one zone; their tensions add. */
+export interface LayerPlan {
+  readonly zone: string
+  readonly layers: readonly Layer[]
+}
+
+export interface RingSegment {
+  readonly id: string
+  readonly half: 'front' | 'back'
+  readonly plan: LayerPlan
+  /** Part of the half's free arc; the shares of one half sum to 1. */
+  readonly share: number
+}
+
+/** Everything a ring needs besides the mode of its solve. Widths go once round the body (both halves of it). */
+export interface RingGeometry {
+  readonly level: string
+  readonly name: string
+  readonly girth: Mm
+  /** f: part of the girth in front of the side lines. */
+  readonly frontShare: number
+  readonly segments: readonly RingSegment[]
+  readonly rigidFront: Mm
+  readonly rigidBack: Mm
+  readonly gapFront: Mm
+  readonly gapBack: Mm
+  readonly squeeze: Mm
+  /** Breadth over depth of the body at the level. */
+  readonly aspect: number
+  readonly aspectEstimated: boolean
+  /** Added to the girth at a deep breath. */
+  readonly breath: Mm
+}
+
+export type RingMode =
+  | { readonly solve: 'cut'; readonly hold: Pascal }
+  | { readonly solve: 'tension'; readonly widths: readonly Mm[] }
+  | { readonly solve: 'gap'; readonly widths: readonly Mm[]; readonly tension: NewtonPerMetre; readonly gapIn: 'front' | 'back' }
+
+export type Governs = 'hold' | 'stretch' | 'reduction'
+export type HoldBand = 'light' | 'easy' | 'firm' | 'strong' | 'stop'
+
+export interface Interval {
+  readonly low: number
+  readonly high: number
+}
+
+export interface RingSegmentSolution {
+  readonly id: string
+  readonly half: 'front' | 'back'
+  readonly zone: string
+  /** Cut width round the body, both sides. */
+  readonly width: Mm
+  readonly strain: Strain
+}
+
+export interface RingSolution {
+  readonly level: string
+  readonly name: string
+  readonly mode: RingMode['solve']
+  readonly girth: Mm
+  /** Girth after the squeeze, plus pi t: what the middle surface goes round. */
+  readonly surface: Mm
+  readonly tension: NewtonPerMetre
+  readonly segments: readonly RingSegmentSolution[]
+  readonly rigidFront: Mm
+  readonly rigidBack: Mm
+  readonly gapFront: Mm
+  readonly gapBack: Mm
+  /** Cloth and rigid widths on the pieces, without the gap. */
+  readonly cut: Mm
+  readonly thickness: Mm
+  /** cut / girth, a figure to show. */
+  readonly k: number
+  /** 100 (1 - (cut + gap) / G). */
+  readonly negativeEase: number
+  readonly pressure: Pascal
+  readonly pressureBand: Interval
+  readonly cutBand: Interval
+  readonly band: HoldBand
+  readonly breathPressure: Pascal
+  readonly sidePressure: Pascal
+  readonly frontPressure: Pascal
+  /** Null unless the cut was solved from a hold. */
+  readonly governs: Governs | null
+  readonly hold: Pascal | null
+  readonly assumed: boolean
+  readonly extrapolated: boolean
+  /** Millimetres by which the ring lies loose on the body; 0 when under tension. */
+  readonly slack: Mm
+  readonly aspect: number
+  readonly aspectEstimated: boolean
+}
+
+/** Limits and defaults of a workroom; a workroom may tighten limits, never loosen them. */
+export interface TextileSettings {
+  readonly largestReduction: number
+  readonly defaultHold: Pascal
+  readonly fewSpecimensSpread: number
+  readonly lacingGapLow: Mm
+  readonly lacingGapHigh: Mm
+}

@@ -3,14 +3,7 @@ import type { Path, Point } from '../geometry/types'
 import type { Mm } from '../units/brand'
 
 export type PieceId = 'front-centre' | 'side-front' | 'side-back' | 'back-centre'
-export type EdgeId =
-  | 'centre'
-  | 'neckline'
-  | 'shoulder'
-  | 'armhole'
-  | 'princess'
-  | 'side'
-  | 'hem'
+export type EdgeId = 'centre' | 'neckline' | 'shoulder' | 'armhole' | 'princess' | 'side' | 'hem'
 
 export type CentreKind = 'fold' | 'seam' | 'lacing'
 export type EdgeKind = 'seam' | 'fold' | 'opening' | 'finished'

@@ -1,0 +1,10 @@
+import type { LevelId } from '../body/types'
+
+/** Level names as they stand on the board and the print. */
+export const LEVEL_NAMES: Readonly<Record<LevelId, string>> = {
+  bust: 'bust',
+  underbust: 'underbust',
+  waist: 'waist',
+  'high-hip': 'high hip',
+  hip: 'hip',
+}

@@ -1,0 +1,213 @@
+import type { LevelId } from '../body/types'
+import type { DraftPiece, PieceEdge } from '../draft/types'
+import type { Path, Point } from '../geometry/types'
+import { mm } from '../units/brand'
+import { insideAtHeight, pointsAlong } from './crossings'
+import { LEVEL_NAMES } from './level-names'
+import { arrowHead, notchStrokes, pointCross, pullStrokes } from './marks'
+import { placePath, placePoint } from './placing'
+import { stretchTicks } from './stretch-ticks'
+import type { KeepClear } from './stretch-ticks'
+import type { DrawingOperation, DrawingRole, Placement } from './types'
+
+/** What a drawing of a piece may show. */
+export type ScenePart = 'seam' | 'cutting' | 'notches' | 'arrows' | 'levels' | 'level-names' | 'ticks' | 'points' | 'labels'
+
+export interface SceneOptions {
+  /** Shown unless `false`; ticks and points only when `true`. */
+  readonly show?: Readonly<Partial<Record<ScenePart, boolean>>>
+  /** Worn strain round the body by level, of the piece's own zone. Without it no ticks. */
+  readonly strains?: Readonly<Partial<Record<LevelId, number>>>
+  /** Lines under the piece's name; without them the words of the cut. */
+  readonly lines?: readonly string[]
+  /** Size of the name, mm; the lines under it are three quarters of it. Default 7. */
+  readonly textSize?: number
+}
+
+const shownUnlessAsked: Readonly<Record<ScenePart, boolean>> = {
+  seam: true,
+  cutting: true,
+  notches: true,
+  arrows: true,
+  levels: true,
+  'level-names': true,
+  ticks: false,
+  points: false,
+  labels: true,
+}
+
+const ARROW_HEAD = 6
+const PULL_STROKE = 4
+const POINT_SIZE = 3
+/** A cutting line runs along a fold when both ends of a stroke lie this near to it, mm. */
+const ON_FOLD = 0.05
+
+/** `cut 1 on the fold`, `cut 2, a pair`: how often a piece is cut from one layer. */
+export function cutWords(piece: Pick<DraftPiece, 'onFold' | 'quantity'>): string {
+  if (piece.onFold) return `cut ${piece.quantity} on the fold`
+  return piece.quantity === 2 ? 'cut 2, a pair' : `cut ${piece.quantity}`
+}
+
+/**
+ * The drawing operations of one piece on the drafting plane (mm, y up), in the order in which they are drawn. The board
+ * and the print draw the same ones. A fold edge has the role `fold` and the cutting line leaves it out; text stays
+ * readable on a mirrored piece. Coordinates are exact: curves stay curves.
+ */
+export function pieceOperations(piece: DraftPiece, placement: Placement, options: SceneOptions = {}): DrawingOperation[] {
+  const shows = (part: ScenePart) => options.show?.[part] ?? shownUnlessAsked[part]
+  const textSize = options.textSize ?? 7
+  const labels = shows('labels') ? labelLines(piece, options.lines ?? [cutWords(piece)], textSize) : []
+  const operations: DrawingOperation[] = []
+  const draw = (role: DrawingRole, path: Path, closed = false) => {
+    if (path.length > 0) operations.push({ kind: 'path', role, piece: piece.id, path: placePath(path, placement), closed })
+  }
+  const write = (role: DrawingRole, at: Point, text: string, size: number, align: 'start' | 'middle' | 'end') =>
+    operations.push({ kind: 'text', role, piece: piece.id, at, text, size: mm(size), align })
+
+  if (shows('ticks') && options.strains) {
+    const clear = [...labels.map((label) => label.box), ...(shows('arrows') ? arrowBoxes(piece) : [])]
+    for (const tick of stretchTicks(piece, options.strains, clear)) draw('stretch-tick', [{ kind: 'line', ...tick }])
+  }
+  if (shows('levels')) {
+    for (const { level, from, to } of piece.levels) {
+      draw('level', [{ kind: 'line', from, to }])
+      if (shows('level-names')) {
+        const start = placement.mirrored === to.x > from.x ? to : from
+        const at = placePoint(start, placement)
+        write('label-small', { x: at.x + 3, y: at.y + 1.2 }, LEVEL_NAMES[level], textSize / 2, 'start')
+      }
+    }
+  }
+  if (shows('cutting')) for (const run of cuttingRuns(piece)) draw('cutting-line', run.path, run.closed)
+  if (shows('seam')) for (const run of edgeRuns(piece)) draw(run.role, run.path, run.closed)
+  if (shows('notches')) {
+    for (const edge of piece.edges) for (const notch of edge.notches) for (const stroke of notchStrokes(notch, edge)) draw('notch', stroke)
+  }
+  if (shows('arrows')) {
+    const { grain, stretch } = piece
+    draw('grain', [{ kind: 'line', from: grain.from, to: grain.to }])
+    draw('grain', arrowHead(grain.from, grain.to, ARROW_HEAD))
+    draw('grain', arrowHead(grain.to, grain.from, ARROW_HEAD))
+    draw('stretch', [{ kind: 'line', from: stretch.from, to: stretch.to }])
+    draw('stretch', arrowHead(stretch.from, stretch.to, ARROW_HEAD))
+    draw('stretch', arrowHead(stretch.to, stretch.from, ARROW_HEAD))
+    for (const stroke of pullStrokes(stretch.from, stretch.to, PULL_STROKE)) draw('stretch', stroke)
+    if (shows('labels')) {
+      const top = placePoint(grain.from.y > grain.to.y ? grain.from : grain.to, placement)
+      write('label-small', { x: top.x + 3, y: top.y - 8 }, 'grain', textSize / 2, 'start')
+      const [from, to] = [placePoint(stretch.from, placement), placePoint(stretch.to, placement)]
+      write('label-small', { x: (from.x + to.x) / 2, y: (from.y + to.y) / 2 - PULL_STROKE - 2 }, 'greatest stretch', textSize / 2, 'middle')
+    }
+  }
+  if (shows('labels')) {
+    for (const edge of piece.edges) {
+      if (edge.kind !== 'fold') continue
+      const at = foldLabelPoint(piece, edge)
+      const placed = placePoint(at, placement)
+      const toRight = placePoint({ x: at.x + 1, y: at.y }, placement).x > placed.x
+      write('label-small', { x: placed.x + (toRight ? 3 : -3), y: placed.y }, 'fold', textSize / 2, toRight ? 'start' : 'end')
+    }
+  }
+  if (shows('points')) {
+    for (const edge of piece.edges)
+      for (const node of edge.nodes) for (const stroke of pointCross(node.at, POINT_SIZE)) draw('point', stroke)
+  }
+  for (const label of labels) write(label.role, placePoint(label.at, placement), label.text, label.size, 'middle')
+  return operations
+}
+
+interface LabelLine {
+  readonly role: 'label' | 'label-small'
+  readonly at: Point
+  readonly text: string
+  readonly size: number
+  readonly box: KeepClear
+}
+
+/** A character is about this share of its size wide; only for keeping ticks clear of a label. */
+const CHARACTER_WIDTH = 0.56
+
+function labelLines(piece: DraftPiece, lines: readonly string[], textSize: number): LabelLine[] {
+  let y = piece.labelAt.y
+  return [piece.name, ...lines].map((text, i) => {
+    const size = i === 0 ? textSize : textSize * 0.75
+    if (i > 0) y -= size * 1.45
+    const half = (text.length * size * CHARACTER_WIDTH) / 2 + 2
+    const { x } = piece.labelAt
+    return {
+      role: i === 0 ? 'label' : 'label-small',
+      at: { x, y },
+      text,
+      size,
+      box: { left: x - half, right: x + half, bottom: y - size * 0.5 - 2, top: y + size + 2 },
+    }
+  })
+}
+
+function arrowBoxes(piece: DraftPiece): KeepClear[] {
+  return [piece.grain, piece.stretch].map(({ from, to }) => ({
+    left: Math.min(from.x, to.x) - 3,
+    right: Math.max(from.x, to.x) + 3,
+    bottom: Math.min(from.y, to.y) - 3,
+    top: Math.max(from.y, to.y) + 3,
+  }))
+}
+
+/** Edges of one kind that follow each other, joined: fold or seam line. One closed run when the piece has no fold. */
+function edgeRuns(piece: DraftPiece): { role: 'fold' | 'seam-line'; path: Path; closed: boolean }[] {
+  const folds = piece.edges.some((edge) => edge.kind === 'fold')
+  if (!folds) return [{ role: 'seam-line', path: piece.edges.flatMap((edge) => edge.path), closed: true }]
+  const start = piece.edges.findIndex((edge) => edge.kind === 'fold')
+  const fromFold = [...piece.edges.slice(start), ...piece.edges.slice(0, start)]
+  const runs: { role: 'fold' | 'seam-line'; path: Path; closed: boolean }[] = []
+  for (const edge of fromFold) {
+    const role = edge.kind === 'fold' ? 'fold' : 'seam-line'
+    const last = runs[runs.length - 1]
+    if (last?.role === role) last.path = [...last.path, ...edge.path]
+    else runs.push({ role, path: edge.path, closed: false })
+  }
+  return runs
+}
+
+/** The cutting line without the strokes that lie on a fold. */
+function cuttingRuns(piece: DraftPiece): { path: Path; closed: boolean }[] {
+  const folds = piece.edges.filter((edge) => edge.kind === 'fold').map((edge) => pointsAlong(edge.path))
+  const points = piece.cuttingLine
+  const strokes = points.map((from, i) => ({ from, to: points[(i + 1) % points.length]! }))
+  const onFold = strokes.map(({ from, to }) => folds.some((fold) => distanceTo(fold, from) < ON_FOLD && distanceTo(fold, to) < ON_FOLD))
+  const start = onFold.indexOf(true)
+  if (start < 0) return [{ path: strokes.map((stroke) => ({ kind: 'line', ...stroke })), closed: true }]
+  const runs: { path: Path; closed: boolean }[] = []
+  let run: Path = []
+  for (let i = 1; i <= strokes.length; i += 1) {
+    const at = (start + i) % strokes.length
+    if (!onFold[at]) run = [...run, { kind: 'line', ...strokes[at]! }]
+    else if (run.length > 0) {
+      runs.push({ path: run, closed: false })
+      run = []
+    }
+  }
+  return runs
+}
+
+function distanceTo(polyline: readonly Point[], point: Point): number {
+  let least = Infinity
+  for (let i = 1; i < polyline.length; i += 1) {
+    const [from, to] = [polyline[i - 1]!, polyline[i]!]
+    const [dx, dy] = [to.x - from.x, to.y - from.y]
+    const t = Math.min(1, Math.max(0, ((point.x - from.x) * dx + (point.y - from.y) * dy) / Math.max(dx * dx + dy * dy, 1e-12)))
+    least = Math.min(least, Math.hypot(from.x + t * dx - point.x, from.y + t * dy - point.y))
+  }
+  return least
+}
+
+/** A point of the fold two thirds up, clear of the level lines' names. */
+function foldLabelPoint(piece: DraftPiece, edge: PieceEdge): Point {
+  const heights = edge.nodes.map((node) => node.at.y)
+  const low = Math.min(...heights)
+  const y = low + (Math.max(...heights) - low) * 0.62
+  const outline = pointsAlong(piece.edges.flatMap((each) => each.path))
+  const across = insideAtHeight(outline, y)[0]
+  const first = edge.nodes[0]
+  return { x: across?.[0] ?? first?.at.x ?? 0, y }
+}

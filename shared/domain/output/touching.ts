@@ -1,0 +1,33 @@
+import type { Point } from '../geometry/types'
+import { insideAtHeight } from './crossings'
+import type { Bounds } from './placing'
+
+/** Whether a straight stroke has a point in a rectangle, edges counted in. Liang and Barsky's clipping. */
+export function strokeTouches(from: Point, to: Point, box: Bounds): boolean {
+  const [dx, dy] = [to.x - from.x, to.y - from.y]
+  let [enter, leave] = [0, 1]
+  for (const [direction, room] of [
+    [-dx, from.x - box.left],
+    [dx, box.right - from.x],
+    [-dy, from.y - box.bottom],
+    [dy, box.top - from.y],
+  ] as const) {
+    if (direction === 0) {
+      if (room < 0) return false
+      continue
+    }
+    const t = room / direction
+    if (direction < 0) enter = Math.max(enter, t)
+    else leave = Math.min(leave, t)
+    if (enter > leave) return false
+  }
+  return true
+}
+
+/** Whether a closed polygon, its inside counted in, has a point in a rectangle: a sheet with nothing but cloth is not blank. */
+export function polygonTouches(polygon: readonly Point[], box: Bounds): boolean {
+  const crosses = polygon.some((from, i) => strokeTouches(from, polygon[(i + 1) % polygon.length]!, box))
+  if (crosses) return true
+  const middle = { x: (box.left + box.right) / 2, y: (box.bottom + box.top) / 2 }
+  return insideAtHeight(polygon, middle.y).some(([left, right]) => middle.x > left && middle.x < right)
+}

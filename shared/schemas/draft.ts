@@ -1,0 +1,173 @@
+import { z } from 'zod'
+import type { BodyLevel, DraftBody } from '../domain/body/types'
+import type { Alteration, BodiceStyle, Draft, DraftPiece, LevelWidths } from '../domain/draft/types'
+import type { Segment } from '../domain/geometry/types'
+import { figure, length, mirrors, point } from './base'
+
+export const levelId = z.enum(['bust', 'underbust', 'waist', 'high-hip', 'hip'])
+export const pieceId = z.enum(['front-centre', 'side-front', 'side-back', 'back-centre'])
+export const edgeId = z.enum(['centre', 'neckline', 'shoulder', 'armhole', 'princess', 'side', 'hem'])
+const centreKind = z.enum(['fold', 'seam', 'lacing'])
+const degree = figure(-360, 360)
+const role = z.string().min(1).max(60)
+
+const bodyKey = z.enum([
+  'bustGirth',
+  'underbustGirth',
+  'waistGirth',
+  'highHipGirth',
+  'hipGirth',
+  'neckBaseGirth',
+  'shoulderLength',
+  'shoulderSlope',
+  'acrossBack',
+  'acrossFront',
+  'backWaistLength',
+  'frontWaistLength',
+  'neckShoulderToBustPoint',
+  'sideWaistLength',
+  'waistToHip',
+  'bustPointDistance',
+  'bustPointToUnderbust',
+  'armscyeGirth',
+])
+const bodyFigure = figure(-10, 5000)
+export const draftBody = mirrors<DraftBody>()(
+  z.object({
+    values: z.object({
+      bustGirth: bodyFigure,
+      underbustGirth: bodyFigure,
+      waistGirth: bodyFigure,
+      highHipGirth: bodyFigure,
+      hipGirth: bodyFigure,
+      neckBaseGirth: bodyFigure,
+      shoulderLength: bodyFigure,
+      shoulderSlope: bodyFigure,
+      acrossBack: bodyFigure,
+      acrossFront: bodyFigure,
+      backWaistLength: bodyFigure,
+      frontWaistLength: bodyFigure,
+      neckShoulderToBustPoint: bodyFigure,
+      sideWaistLength: bodyFigure,
+      waistToHip: bodyFigure,
+      bustPointDistance: bodyFigure,
+      bustPointToUnderbust: bodyFigure,
+      armscyeGirth: bodyFigure,
+    }),
+    estimated: z.array(bodyKey),
+  }),
+)
+
+export const bodyLevel = mirrors<BodyLevel>()(
+  z.object({ id: levelId, name: z.string(), y: length(), girth: length(), girthEstimated: z.boolean(), movedBy: length() }),
+)
+
+const shares = z
+  .object({ centre: figure(0, 1), princess: figure(0, 1), side: figure(0, 1) })
+  .refine((parts) => Math.abs(parts.centre + parts.princess + parts.side - 1) < 0.001, 'The three shares must make one whole.')
+
+export const bodiceStyle = mirrors<BodiceStyle>()(
+  z.object({
+    centreFront: centreKind,
+    centreBack: centreKind,
+    hem: z.object({ level: z.enum(['waist', 'high-hip', 'hip']), below: length(-300, 500) }),
+    necklineFrontDepth: length(0, 400),
+    necklineBackDepth: length(0, 500),
+    necklineWidth: length(0, 200),
+    princessAt: figure(0.1, 0.9),
+    frontShares: shares,
+    backShares: shares,
+    verticalFactor: figure(0.7, 1.1),
+    bustAngle: figure(0, 90).nullable(),
+    underarmDrop: length(-20, 150),
+    allowances: z.object({
+      seam: length(0, 60),
+      centre: length(0, 60),
+      shoulder: length(0, 60),
+      neckline: length(0, 60),
+      armhole: length(0, 60),
+      hem: length(0, 100),
+    }),
+  }),
+)
+
+export const levelWidths = mirrors<LevelWidths>()(
+  z.object({ level: levelId, front: length(0, 2500), back: length(0, 2500), gapFront: length(0, 1000), gapBack: length(0, 1000) }),
+)
+
+export const alteration = mirrors<Alteration>()(
+  z.object({
+    id: z.string().min(1).max(60),
+    kind: z.literal('move'),
+    name: z.string().trim().min(1, 'Give the alteration a name.').max(120),
+    role: z.object({ piece: pieceId, edge: edgeId, node: role, handle: z.enum(['before', 'after']).optional() }),
+    dx: length(-500, 500),
+    dy: length(-500, 500),
+    carry: z.boolean(),
+    on: z.boolean(),
+  }),
+)
+
+const segment = mirrors<Segment>()(
+  z.discriminatedUnion('kind', [
+    z.object({ kind: z.literal('line'), from: point, to: point }),
+    z.object({ kind: z.literal('cubic'), from: point, c1: point, c2: point, to: point }),
+  ]),
+)
+const stroke = z.object({ from: point, to: point })
+const edge = z.object({
+  id: edgeId,
+  kind: z.enum(['seam', 'fold', 'opening', 'finished']),
+  nodes: z.array(z.object({ name: role, at: point, level: levelId.nullable() })).max(100),
+  path: z.array(segment).max(100),
+  mate: z.object({ piece: pieceId, edge: edgeId }).nullable(),
+  allowance: length(0, 200),
+  notches: z.array(z.object({ at: point, inward: point, kind: z.enum(['single', 'double']), pair: z.string().max(120) })).max(100),
+})
+
+export const draftPiece = mirrors<DraftPiece>()(
+  z.object({
+    id: pieceId,
+    name: z.string().max(120),
+    zone: z.enum(['front', 'back']),
+    edges: z.array(edge).min(1).max(40),
+    grain: stroke,
+    stretch: stroke,
+    levels: z.array(z.object({ level: levelId, from: point, to: point, width: length() })).max(20),
+    labelAt: point,
+    onFold: z.boolean(),
+    quantity: z.number().int().min(1).max(20),
+    cuttingLine: z.array(point).min(3).max(20_000),
+  }),
+)
+
+const seamSide = z.object({ piece: pieceId, edge: edgeId, length: length() })
+export const draft = mirrors<Draft>()(
+  z.object({
+    pieces: z.array(draftPiece).max(20),
+    seams: z.array(z.object({ name: z.string(), a: seamSide, b: seamSide, difference: length() })),
+    findings: z.array(
+      z.object({
+        code: z.enum([
+          'bust-angle-negative',
+          'bust-angle-large',
+          'bust-angle-held',
+          'bust-level-moved',
+          'across-front-held',
+          'across-back-held',
+          'armhole-aim-off',
+          'side-seam-moved',
+          'piece-narrow',
+        ]),
+        piece: pieceId.nullable(),
+        edge: edgeId.nullable(),
+        value: figure(),
+        unit: z.enum(['mm', 'degree']),
+        message: z.string(),
+      }),
+    ),
+    bustAngle: degree,
+    armhole: z.object({ length: length(), aim: length() }),
+    frame: z.record(point),
+  }),
+)

@@ -167,7 +167,10 @@ export interface RingSolution {
   readonly pressureBand: Interval
   readonly cutBand: Interval
   readonly band: HoldBand
+  /** At a deep breath, gap and cut unchanged. */
   readonly breathPressure: Pascal
+  /** The same with every curve at the ends of its spread: a wearer's cap is held against its upper end. */
+  readonly breathBand: Interval
   readonly sidePressure: Pascal
   readonly frontPressure: Pascal
   /** Null unless the cut was solved from a hold. */

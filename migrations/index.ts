@@ -1,0 +1,12 @@
+import type { Migration } from 'kysely'
+import * as accounts from './2026-12-01T0600_accounts'
+import * as workroomRows from './2026-12-01T0601_workroom_rows'
+
+/** Every migration by its file name, in order. A test holds this list against the folder. */
+export const migrations: Readonly<Record<string, Migration>> = {
+  '2026-12-01T0600_accounts': accounts,
+  '2026-12-01T0601_workroom_rows': workroomRows,
+}
+
+/** The newest migration: a server built with it refuses an older schema. */
+export const newestMigration = Object.keys(migrations).sort().at(-1)!

@@ -1,26 +1,11 @@
+import { pathFlatten } from '../geometry/path'
 import type { Path, Point } from '../geometry/types'
 
-/** Chords a cubic is walked with where a crossing is only drawn, never measured. */
-const CHORDS = 24
+/** Chords keep this close to their curve where it is only looked at, mm. */
+const DRAWN_TOLERANCE = 0.1
 
-/** Points along a path, close enough to draw by (24 chords a curve); lengths are never read from them. */
-export function pointsAlong(path: Path): Point[] {
-  const points: Point[] = []
-  for (const segment of path) {
-    if (points.length === 0) points.push(segment.from)
-    if (segment.kind === 'line') points.push(segment.to)
-    else {
-      const { from, c1, c2, to } = segment
-      for (let i = 1; i <= CHORDS; i += 1) {
-        const t = i / CHORDS
-        const s = 1 - t
-        const [a, b, c, d] = [s * s * s, 3 * s * s * t, 3 * s * t * t, t * t * t]
-        points.push({ x: a * from.x + b * c1.x + c * c2.x + d * to.x, y: a * from.y + b * c1.y + c * c2.y + d * to.y })
-      }
-    }
-  }
-  return points
-}
+/** Points along a path, close enough to draw and to point at (0.1 mm); lengths are never read from them. */
+export const pointsAlong = (path: Path): readonly Point[] => pathFlatten(path, DRAWN_TOLERANCE)
 
 /**
  * Where the level line at height y lies inside a closed polygon: pairs of x from left to right, mm. A height that only

@@ -1,5 +1,6 @@
 import type { DraftPiece } from '../draft/types'
-import type { Path, Point, Segment } from '../geometry/types'
+import { pathTransform } from '../geometry/path'
+import type { Path, Point } from '../geometry/types'
 import type { Placement } from './types'
 
 /** An upright rectangle on the drafting plane, mm, y up. */
@@ -22,12 +23,8 @@ export function placeDirection(direction: Point, placement: Placement): Point {
 
 /** A path where the placement lays it, mm. It keeps its direction of travel; mirrored, a counter-clockwise loop runs clockwise. */
 export function placePath(path: Path, placement: Placement): Path {
-  const place = (point: Point) => placePoint(point, placement)
-  return path.map((segment): Segment =>
-    segment.kind === 'line'
-      ? { kind: 'line', from: place(segment.from), to: place(segment.to) }
-      : { kind: 'cubic', from: place(segment.from), c1: place(segment.c1), c2: place(segment.c2), to: place(segment.to) },
-  )
+  const { offset, mirrored } = placement
+  return pathTransform(path, { a: mirrored ? -1 : 1, b: 0, c: 0, d: 1, e: offset.x, f: offset.y })
 }
 
 /** The seam outline of a piece as one closed path on the drafting plane, edge after edge: for fills and hit tests. */

@@ -1,0 +1,66 @@
+import type { LevelId } from '../body/types'
+import type { Caution } from '../cautions/types'
+import type { DraftPiece, EdgeId } from '../draft/types'
+import type { HoldBand } from '../textile/types'
+import { formatLength } from '../units/format'
+import type { Mm } from '../units/brand'
+
+/**
+ * What a print set says beside the drawing. There is no field for a client's or wearer's name, a body girth or a wearer's
+ * condition: these papers go to makers.
+ */
+export interface PrintFacts {
+  readonly garmentCode: string
+  /** The version as the workroom calls it, e.g. `version 3`. */
+  readonly version: string
+  /** The day of the print as the workroom writes it. */
+  readonly printedOn: string
+  readonly unit: 'cm' | 'in'
+  /** Layers as they are cut, front and back. */
+  readonly layers: readonly { readonly zone: 'front' | 'back'; readonly label: string; readonly cloth: string; readonly count: number }[]
+  /** Cut girths, cloth and rigid widths without the gap, with the word for the hold. */
+  readonly rings: readonly { readonly name: string; readonly cut: Mm; readonly hold: HoldBand }[]
+  /** Open cautions; only the maker's words are printed. */
+  readonly cautions: readonly Pick<Caution, 'severity' | 'makerMessage'>[]
+  /** Worn strain by zone and level; given, the pieces carry stretch ticks. */
+  readonly strains?: Readonly<Record<'front' | 'back', Readonly<Partial<Record<LevelId, number>>>>>
+}
+
+/** Which outlines a print shows. */
+export type PrintedLines = 'both' | 'seam' | 'cutting'
+
+/** Stands on every overview. Local codes and licensed practice go first. */
+export const SAFETY_LINE =
+  'This garment is no medical device and no buoyancy aid. Cap every bone. Whoever wears it must be able to leave it alone and quickly, and takes it off when numb, breathless or in pain. Local codes and licensed practice go first.'
+
+export const ACTUAL_SIZE = 'Print at actual size (100 %), without fitting to the page.'
+
+/** How many of a piece are cut from each layer: `cut 2 shell`, one line a layer, the fold said once. */
+export function cutLines(piece: Pick<DraftPiece, 'zone' | 'quantity' | 'onFold'>, facts: Pick<PrintFacts, 'layers'>): string[] {
+  const layers = facts.layers.filter((layer) => layer.zone === piece.zone && layer.count > 0)
+  const cut = layers.map((layer) => `cut ${layer.count * piece.quantity} ${layer.label.toLowerCase()}`)
+  const how = piece.onFold ? 'on the fold' : piece.quantity === 2 ? 'in pairs' : ''
+  if (cut.length === 0) return [`cut ${piece.quantity}${how ? `, ${how}` : ''} of each layer`]
+  return how ? [...cut, how] : cut
+}
+
+/** The allowances drawn, by width: `1.0 cm princess, side; 2.0 cm hem`. Empty when no edge has one. */
+export function allowanceWords(pieces: readonly DraftPiece[], unit: 'cm' | 'in'): string {
+  const edges = new Map<number, Set<EdgeId>>()
+  for (const edge of pieces.flatMap((piece) => piece.edges)) {
+    if (edge.kind === 'fold' || edge.allowance <= 0) continue
+    edges.set(edge.allowance, (edges.get(edge.allowance) ?? new Set()).add(edge.id))
+  }
+  return [...edges]
+    .sort(([a], [b]) => a - b)
+    .map(([allowance, ids]) => `${formatLength(allowance as Mm, unit)} ${[...ids].sort().join(', ')}`)
+    .join('; ')
+}
+
+/** One or two sentences on what the outlines hold: how wide the allowances are, or that there are none. */
+export function allowanceState(pieces: readonly DraftPiece[], unit: 'cm' | 'in', lines: PrintedLines): string {
+  const planned = allowanceWords(pieces, unit)
+  if (!planned) return 'None planned: the line is the seam line; add the allowance when cutting.'
+  if (lines === 'seam') return `Not drawn: the line is the seam line; when cutting add ${planned}.`
+  return `Drawn: ${planned}. Cut on the solid line${lines === 'both' ? ', sew on the dashed line' : ''}.`
+}

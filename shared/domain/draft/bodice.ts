@@ -1,0 +1,210 @@
+import type { LevelId } from '../body/types'
+import { pathLength } from '../geometry/path'
+import type { Point } from '../geometry/types'
+import { mm } from '../units/brand'
+import { fail, succeed } from '../units/result'
+import type { Problem, Result } from '../units/result'
+import { draftFrame } from './frame'
+import type { Frame } from './frame'
+import { outlineIsSound, readPiece } from './piece'
+import type { LevelHeight } from './piece'
+import { sketchPieces } from './pieces'
+import { millimetres } from './say'
+import { compareSeams, edgeOf, withNotches } from './seams'
+import { checkStyle } from './style'
+import type { BodiceStyle, Draft, DraftFinding, DraftInput, DraftPiece } from './types'
+import { wedgesOf } from './wedges'
+
+const LEVELS: readonly LevelId[] = ['bust', 'underbust', 'waist', 'high-hip', 'hip']
+/** Levels must lie at least this far apart, mm. */
+const LEAST_BETWEEN_LEVELS = 10
+/** A hem this near to a level lies on it, mm. */
+const HEM_ON_LEVEL = 0.01
+/** A difference from the armhole aim above this is said, mm. */
+export const ARMHOLE_AIM_OFF = 30
+/** A side seam that moves by more than this is said, mm. */
+const SIDE_SEAM_MOVED = 1
+/** A piece narrower than this at a level is said, mm. */
+const NARROW_PIECE = 25
+/** Cloth that must lie between the centre edge and the bust point, mm. */
+const LEAST_TO_BUST_POINT = 15
+
+/** Levels by the names they have in the draft's frame. */
+const levelName = (level: LevelId): string => `level-${level}`
+
+function widthProblem({ widths, style }: DraftInput): Problem | null {
+  for (const level of LEVELS) {
+    const own = widths.find((candidate) => candidate.level === level)
+    const values = own === undefined ? [] : [own.front, own.back, own.gapFront, own.gapBack]
+    if (own === undefined || !values.every(Number.isFinite) || own.front <= 0 || own.back <= 0 || own.gapFront < 0 || own.gapBack < 0) {
+      return { code: 'width-missing', message: `The ${level} level has no width to draft.`, todo: 'Solve its ring first.', at: level }
+    }
+    if (own.gapFront > 0 && style.centreFront !== 'lacing') return gapProblem(level, 'front')
+    if (own.gapBack > 0 && style.centreBack !== 'lacing') return gapProblem(level, 'back')
+  }
+  return null
+}
+
+const gapProblem = (level: LevelId, half: 'front' | 'back'): Problem => ({
+  code: 'gap-without-lacing',
+  message: `The ${level} level has a gap at the centre ${half}, which is not laced.`,
+  todo: `Lace the centre ${half} or set its gap to 0.`,
+  at: level,
+})
+
+function frameProblem(frame: Frame): Problem | null {
+  for (const [index, level] of LEVELS.slice(1).entries()) {
+    const above = LEVELS[index] as LevelId
+    const apart = frame.heightOf(above) - frame.heightOf(level)
+    if (!(apart >= LEAST_BETWEEN_LEVELS)) {
+      return {
+        code: 'levels-too-near',
+        message: `The ${level} level lies ${millimetres(apart)} below the ${above} level; ${LEAST_BETWEEN_LEVELS} mm is the least.`,
+        todo: 'Measure the front waist length, the neck-shoulder point to bust point, the bust point to underbust and the waist to hip again.',
+        at: level,
+      }
+    }
+  }
+  const { front, back } = frame
+  const beside = Math.min(front.princess.x - front.centreX, front.underarm.x - front.princess.x)
+  if (!(beside >= LEAST_TO_BUST_POINT)) {
+    return {
+      code: 'bust-point-outside',
+      message: `The bust point lies ${millimetres(beside)} from the edge of the half front; ${LEAST_TO_BUST_POINT} mm is the least.`,
+      todo: 'Check the bust point distance, narrow the gap at the centre front or ask for a lighter hold at the bust.',
+      at: 'bust',
+    }
+  }
+  const shoulder = Math.min(front.shoulderEnd.y - front.underarmDrawn.y, back.shoulderEnd.y - back.underarm.y)
+  if (!(shoulder >= 60)) {
+    return {
+      code: 'armhole-too-shallow',
+      message: `The shoulder end lies only ${millimetres(shoulder)} above the underarm.`,
+      todo: 'Measure the back waist length, the front waist length and the side waist length again.',
+      at: 'sideWaistLength',
+    }
+  }
+  return null
+}
+
+function hemHeightOf(frame: Frame, style: BodiceStyle): number {
+  const asked = frame.heightOf(style.hem.level) - style.hem.below
+  const level = LEVELS.find((own) => Math.abs(frame.heightOf(own) - asked) < HEM_ON_LEVEL)
+  return level === undefined ? asked : frame.heightOf(level)
+}
+
+function frameRecord(frame: Frame): Readonly<Record<string, Point>> {
+  const { front, back } = frame
+  return {
+    nape: { x: 0, y: back.neckCentre.y },
+    'back-neck-shoulder': back.neckShoulder,
+    'back-shoulder-end': back.shoulderEnd,
+    'back-across': back.across,
+    'back-underarm': back.underarm,
+    'front-neck': { x: 0, y: front.neckCentre.y },
+    'front-neck-shoulder': front.neckShoulder,
+    'front-shoulder-end': front.shoulderEnd,
+    'front-across': front.across,
+    'front-underarm': front.underarm,
+    'front-underarm-turned-back': front.underarmDrawn,
+    'bust-point': front.princess,
+    'back-princess': back.princess,
+    ...Object.fromEntries(LEVELS.map((level) => [levelName(level), { x: 0, y: frame.heightOf(level) }])),
+  }
+}
+
+/** Heights of the levels of a draft on its pieces. */
+export function levelHeightsOf(draft: Draft): readonly LevelHeight[] {
+  return LEVELS.flatMap((level) => {
+    const at = draft.frame[levelName(level)]
+    return at === undefined ? [] : [{ level, y: at.y }]
+  })
+}
+
+/** Length of the armhole of both sides together, mm. */
+export function armholeLength(pieces: readonly DraftPiece[]): number {
+  return pathLength(edgeOf(pieces, 'side-front', 'armhole').path) + pathLength(edgeOf(pieces, 'side-back', 'armhole').path)
+}
+
+/** What is said of the armhole and of narrow pieces; read again after alterations. */
+export function readFindings(pieces: readonly DraftPiece[], aim: number): readonly DraftFinding[] {
+  const off = armholeLength(pieces) - aim
+  const findings: DraftFinding[] = []
+  if (Math.abs(off) > ARMHOLE_AIM_OFF) {
+    findings.push({
+      code: 'armhole-aim-off',
+      piece: null,
+      edge: 'armhole',
+      value: off,
+      unit: 'mm',
+      message: `The armhole is ${millimetres(Math.abs(off))} ${off > 0 ? 'longer' : 'shorter'} than its aim; ${off > 0 ? 'raise' : 'lower'} the underarm or measure the armscye again.`,
+    })
+  }
+  for (const piece of pieces) {
+    const narrowest = piece.levels.reduce(
+      (least, level) => (level.width < least.width ? level : least),
+      piece.levels[0] ?? { width: Infinity, level: '' },
+    )
+    if (narrowest.width >= NARROW_PIECE) continue
+    findings.push({
+      code: 'piece-narrow',
+      piece: piece.id,
+      edge: null,
+      value: narrowest.width,
+      unit: 'mm',
+      message: `${piece.name} is only ${millimetres(narrowest.width)} wide at the ${narrowest.level} level.`,
+    })
+  }
+  return findings
+}
+
+/**
+ * The bodice of one half of the body: four pieces with notches, grain, levels and cutting line, its seams compared, and
+ * what had to be decided or held. Widths on the pieces are those of the rings, front and back together, to .5 mm at every
+ * level that crosses all pieces. It is a draft: it says nothing of the fit.
+ */
+export function draftBodice(input: DraftInput): Result<Draft> {
+  const { body, style } = input
+  const problem = checkStyle(style, body)[0] ?? widthProblem(input)
+  if (problem !== null) return fail(problem)
+  const frame = draftFrame(input)
+  const wrong = frameProblem(frame)
+  if (wrong !== null) return fail(wrong)
+  const sketches = sketchPieces(frame, style, hemHeightOf(frame, style))
+  const crossed = sketches.find((piece) => !outlineIsSound(piece.edges))
+  if (crossed !== undefined) {
+    return fail({
+      code: 'outline-crosses',
+      message: `${crossed.name} would cross its own outline.`,
+      todo: 'Bring the levels nearer to each other, take a higher neckline or a smaller bust angle.',
+      at: crossed.id,
+    })
+  }
+  const heights = LEVELS.map((level) => ({ level, y: frame.heightOf(level) }))
+  const pieces = withNotches(sketches.map((piece) => readPiece(piece, heights)))
+  const aim = body.values.armscyeGirth * frame.milder
+  const moved = wedgesOf(frame, style).sideMoved('waist')
+  return succeed({
+    pieces,
+    seams: compareSeams(pieces),
+    findings: [
+      ...frame.findings,
+      ...(Math.abs(moved) > SIDE_SEAM_MOVED
+        ? [
+            {
+              code: 'side-seam-moved',
+              piece: null,
+              edge: 'side',
+              value: moved,
+              unit: 'mm',
+              message: `The side seam stands ${millimetres(Math.abs(moved))} further to the ${moved > 0 ? 'back' : 'front'} at the waist, so that both its edges are alike.`,
+            } as const,
+          ]
+        : []),
+      ...readFindings(pieces, aim),
+    ],
+    bustAngle: (frame.bust.angle * 180) / Math.PI,
+    armhole: { length: mm(armholeLength(pieces)), aim: mm(aim) },
+    frame: frameRecord(frame),
+  })
+}

@@ -1,0 +1,96 @@
+import type { LevelId } from '../body/types'
+import { pathCrossingsAtHeight } from '../geometry/crossings'
+import { outlineOffset } from '../geometry/offset'
+import { pathFlatten } from '../geometry/path'
+import { pointDistance } from '../geometry/point'
+import { polygonArea, polygonIsSimple } from '../geometry/polygon'
+import type { Polygon } from '../geometry/polygon'
+import type { Point } from '../geometry/types'
+import { mm } from '../units/brand'
+import type { DraftPiece, EdgeId, PieceEdge, PieceId } from './types'
+
+/** A level and its height on the pieces, mm over the waist. */
+export interface LevelHeight {
+  readonly level: LevelId
+  readonly y: number
+}
+
+/** What a piece is before anything is read off it. */
+export type PieceSketch = Pick<DraftPiece, 'id' | 'name' | 'zone' | 'edges' | 'onFold' | 'quantity'>
+
+/** The two edges between which a level crosses a piece. */
+export function edgesAcross(piece: PieceId): readonly [left: EdgeId, right: EdgeId] {
+  return piece === 'front-centre' || piece === 'back-centre' ? ['centre', 'princess'] : ['princess', 'side']
+}
+
+const edgeIn = (edges: readonly PieceEdge[], id: EdgeId): PieceEdge => edges.find((edge) => edge.id === id) as PieceEdge
+
+function crossing(edge: PieceEdge, { level, y }: LevelHeight): Point | null {
+  const found = pathCrossingsAtHeight(edge.path, y)
+  const node = edge.nodes.find((own) => own.level === level)
+  if (node === undefined || found.length < 2) return found[0] ?? null
+  return found.reduce((best, at) => (pointDistance(at, node.at) < pointDistance(best, node.at) ? at : best))
+}
+
+/** Where each level crosses a piece, from edge to edge, and how wide the piece is there. A level that misses an edge is left out. */
+export function levelsAcross(id: PieceId, edges: readonly PieceEdge[], heights: readonly LevelHeight[]): DraftPiece['levels'] {
+  const [left, right] = edgesAcross(id)
+  return heights.flatMap((height) => {
+    const from = crossing(edgeIn(edges, left), height)
+    const to = crossing(edgeIn(edges, right), height)
+    return from === null || to === null ? [] : [{ level: height.level, from, to, width: mm(to.x - from.x) }]
+  })
+}
+
+/** The outline of a piece as a polygon, counter-clockwise, corners once. */
+export function pieceOutline(edges: readonly PieceEdge[], tolerance?: number): Polygon {
+  return edges.flatMap((edge) => pathFlatten(edge.path, tolerance).slice(0, -1))
+}
+
+/** Whether the outline of a piece is one closed, counter-clockwise loop that never crosses itself. */
+export function outlineIsSound(edges: readonly PieceEdge[]): boolean {
+  const outline = pieceOutline(edges)
+  if (!outline.every(({ x, y }) => Number.isFinite(x) && Number.isFinite(y))) return false
+  return polygonArea(outline) > 0 && polygonIsSimple(outline)
+}
+
+/** The cutting line: each edge outwards by its own allowance, corners mitred, folds left. */
+export function cuttingLineOf(edges: readonly PieceEdge[]): readonly Point[] {
+  return outlineOffset(edges.map((edge) => ({ points: pathFlatten(edge.path), allowance: edge.allowance }))) ?? []
+}
+
+function middleAt(edges: readonly PieceEdge[], id: PieceId, y: number): { readonly x: number; readonly width: number } | null {
+  const [left, right] = edgesAcross(id)
+  const from = pathCrossingsAtHeight(edgeIn(edges, left).path, y)[0]
+  const to = pathCrossingsAtHeight(edgeIn(edges, right).path, y)[0]
+  return from === undefined || to === undefined ? null : { x: (from.x + to.x) / 2, width: to.x - from.x }
+}
+
+/** Grain line, arrow of greatest stretch and place of the label, all within the piece between the bust and the hem. */
+function marksOf(
+  id: PieceId,
+  edges: readonly PieceEdge[],
+  heights: readonly LevelHeight[],
+): Pick<DraftPiece, 'grain' | 'stretch' | 'labelAt'> {
+  const bottom = Math.max(...edgeIn(edges, 'hem').nodes.map(({ at }) => at.y))
+  const top = heights.find(({ level }) => level === 'bust')?.y ?? bottom
+  const at = (share: number) => bottom + (top - bottom) * share
+  const middles = [0.1, 0.35, 0.6, 0.85].map((share) => middleAt(edges, id, at(share))).filter((middle) => middle !== null)
+  const x = middles.reduce((sum, middle) => sum + middle.x, 0) / Math.max(1, middles.length)
+  const arrow = middleAt(edges, id, at(0.5)) ?? { x, width: 40 }
+  return {
+    grain: { from: { x, y: at(0.08) }, to: { x, y: at(0.92) } },
+    stretch: { from: { x: arrow.x - arrow.width * 0.3, y: at(0.5) }, to: { x: arrow.x + arrow.width * 0.3, y: at(0.5) } },
+    labelAt: { x, y: at(0.72) },
+  }
+}
+
+/** A piece with its level crossings, cutting line, grain line, arrow and label place; notches are set when its mates stand. */
+export function readPiece(sketch: PieceSketch, heights: readonly LevelHeight[]): DraftPiece {
+  return {
+    ...sketch,
+    ...marksOf(sketch.id, sketch.edges, heights),
+    levels: levelsAcross(sketch.id, sketch.edges, heights),
+    cuttingLine: cuttingLineOf(sketch.edges),
+  }
+}

@@ -1,0 +1,175 @@
+import type { LevelId } from '../body/types'
+import type { Alteration, BodiceStyle, PointRole } from '../draft/types'
+import type { ClothState } from '../textile/types'
+import { mm, type Mm } from '../units/brand'
+import type { GarmentDocument, LayerChoice, LevelChoice } from './types'
+
+export type Zone = keyof GarmentDocument['plans']
+
+/** Everything the bench can do to a document. One command is one undo step. */
+export type Command =
+  | { readonly kind: 'choose-measuring'; readonly measuringId: string | null }
+  | { readonly kind: 'set-state'; readonly state: ClothState }
+  | { readonly kind: 'set-use'; readonly use: Partial<GarmentDocument['use']> }
+  | { readonly kind: 'set-layers'; readonly zone: Zone | 'both'; readonly layers: readonly LayerChoice[] }
+  | { readonly kind: 'set-level'; readonly level: LevelId | 'all'; readonly patch: Partial<Omit<LevelChoice, 'level'>> }
+  | { readonly kind: 'set-style'; readonly patch: Partial<BodiceStyle> }
+  | {
+      readonly kind: 'move-point'
+      readonly role: PointRole
+      readonly dx: Mm
+      readonly dy: Mm
+      readonly carry: boolean
+      readonly id: string
+    }
+  | { readonly kind: 'set-move'; readonly role: PointRole; readonly dx: Mm; readonly dy: Mm; readonly carry: boolean; readonly id: string }
+  | {
+      readonly kind: 'change-alteration'
+      readonly id: string
+      readonly patch: Partial<Pick<Alteration, 'name' | 'dx' | 'dy' | 'carry' | 'on'>>
+    }
+  | { readonly kind: 'remove-alteration'; readonly id: string }
+  | { readonly kind: 'order-alteration'; readonly id: string; readonly to: number }
+
+/** What a command changed, key by key, so that it can be undone and redone without the command. */
+export interface DocumentDiff {
+  readonly label: string
+  readonly changes: readonly DocumentChange[]
+}
+
+export type DocumentChange = {
+  [Key in keyof GarmentDocument]: { readonly key: Key; readonly before: GarmentDocument[Key]; readonly after: GarmentDocument[Key] }
+}[keyof GarmentDocument]
+
+/** True when both name the same point or handle. */
+export function sameRole(a: PointRole, b: PointRole): boolean {
+  return a.piece === b.piece && a.edge === b.edge && a.node === b.node && a.handle === b.handle
+}
+
+/** A point or handle in the trade's words: `side front, princess seam at the bust`. */
+export function roleWords(role: PointRole): string {
+  const piece = role.piece.replace('-', ' ')
+  const edge = role.edge === 'princess' || role.edge === 'side' ? `${role.edge} seam` : role.edge === 'centre' ? 'centre edge' : role.edge
+  const handle = role.handle ? `, curve ${role.handle}` : ''
+  return `${piece}, ${edge} at ${role.node.replaceAll('-', ' ')}${handle}`
+}
+
+/**
+ * The document after a command, and the difference. Pure; the document given stays as it is. A command that names what is
+ * not there leaves the document unchanged and gives an empty difference.
+ */
+export function applyCommand(
+  document: GarmentDocument,
+  command: Command,
+): { readonly document: GarmentDocument; readonly diff: DocumentDiff } {
+  const next = changed(document, command)
+  return { document: next, diff: { label: commandWords(command), changes: differences(document, next) } }
+}
+
+/** The same difference the other way round. */
+export function invertDiff(diff: DocumentDiff): DocumentDiff {
+  return {
+    label: diff.label,
+    changes: diff.changes.map((change) => ({ key: change.key, before: change.after, after: change.before }) as DocumentChange),
+  }
+}
+
+/** The document with a difference replayed on it. */
+export function replayDiff(document: GarmentDocument, diff: DocumentDiff): GarmentDocument {
+  return diff.changes.reduce((current, change) => ({ ...current, [change.key]: change.after }), document)
+}
+
+function changed(document: GarmentDocument, command: Command): GarmentDocument {
+  switch (command.kind) {
+    case 'choose-measuring':
+      return { ...document, measuringId: command.measuringId }
+    case 'set-state':
+      return { ...document, state: command.state }
+    case 'set-use':
+      return { ...document, use: { ...document.use, ...command.use } }
+    case 'set-layers':
+      return {
+        ...document,
+        plans:
+          command.zone === 'both' ? { front: command.layers, back: command.layers } : { ...document.plans, [command.zone]: command.layers },
+      }
+    case 'set-level':
+      return {
+        ...document,
+        levels: document.levels.map((level) =>
+          command.level === 'all' || level.level === command.level ? { ...level, ...command.patch } : level,
+        ),
+      }
+    case 'set-style':
+      return { ...document, style: { ...document.style, ...command.patch } }
+    case 'move-point':
+    case 'set-move':
+      return { ...document, alterations: moved(document.alterations, command) }
+    case 'change-alteration':
+      return {
+        ...document,
+        alterations: document.alterations.map((one) => (one.id === command.id ? { ...one, ...command.patch } : one)),
+      }
+    case 'remove-alteration':
+      return { ...document, alterations: document.alterations.filter((one) => one.id !== command.id) }
+    case 'order-alteration':
+      return { ...document, alterations: ordered(document.alterations, command.id, command.to) }
+  }
+}
+
+type MoveCommand = Extract<Command, { kind: 'move-point' | 'set-move' }>
+
+/** One alteration a point and way of carrying: a further move of the same point adds to it, an exact one replaces it. */
+function moved(alterations: readonly Alteration[], command: MoveCommand): readonly Alteration[] {
+  const standing = alterations.find((one) => one.on && one.carry === command.carry && sameRole(one.role, command.role))
+  if (standing) {
+    const base = command.kind === 'set-move' ? { dx: 0, dy: 0 } : standing
+    const dx = mm(base.dx + command.dx)
+    const dy = mm(base.dy + command.dy)
+    if (dx === 0 && dy === 0) return alterations.filter((one) => one !== standing)
+    return alterations.map((one) => (one === standing ? { ...one, dx, dy } : one))
+  }
+  if (command.dx === 0 && command.dy === 0) return alterations
+  const { id, role, dx, dy, carry } = command
+  return [...alterations, { id, kind: 'move', name: roleWords(role), role, dx, dy, carry, on: true }]
+}
+
+function ordered(alterations: readonly Alteration[], id: string, to: number): readonly Alteration[] {
+  const one = alterations.find((candidate) => candidate.id === id)
+  if (!one) return alterations
+  const rest = alterations.filter((candidate) => candidate !== one)
+  const place = Math.max(0, Math.min(rest.length, to))
+  return [...rest.slice(0, place), one, ...rest.slice(place)]
+}
+
+function differences(before: GarmentDocument, after: GarmentDocument): readonly DocumentChange[] {
+  return (Object.keys(after) as (keyof GarmentDocument)[])
+    .filter((key) => before[key] !== after[key] && JSON.stringify(before[key]) !== JSON.stringify(after[key]))
+    .map((key) => ({ key, before: before[key], after: after[key] }) as DocumentChange)
+}
+
+function commandWords(command: Command): string {
+  switch (command.kind) {
+    case 'choose-measuring':
+      return 'measuring'
+    case 'set-state':
+      return 'dry or wet'
+    case 'set-use':
+      return 'use'
+    case 'set-layers':
+      return command.zone === 'both' ? 'layers' : `layers, ${command.zone}`
+    case 'set-level':
+      return command.level === 'all' ? 'all levels' : command.level.replace('-', ' ')
+    case 'set-style':
+      return 'style'
+    case 'move-point':
+    case 'set-move':
+      return roleWords(command.role)
+    case 'change-alteration':
+      return 'alteration'
+    case 'remove-alteration':
+      return 'alteration removed'
+    case 'order-alteration':
+      return 'order of alterations'
+  }
+}

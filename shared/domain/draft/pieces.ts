@@ -162,9 +162,8 @@ export function sketchPieces(frame: Frame, style: BodiceStyle, hemHeight: number
   const rail = (xAt: (level: LevelId) => number) => railBelowBust(frame, hemHeight, xAt)
   const frontShoulder = shoulderOf(front, style)
   const backShoulder = shoulderOf(back, style)
-  const v = style.verticalFactor
-  const frontNeck = { x: front.centreX, y: front.neckCentre.y - style.necklineFrontDepth * v }
-  const backNeck = { x: back.centreX, y: back.neckCentre.y - style.necklineBackDepth * v }
+  const frontNeck = { x: front.centreX, y: front.neckCentre.y - style.necklineFrontDepth }
+  const backNeck = { x: back.centreX, y: back.neckCentre.y - style.necklineBackDepth }
   const sideFront = turnedPrincess(
     rail((level) => front.princess.x + wedges.frontPrincess(level)),
     princessAbove(front, frontShoulder),

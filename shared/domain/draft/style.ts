@@ -52,6 +52,8 @@ export function defaultStyle(): BodiceStyle {
 export const LEAST_SHOULDER = 40
 /** The neckline's lowest point stays this far above the bust level, so that the bust is gone round whole, mm. */
 export const NECKLINE_ABOVE_BUST = 15
+/** The neckline at the centre back stays this far below where it meets the shoulder, mm. */
+export const NECKLINE_BELOW_SHOULDER = 6
 /** The hem stays this far below the underbust level, mm. */
 export const HEM_BELOW_UNDERBUST = 20
 /** The lowered underarm stays this far above the bust level, mm. */
@@ -99,6 +101,8 @@ export function checkStyle(style: BodiceStyle, body: DraftBody): readonly Proble
   const neckHalf = values.neckBaseGirth / 5 - 2
   const frontDepth = (values.frontWaistLength - neckHalf) * v - bust - NECKLINE_ABOVE_BUST
   const backDepth = values.backWaistLength * v - bust - NECKLINE_ABOVE_BUST
+  const shoulderFalls = Math.sin(((values.shoulderSlope - 2) * Math.PI) / 180) * style.necklineWidth
+  const backLeast = shoulderFalls - 0.055 * values.neckBaseGirth * v + NECKLINE_BELOW_SHOULDER
   const hemLowest = heightOf('hip') - 0.6 * values.waistToHip
   const hemLevel = heightOf(style.hem.level)
   // A laced back may draw the shoulder in by at most an eighth: the milder factor at the largest reduction of a quarter.
@@ -114,7 +118,14 @@ export function checkStyle(style: BodiceStyle, body: DraftBody): readonly Proble
       ' mm',
     ),
     ...outside('necklineFrontDepth', 'The front neckline', style.necklineFrontDepth, 0, Math.max(0, frontDepth), ' mm'),
-    ...outside('necklineBackDepth', 'The back neckline', style.necklineBackDepth, 0, Math.max(0, backDepth), ' mm'),
+    ...outside(
+      'necklineBackDepth',
+      'The back neckline',
+      style.necklineBackDepth,
+      Math.max(0, backLeast),
+      Math.max(0, backLeast, backDepth),
+      ' mm',
+    ),
     ...outside('necklineWidth', 'The neckline', style.necklineWidth, 0, Math.max(0, shoulder - LEAST_SHOULDER), ' mm'),
     ...outside('princessAt', 'The princess seam', style.princessAt, 0.2, 0.8, ''),
     ...outside(

@@ -3,6 +3,7 @@ import { readFile } from 'node:fs/promises'
 import { create } from 'fontkit'
 import type { Font } from 'fontkit'
 import type { TextWeight } from '../../shared/domain/output/text-width'
+import { fontFromWoff } from './woff'
 
 /** One file of Inter: the package keeps Latin and the rest of Latin apart. */
 export interface PrintFont {
@@ -31,7 +32,7 @@ let loaded: Promise<readonly PrintFont[]> | null = null
 export function loadPrintFonts(source: FontSource = fontsFromPackage): Promise<readonly PrintFont[]> {
   loaded ??= Promise.all(
     FILES.map(async ({ name, weight, file }) => {
-      const data = Buffer.from(await source(file))
+      const data = fontFromWoff(Buffer.from(await source(file)))
       return { name, weight, data, font: create(data) as Font }
     }),
   ).catch((error: unknown) => {

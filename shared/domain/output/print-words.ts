@@ -40,8 +40,8 @@ export function cutLines(piece: Pick<DraftPiece, 'zone' | 'quantity' | 'onFold'>
   const layers = facts.layers.filter((layer) => layer.zone === piece.zone && layer.count > 0)
   const cut = layers.map((layer) => `cut ${layer.count * piece.quantity} ${layer.label.toLowerCase()}`)
   const how = piece.onFold ? 'on the fold' : piece.quantity === 2 ? 'in pairs' : ''
-  if (cut.length === 0) return [`cut ${piece.quantity}${how ? `, ${how}` : ''} of each layer`]
-  return how ? [...cut, how] : cut
+  const counted = cut.length > 0 ? cut : [`cut ${piece.quantity} of each layer`]
+  return how ? [...counted, how] : counted
 }
 
 /** The allowances drawn, by width: `1.0 cm princess, side; 2.0 cm hem`. Empty when no edge has one. */

@@ -96,7 +96,13 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
       const top = placePoint(grain.from.y > grain.to.y ? grain.from : grain.to, placement)
       write('label-small', { x: top.x + 3, y: top.y - 8 }, 'grain', textSize / 2, 'start')
       const [from, to] = [placePoint(stretch.from, placement), placePoint(stretch.to, placement)]
-      write('label-small', { x: (from.x + to.x) / 2, y: (from.y + to.y) / 2 - PULL_STROKE - 2 }, 'greatest stretch', textSize / 2, 'middle')
+      write(
+        'label-small',
+        { x: (from.x + to.x) / 2, y: (from.y + to.y) / 2 - PULL_STROKE / 2 - 1.5 - 0.36 * textSize },
+        'greatest stretch',
+        textSize / 2,
+        'middle',
+      )
     }
   }
   if (shows('labels')) {

@@ -16,13 +16,17 @@ const ADVANCES = {
 
 export type TextWeight = keyof typeof ADVANCES
 
+/** The sign between facts, narrower than most. */
+const MIDDLE_DOT = { regular: 288, semibold: 319 } as const
+
 /** Taken for a character that is not in the table. */
 const OTHER_ADVANCE = 650
 
 /** Width of a line of text set in Inter, mm, without kerning: within 3 % for plain Latin text, never used to measure a piece. */
 export function textWidth(text: string, size: number, weight: TextWeight = 'regular'): number {
   let sum = 0
-  for (const character of text) sum += ADVANCES[weight][character.codePointAt(0)! - 32] ?? OTHER_ADVANCE
+  for (const character of text)
+    sum += character === '·' ? MIDDLE_DOT[weight] : (ADVANCES[weight][character.codePointAt(0)! - 32] ?? OTHER_ADVANCE)
   return (sum / 1000) * size
 }
 

@@ -124,11 +124,13 @@ function planOne(
   const size = { width: columns * width - (columns - 1) * overlap, height: rows * height - (rows - 1) * overlap }
   const spare = { x: size.width - (drawing.right - drawing.left), y: size.height - (drawing.top - drawing.bottom) }
   const grids = SHIFTS.flatMap((sx) => SHIFTS.map((sy) => ({ left: drawing.left - spare.x * sx, top: drawing.top + spare.y * sy })))
+  const boxes = outlines.map((outline) => (outline.length > 0 ? boundsOfPoints(outline) : drawing))
   let best: { cells: readonly Omit<Tile, 'joins'>[]; grid: { left: number; top: number } } | null = null
   for (const grid of grids) {
-    const cells = cellsOf(grid, rows, columns, width, height, overlap).filter(({ cell }) =>
-      outlines.some((outline) => polygonTouches(outline, shrunk(cell))),
-    )
+    const cells = cellsOf(grid, rows, columns, width, height, overlap).filter(({ cell }) => {
+      const inner = shrunk(cell)
+      return outlines.some((outline, i) => overlaps(boxes[i]!, inner) && polygonTouches(outline, inner))
+    })
     if (!best || cells.length < best.cells.length) best = { cells, grid }
   }
   const { cells, grid } = best!
@@ -152,6 +154,8 @@ function planOne(
 
 /** Shares of the spare room left of and above the drawing, centred first. */
 const SHIFTS = [0.5, 0, 0.25, 0.75, 1]
+
+const overlaps = (a: Bounds, b: Bounds) => a.left <= b.right && a.right >= b.left && a.bottom <= b.top && a.top >= b.bottom
 
 /** A cell that the drawing only touches along its edge is blank. */
 const shrunk = ({ left, bottom, right, top }: Bounds): Bounds => ({

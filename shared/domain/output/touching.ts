@@ -4,7 +4,12 @@ import type { Bounds } from './placing'
 
 /** Whether a straight stroke has a point in a rectangle, edges counted in. Liang and Barsky's clipping. */
 export function strokeTouches(from: Point, to: Point, box: Bounds): boolean {
-  const [dx, dy] = [to.x - from.x, to.y - from.y]
+  if (from.x < box.left && to.x < box.left) return false
+  if (from.x > box.right && to.x > box.right) return false
+  if (from.y < box.bottom && to.y < box.bottom) return false
+  if (from.y > box.top && to.y > box.top) return false
+  const dx = to.x - from.x
+  const dy = to.y - from.y
   let [enter, leave] = [0, 1]
   for (const [direction, room] of [
     [-dx, from.x - box.left],

@@ -1,0 +1,67 @@
+import type { DraftPiece, EdgeId, EdgeNode, PieceEdge, PieceId, PointRole, SeamComparison } from '#shared/domain/draft/types'
+import type { Mm } from '#shared/domain/units/brand'
+import { formatLength } from '#shared/domain/units/format'
+
+export type BoardUnit = 'cm' | 'in'
+
+/** Mates count as true up to this difference, mm. */
+export const SEAM_TRUE = 0.5
+
+const PIECE_NAMES: Readonly<Record<PieceId, string>> = {
+  'front-centre': 'front centre',
+  'side-front': 'side front',
+  'side-back': 'side back',
+  'back-centre': 'back centre',
+}
+
+export const pieceName = (piece: PieceId): string => PIECE_NAMES[piece]
+
+/** An edge in the trade's words; a centre says which one. */
+export function edgeName(piece: Pick<DraftPiece, 'zone'>, edge: EdgeId): string {
+  if (edge === 'centre') return piece.zone === 'front' ? 'centre front' : 'centre back'
+  return edge === 'princess' || edge === 'side' ? `${edge} seam` : edge
+}
+
+export const nodeName = (node: string): string => node.replaceAll('-', ' ')
+
+/** `at underarm`, `curve after underarm`. */
+export function pointName(role: Pick<PointRole, 'node' | 'handle'>): string {
+  return role.handle ? `curve ${role.handle} ${nodeName(role.node)}` : nodeName(role.node)
+}
+
+export const EDGE_KIND_WORDS: Readonly<Record<PieceEdge['kind'], string>> = {
+  seam: 'seam',
+  fold: 'on the fold',
+  opening: 'opening',
+  finished: 'finished edge',
+}
+
+/** Small lengths and differences: tenths of a mm, or thousandths of an inch. */
+export const fineLength = (length: number, unit: BoardUnit): string =>
+  formatLength(length as Mm, unit === 'in' ? 'in' : 'mm', unit === 'in' ? 3 : 1)
+
+export const isTrue = (seam: Pick<SeamComparison, 'difference'>): boolean => Math.abs(seam.difference) <= SEAM_TRUE
+
+/** `true`, or `off by 1.2 mm`. */
+export const seamState = (difference: number, unit: BoardUnit): string =>
+  Math.abs(difference) <= SEAM_TRUE ? 'true' : `off by ${fineLength(Math.abs(difference), unit)}`
+
+/** `out 4.0 mm, up 1.5 mm`: a displacement in the piece's frame. */
+export function moveWords(dx: number, dy: number, unit: BoardUnit): string {
+  const parts = [
+    dx === 0 ? null : `${dx > 0 ? 'out' : 'in'} ${fineLength(Math.abs(dx), unit)}`,
+    dy === 0 ? null : `${dy > 0 ? 'up' : 'down'} ${fineLength(Math.abs(dy), unit)}`,
+  ].filter((part) => part !== null)
+  return parts.length ? parts.join(', ') : 'not moved'
+}
+
+/** Points of an edge with the handles beside them, in the order in which they lie along it. */
+export function edgePoints(edge: PieceEdge): { readonly node: EdgeNode; readonly handles: readonly ('before' | 'after')[] }[] {
+  return edge.nodes.map((node, index) => ({
+    node,
+    handles: [
+      edge.path[index - 1]?.kind === 'cubic' ? ('before' as const) : null,
+      edge.path[index]?.kind === 'cubic' ? ('after' as const) : null,
+    ].filter((handle) => handle !== null),
+  }))
+}

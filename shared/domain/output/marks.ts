@@ -34,13 +34,13 @@ export function arrowHead(from: Point, tip: Point, size: number): Path {
   return [line(along(neck, side, size * 0.4), tip), line(tip, along(neck, side, -size * 0.4))]
 }
 
-/** Three strokes across the middle of an arrow, opening outwards as cloth does when it is pulled. */
+/** Three strokes across an arrow, a quarter from its end: cloth that is ruled and pulled. The middle stays free for a grain line. */
 export function pullStrokes(from: Point, to: Point, size: number): readonly Path[] {
   const length = Math.hypot(to.x - from.x, to.y - from.y)
   if (length === 0) return []
   const ahead = { x: (to.x - from.x) / length, y: (to.y - from.y) / length }
   const side = { x: -ahead.y, y: ahead.x }
-  const middle = along(from, ahead, length / 2)
+  const middle = along(from, ahead, length * 0.75)
   return [-1, 0, 1].map((step) => {
     const centre = along(middle, ahead, step * size)
     return [line(along(centre, side, size / 2), along(centre, side, -size / 2))]

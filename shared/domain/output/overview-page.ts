@@ -204,7 +204,7 @@ function lineSample(role: DrawingRole, x: number, y: number): SheetOperation[] {
   })
   const pull =
     role === 'stretch'
-      ? [-2, 0, 2].map((at) => stroke(role, { x: x + SAMPLE / 2 + at, y: y - 1.2 }, { x: x + SAMPLE / 2 + at, y: y + 1.2 }))
+      ? [2.5, 4.5, 6.5].map((at) => stroke(role, { x: x + SAMPLE / 2 + at, y: y - 1.2 }, { x: x + SAMPLE / 2 + at, y: y + 1.2 }))
       : []
   return [line, ...heads, ...pull]
 }

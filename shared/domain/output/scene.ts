@@ -9,6 +9,7 @@ import { placePath, placePoint } from './placing'
 import { stretchTicks } from './stretch-ticks'
 import type { KeepClear } from './stretch-ticks'
 import { textWidth } from './text-width'
+import { shareInside } from './touching'
 import type { DrawingOperation, DrawingRole, Placement } from './types'
 
 /** What a drawing of a piece may show. */
@@ -71,7 +72,7 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
   }
   if (shows('levels')) {
     for (const { level, from, to } of piece.levels) {
-      draw('level', [{ kind: 'line', from, to }])
+      for (const part of besideWords({ from, to }, labels)) draw('level', [{ kind: 'line', ...part }])
       if (shows('level-names')) {
         const start = placement.mirrored === to.x > from.x ? to : from
         const at = placePoint(start, placement)
@@ -86,7 +87,7 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
   }
   if (shows('arrows')) {
     const { grain, stretch } = piece
-    for (const part of besides(grain, labels)) draw('grain', [{ kind: 'line', ...part }])
+    for (const part of besideWords(grain, labels)) draw('grain', [{ kind: 'line', ...part }])
     draw('grain', arrowHead(grain.from, grain.to, ARROW_HEAD))
     draw('grain', arrowHead(grain.to, grain.from, ARROW_HEAD))
     draw('stretch', [{ kind: 'line', from: stretch.from, to: stretch.to }])
@@ -98,7 +99,7 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
       write('label-small', { x: top.x + 3, y: top.y - 8 }, 'grain', textSize / 2, 'start')
       const size = textSize / 2
       const middle = placePoint({ x: (stretch.from.x + stretch.to.x) / 2, y: (stretch.from.y + stretch.to.y) / 2 }, placement)
-      write('label-small', { x: middle.x + 2, y: middle.y - size - 1.5 }, 'greatest stretch', size, 'start')
+      write('label-small', { x: middle.x + 2, y: middle.y - size - 2.5 }, 'greatest stretch', size, 'start')
     }
   }
   if (shows('labels')) {
@@ -143,17 +144,20 @@ function labelLines(piece: DraftPiece, lines: readonly string[], textSize: numbe
   })
 }
 
-/** The parts of an upright grain line above and below the words it would run through; the whole of it where there are none. */
-function besides({ from, to }: DraftPiece['grain'], labels: readonly LabelLine[]): { from: Point; to: Point }[] {
-  const struck = labels
-    .map((label) => label.box)
-    .filter((box) => from.x > box.left && from.x < box.right && to.x > box.left && to.x < box.right)
+/** The parts of a grain or level line before and behind the words it would run through; the whole of it where there are none. */
+function besideWords(
+  { from, to }: { readonly from: Point; readonly to: Point },
+  labels: readonly LabelLine[],
+): { from: Point; to: Point }[] {
+  const at = (t: number): Point => ({ x: from.x + (to.x - from.x) * t, y: from.y + (to.y - from.y) * t })
+  const struck = labels.flatMap(({ box }) => {
+    const share = shareInside(from, to, box)
+    return share ? [share] : []
+  })
   if (struck.length === 0) return [{ from, to }]
-  const [low, high] = from.y < to.y ? [from, to] : [to, from]
-  const at = (y: number): Point => ({ x: low.x + ((high.x - low.x) * (y - low.y)) / (high.y - low.y), y })
-  const [bottom, top] = [Math.min(...struck.map((box) => box.bottom)), Math.max(...struck.map((box) => box.top))]
-  if (bottom >= high.y || top <= low.y) return [{ from, to }]
-  return [...(bottom > low.y ? [{ from: low, to: at(bottom) }] : []), ...(top < high.y ? [{ from: at(top), to: high }] : [])]
+  const first = Math.min(...struck.map(([enter]) => enter))
+  const last = Math.max(...struck.map(([, leave]) => leave))
+  return [...(first > 0 ? [{ from, to: at(first) }] : []), ...(last < 1 ? [{ from: at(last), to }] : [])]
 }
 
 function arrowBoxes(piece: DraftPiece): KeepClear[] {

@@ -51,10 +51,15 @@ export interface Stroke {
   readonly to: Point
 }
 
-/** The strokes of a drawing, curves as chords: to set words clear of them. */
+/** The strokes of a drawing, curves as chords, words as three lines through them: to set other words clear of them. */
 export function strokesOf(drawing: readonly DrawingOperation[]): Stroke[] {
   return drawing.flatMap((operation) => {
-    if (operation.kind === 'text') return []
+    if (operation.kind === 'text') {
+      const { at, align, size, text } = operation
+      const width = textWidth(text, size, operation.role === 'label' ? 'semibold' : 'regular')
+      const left = at.x - (align === 'start' ? 0 : align === 'middle' ? width / 2 : width)
+      return [0, 0.35, 0.7].map((share) => ({ from: { x: left, y: at.y + size * share }, to: { x: left + width, y: at.y + size * share } }))
+    }
     const points = pathFlatten(operation.path, CHORD_TOLERANCE)
     return points.slice(1).map((to, i) => ({ from: points[i]!, to }))
   })

@@ -65,12 +65,22 @@ export function armholeCurve(half: HalfFrame, shoulder: Shoulder, turned: Transf
     })
   const end = transformPoint(turned, shoulderEnd)
   const middle = transformPoint(turned, across)
-  const through = vector({ x: -slope, y: -1 })
+  const drawn = vectorUnit({ x: -slope, y: -1 })
+  const through = vector(drawn)
   const leaving = vector(shoulder.down)
   const chord = pointDistance(end, middle)
   const lean = Math.max(0.2, vectorDot(leaving, through))
+  const scoop = gentlestCurve(across, drawn, underarmDrawn, { x: 1, y: 0 })
+  // Turned, the scoop's end must bend further: its handle may grow with the room that the turn leaves it.
+  const room = linesMeet(middle, through, underarm, { x: -1, y: 0 })?.alongV ?? 0
+  const endHandle = Math.max(pointDistance(scoop.c2, scoop.to), Math.min(0.22 * pointDistance(middle, underarm), 0.6 * room))
   return {
     upper: cubicSegment(end, pointAlong(end, leaving, chord * PLAIN_HANDLE * lean), pointAlong(middle, through, -chord * 0.4), middle),
-    lower: gentlestCurve(middle, through, underarm, { x: 1, y: 0 }),
+    lower: cubicSegment(
+      middle,
+      pointAlong(middle, through, pointDistance(scoop.from, scoop.c1)),
+      { x: underarm.x - endHandle, y: underarm.y },
+      underarm,
+    ),
   }
 }

@@ -1,9 +1,11 @@
 import type { LevelId } from '../body/types'
+import { pathCrossingsAtHeight } from '../geometry/crossings'
 import { pathLength } from '../geometry/path'
 import type { Point } from '../geometry/types'
 import { mm } from '../units/brand'
 import { fail, succeed } from '../units/result'
 import type { Problem, Result } from '../units/result'
+import { princessAbove, shoulderOf } from './edges'
 import { draftFrame } from './frame'
 import type { Frame } from './frame'
 import { outlineIsSound, readPiece } from './piece'
@@ -28,6 +30,9 @@ const SIDE_SEAM_MOVED = 1
 const NARROW_PIECE = 25
 /** Cloth that must lie between the centre edge and the bust point, mm. */
 const LEAST_TO_BUST_POINT = 15
+
+/** The princess seam passes at least this far inside the across point, mm. */
+const LEAST_BESIDE_ARMHOLE = 12
 
 /** Levels by the names they have in the draft's frame. */
 const levelName = (level: LevelId): string => `level-${level}`
@@ -85,6 +90,34 @@ function frameProblem(frame: Frame): Problem | null {
     }
   }
   return null
+}
+
+/** How far the princess seam passes inside the across point, the nearer of front and back, mm. */
+function princessInsideAcross(frame: Frame, style: BodiceStyle): number {
+  return Math.min(
+    ...[frame.front, frame.back].map((half) => {
+      const seam = pathCrossingsAtHeight([princessAbove(half, shoulderOf(half, style))], half.across.y)[0]
+      return seam === undefined ? Infinity : half.across.x - seam.x
+    }),
+  )
+}
+
+function princessProblem(frame: Frame, style: BodiceStyle): Problem | null {
+  if (princessInsideAcross(frame, style) >= LEAST_BESIDE_ARMHOLE) return null
+  const works = (share: number) => princessInsideAcross(frame, { ...style, princessAt: share }) >= LEAST_BESIDE_ARMHOLE
+  const nearest = Array.from(
+    { length: Math.round(style.princessAt * 100) - 20 },
+    (_, step) => Math.round(style.princessAt * 100 - step - 1) / 100,
+  ).find(works)
+  return {
+    code: 'princess-near-armhole',
+    message: `The princess seam would pass nearer than ${LEAST_BESIDE_ARMHOLE} mm to the armhole.`,
+    todo:
+      nearest === undefined
+        ? 'No place on the shoulder works: measure across front and across back again, or ask for a lighter hold at the bust.'
+        : `Let it meet the shoulder nearer to the neck: the nearest share that works is ${nearest}.`,
+    at: 'style.princessAt',
+  }
 }
 
 function hemHeightOf(frame: Frame, style: BodiceStyle): number {
@@ -168,7 +201,7 @@ export function draftBodice(input: DraftInput): Result<Draft> {
   const problem = checkStyle(style, body)[0] ?? widthProblem(input)
   if (problem !== null) return fail(problem)
   const frame = draftFrame(input)
-  const wrong = frameProblem(frame)
+  const wrong = frameProblem(frame) ?? princessProblem(frame, style)
   if (wrong !== null) return fail(wrong)
   const sketches = sketchPieces(frame, style, hemHeightOf(frame, style))
   const crossed = sketches.find((piece) => !outlineIsSound(piece.edges))

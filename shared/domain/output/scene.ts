@@ -81,7 +81,10 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
     }
   }
   if (shows('cutting')) for (const run of cuttingRuns(piece)) draw('cutting-line', run.path, run.closed)
-  if (shows('seam')) for (const run of edgeRuns(piece)) draw(run.role, run.path, run.closed)
+  if (shows('seam')) {
+    for (const run of edgeRuns(piece))
+      draw(run.role, run.role === 'fold' && shows('cutting') ? foldToCutting(piece, run.path) : run.path, run.closed)
+  }
   if (shows('notches')) {
     for (const edge of piece.edges) for (const notch of edge.notches) for (const stroke of notchStrokes(notch, edge)) draw('notch', stroke)
   }
@@ -187,10 +190,10 @@ function edgeRuns(piece: DraftPiece): { role: 'fold' | 'seam-line'; path: Path; 
 
 /** The cutting line without the strokes that lie on a fold. */
 function cuttingRuns(piece: DraftPiece): { path: Path; closed: boolean }[] {
-  const folds = piece.edges.filter((edge) => edge.kind === 'fold').map((edge) => pointsAlong(edge.path))
+  const folds = foldsOf(piece)
   const points = piece.cuttingLine
   const strokes = points.map((from, i) => ({ from, to: points[(i + 1) % points.length]! }))
-  const onFold = strokes.map(({ from, to }) => folds.some((fold) => distanceTo(fold, from) < ON_FOLD && distanceTo(fold, to) < ON_FOLD))
+  const onFold = strokes.map(({ from, to }) => folds.some((fold) => liesAlong(fold, from) && liesAlong(fold, to)))
   const start = onFold.indexOf(true)
   if (start < 0) return [{ path: strokes.map((stroke) => ({ kind: 'line', ...stroke })), closed: true }]
   const runs: { path: Path; closed: boolean }[] = []
@@ -206,15 +209,29 @@ function cuttingRuns(piece: DraftPiece): { path: Path; closed: boolean }[] {
   return runs
 }
 
-function distanceTo(polyline: readonly Point[], point: Point): number {
-  let least = Infinity
-  for (let i = 1; i < polyline.length; i += 1) {
-    const [from, to] = [polyline[i - 1]!, polyline[i]!]
-    const [dx, dy] = [to.x - from.x, to.y - from.y]
-    const t = Math.min(1, Math.max(0, ((point.x - from.x) * dx + (point.y - from.y) * dy) / Math.max(dx * dx + dy * dy, 1e-12)))
-    least = Math.min(least, Math.hypot(from.x + t * dx - point.x, from.y + t * dy - point.y))
-  }
-  return least
+/** A fold is straight: its two ends. */
+function foldsOf(piece: DraftPiece): { from: Point; to: Point }[] {
+  return piece.edges
+    .filter((edge) => edge.kind === 'fold')
+    .map(({ path }) => {
+      const points = pointsAlong(path)
+      return { from: points[0]!, to: points[points.length - 1]! }
+    })
+}
+
+/** Whether a point lies on the line of a fold, its run through the allowances at both ends counted in. */
+function liesAlong({ from, to }: { from: Point; to: Point }, point: Point): boolean {
+  const length = Math.hypot(to.x - from.x, to.y - from.y)
+  return Math.abs((to.x - from.x) * (point.y - from.y) - (to.y - from.y) * (point.x - from.x)) / length < ON_FOLD
+}
+
+/** A fold as the cloth is laid: run on through the allowances to the cutting line. */
+function foldToCutting(piece: DraftPiece, path: Path): Path {
+  const points = pointsAlong(path)
+  const fold = { from: points[0]!, to: points[points.length - 1]! }
+  const along = ({ x, y }: Point) => (x - fold.from.x) * (fold.to.x - fold.from.x) + (y - fold.from.y) * (fold.to.y - fold.from.y)
+  const on = [fold.from, fold.to, ...piece.cuttingLine.filter((point) => liesAlong(fold, point))].sort((a, b) => along(a) - along(b))
+  return [{ kind: 'line', from: on[0]!, to: on[on.length - 1]! }]
 }
 
 /** A point of the fold two thirds up, clear of the level lines' names. */

@@ -23,7 +23,10 @@ describe('drawing operations of a piece', () => {
     const operations = pieceOperations(at('front-centre'), flat('front-centre'))
     const fold = ofRole(operations, 'fold')
     expect(fold).toHaveLength(1)
-    expect(ends(fold[0]!)).toEqual({ from: { x: 0, y: 262 }, to: { x: 0, y: -150 } })
+    const run = ends(fold[0]!)!
+    expect([run.from.x, run.from.y, run.to.x, run.to.y].map((each) => Math.round(each * 100) / 100)).toEqual([0, 268, 0, -170])
+    const seamOnly = ofRole(pieceOperations(at('front-centre'), flat('front-centre'), { show: { cutting: false } }), 'fold')
+    expect(ends(seamOnly[0]!)).toEqual({ from: { x: 0, y: 262 }, to: { x: 0, y: -150 } })
     const [seam] = ofRole(operations, 'seam-line')
     expect(ends(seam!)).toEqual({ from: { x: 0, y: -150 }, to: { x: 0, y: 262 } })
     const cutting = ofRole(operations, 'cutting-line')

@@ -19,6 +19,11 @@ const mayImport = {
   output: [...rooms.filter((room) => room !== 'output'), 'cautions'],
 }
 
+const forbidden = (room, allowed) => {
+  const group = [...rooms, 'cautions'].filter((other) => other !== room && !allowed.includes(other)).map((other) => `**/${other}/**`)
+  return group.length > 0 ? [{ group, message: `domain/${room} may not import this room.` }] : []
+}
+
 const domainRules = Object.entries(mayImport).map(([room, allowed]) => ({
   files: [`shared/domain/${room}/**/*.ts`],
   rules: {
@@ -26,10 +31,7 @@ const domainRules = Object.entries(mayImport).map(([room, allowed]) => ({
       'error',
       {
         patterns: [
-          {
-            group: [...rooms, 'cautions'].filter((other) => other !== room && !allowed.includes(other)).map((other) => `**/${other}/**`),
-            message: `domain/${room} may not import this room.`,
-          },
+          ...forbidden(room, allowed),
           { group: ['vue', 'vue/*', 'h3', 'node:*', '#imports', '~/*', '@/*', 'konva', 'pg', 'kysely'], message: 'The domain is pure.' },
         ],
       },

@@ -1,18 +1,73 @@
-import type { AlterationEffect } from '../draft/alterations'
+import { checkMeasuring } from '../body/plausibility'
+import { isFlagged, wearerCautions } from '../body/wearer'
+import { cautions, orderCautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
+import type { AlterationEffect } from '../draft/alterations'
+import { textileCautions } from '../textile/cautions'
+import type { LayerCloth } from '../textile/types'
+import { mm, pascal } from '../units/brand'
 import { draftCautions } from './draft-cautions'
 import type { GarmentInput, GarmentSolution } from './types'
 
+const MILLISECONDS_PER_DAY = 86_400_000
+
+/** Whole days from one ISO date to another. */
+const daysBetween = (from: string, to: string): number =>
+  Math.floor((Date.parse(to.slice(0, 10)) - Date.parse(from.slice(0, 10))) / MILLISECONDS_PER_DAY)
+
+/** Directions of the cloths in use, in the state in which each is used where it was tested so. */
+function directionsUsed(input: GarmentInput, solution: Pick<GarmentSolution, 'plans'>): readonly LayerCloth[] {
+  const used = new Set(solution.plans.flatMap((plan) => plan.layers.map((layer) => layer.cloth.clothId)))
+  return input.cloths.filter((cloth) => used.has(cloth.id)).flatMap((cloth) => cloth.directions)
+}
+
+function openingCautions(input: GarmentInput): readonly Caution[] {
+  const { style, use } = input.document
+  const place = { kind: 'garment' } as const
+  if (style.centreFront === 'lacing') return []
+  if (style.centreBack !== 'lacing') return [cautions.noOpening(place, {})]
+  return [cautions.cannotLeaveAlone(place, { because: use.water ? 'water' : input.wearer.child ? 'child' : null })]
+}
+
+/** Every caution of a solved garment, stops first: body, wearer, cloth and rings, draft, openings. */
 export function garmentCautions(
   input: GarmentInput,
   solution: Omit<GarmentSolution, 'cautions'>,
   effects: readonly AlterationEffect[],
 ): readonly Caution[] {
-  return draftCautions({
-    draft: solution.draft,
-    alterations: input.document.alterations,
-    effects,
-    settled: solution.settled,
-    rounds: solution.rounds,
-  })
+  const { document, wearer, settings, today } = input
+  const judged = solution.rings.map((ring, index) => ({
+    geometry: solution.ringInputs[index]!,
+    solution: ring,
+    asked: document.levels.find((level) => level.level === ring.level)?.hold ?? pascal(0),
+  }))
+  const worn = solution.rings.map((ring) => ({
+    level: ring.level,
+    name: ring.name,
+    upperAtRest: pascal(ring.pressureBand.high),
+    upperInBreath: pascal(ring.breathBand.high),
+    rigid: mm(ring.rigidFront + ring.rigidBack),
+  }))
+  return orderCautions([
+    ...checkMeasuring(input.measured, null, { child: wearer.child }),
+    ...wearerCautions(wearer, worn, input.measuredOn === null ? null : daysBetween(input.measuredOn, today)),
+    ...openingCautions(input),
+    ...textileCautions({
+      rings: judged,
+      plans: solution.plans,
+      directions: directionsUsed(input, solution),
+      state: document.state,
+      use: document.use,
+      flagged: isFlagged(wearer),
+      settings,
+      today,
+    }),
+    ...draftCautions({
+      draft: solution.draft,
+      alterations: document.alterations,
+      effects,
+      settled: solution.settled,
+      rounds: solution.rounds,
+    }),
+  ])
 }

@@ -91,48 +91,60 @@ export function strokeRole(pen: Pen, view: BoardView, operations: readonly Drawi
 }
 
 /** Labels keep a readable size at any zoom and clear a little cloth round them. */
-const NAME_PX = { least: 12, most: 13 }
+const NAME_PX = { least: 12, most: 12 }
 const SMALL_PX = { least: 10.5, most: 11.5 }
 /** A name that does not fit its piece stands this far under it, px. */
 const NAME_UNDER = 15
 
-/** Names of pieces always, under the piece where they do not fit in it; smaller words only where they lie clear of the outline. */
-export function writeLabels(
-  pen: Pen,
-  view: BoardView,
-  operations: readonly DrawingOperation[],
-  palette: BoardPalette,
-  ground: string,
-  outline: readonly Point[],
-  bounds: Bounds,
-) {
+/** A piece as it is labelled: its operations, its outline as points of the plane, its bounds with the allowance. */
+export interface LabelledPiece {
+  readonly operations: readonly DrawingOperation[]
+  readonly points: readonly Point[]
+  readonly bounds: Bounds
+}
+
+type Text = Extract<DrawingOperation, { kind: 'text' }>
+
+/** Sets the pen to the size of a text, one step smaller where it would touch the outline, and says where it then lies, px. */
+function layText(pen: Pen, view: BoardView, operation: Text, outline: readonly Point[]) {
+  const name = operation.role === 'label'
+  const limits = name ? NAME_PX : SMALL_PX
+  const wished = Math.min(Math.max(operation.size * view.scale, limits.least), limits.most)
+  const at = toScreen(view, operation.at)
+  const lay = (px: number) => {
+    pen.font = `${name ? 600 : 400} ${px}px Inter, system-ui, sans-serif`
+    const width = pen.measureText(operation.text).width
+    const left = operation.align === 'middle' ? at.x - width / 2 : operation.align === 'end' ? at.x - width : at.x
+    const heights = [0, 0.4, 0.75].map((part) => operation.at.y + (part * px) / view.scale)
+    const clear = heights.every((height) => isClear(view, outline, height, left - 3, left + width + 3))
+    return { px, width, left, y: at.y, clear }
+  }
+  const first = lay(wished)
+  return first.clear ? first : lay(limits.least)
+}
+
+/**
+ * Names of pieces always: in the pieces where all of them fit, else under them. Smaller words only where they lie clear of the outline.
+ */
+export function writeLabels(pen: Pen, view: BoardView, pieces: readonly LabelledPiece[], palette: BoardPalette, ground: string) {
   pen.textBaseline = 'alphabetic'
   pen.textAlign = 'left'
-  for (const operation of operations) {
-    if (operation.kind !== 'text') continue
-    const name = operation.role === 'label'
-    const limits = name ? NAME_PX : SMALL_PX
-    const wished = Math.min(Math.max(operation.size * view.scale, limits.least), limits.most)
-    const at = toScreen(view, operation.at)
-    const lay = (px: number) => {
-      pen.font = `${name ? 600 : 400} ${px}px Inter, system-ui, sans-serif`
-      const width = pen.measureText(operation.text).width
-      const left = operation.align === 'middle' ? at.x - width / 2 : operation.align === 'end' ? at.x - width : at.x
-      return { px, width, left, clear: isClear(view, outline, operation.at.y, left - 2, left + width + 2) }
-    }
-    const first = lay(wished)
-    const { px, width, left, clear } = first.clear ? first : lay(limits.least)
-    if (!clear && !name) continue
-    if (!clear) {
+  const texts = pieces.flatMap(({ operations, points, bounds }) =>
+    operations.flatMap((operation) => (operation.kind === 'text' ? [{ operation, points, bounds }] : [])),
+  )
+  const inside = texts.every(({ operation, points }) => operation.role !== 'label' || layText(pen, view, operation, points).clear)
+  for (const { operation, points, bounds } of texts) {
+    const { px, width, left, y, clear } = layText(pen, view, operation, points)
+    if (operation.role === 'label' && !inside) {
       const under = toScreen(view, { x: (bounds.left + bounds.right) / 2, y: bounds.bottom })
       pen.fillStyle = palette.oakgall
       pen.fillText(operation.text, under.x - width / 2, under.y + NAME_UNDER)
-      continue
+    } else if (clear) {
+      pen.fillStyle = ground
+      pen.fillRect(left - 2, y - px * 0.95, width + 4, px * 1.25)
+      pen.fillStyle = operation.role === 'label' ? palette.oakgall : palette.walnut
+      pen.fillText(operation.text, left, y)
     }
-    pen.fillStyle = ground
-    pen.fillRect(left - 3, at.y - px * 0.95, width + 6, px * 1.25)
-    pen.fillStyle = name ? palette.oakgall : palette.walnut
-    pen.fillText(operation.text, left, at.y)
   }
 }
 

@@ -1,4 +1,3 @@
-import { nnls } from 'nnls'
 import type { Strain } from '../units/brand'
 import { newtonPerMetre, strain } from '../units/brand'
 import type { Result } from '../units/result'
@@ -20,6 +19,9 @@ export const FEW_SPECIMENS_SPREAD = 0.15
 /** Shares of the common tested range at which the spread is read. */
 const SPREAD_AT = [0.25, 0.5, 0.75, 1] as const
 
+/** Readings whose strains are this much alike count as one step, from which only a straight line follows. */
+const ONE_STEP = 1e-9
+
 const rootMeanSquare = (values: readonly number[]): number =>
   Math.sqrt(values.reduce((sum, value) => sum + value * value, 0) / values.length)
 
@@ -38,22 +40,28 @@ export function assumedCurve(stretch: Strain): LoadCurve {
   }
 }
 
+/**
+ * a, b >= 0 of the least squares through the origin. With two unknowns every active set can be tried: both free, else the better of a alone
+ * and b alone. Exact on any readings, where an iterative solver may go round in circles on rounding.
+ */
 function cubicFit(points: readonly TestPoint[]): { readonly a: number; readonly b: number } {
   const longest = Math.max(...points.map((point) => point.strain))
-  const largest = Math.max(...points.map((point) => point.tension))
-  const steps = new Set(points.map((point) => Math.round((point.strain / longest) * 1e9)))
-  if (steps.size === 1) {
-    const top = points.reduce((sum, point) => sum + point.strain * point.tension, 0)
-    return { a: top / points.reduce((sum, point) => sum + point.strain * point.strain, 0), b: 0 }
+  let [xx, xy, yy, xt, yt] = [0, 0, 0, 0, 0]
+  for (const point of points) {
+    const x = point.strain / longest
+    const y = x ** 3
+    xx += x * x
+    xy += x * y
+    yy += y * y
+    xt += x * point.tension
+    yt += y * point.tension
   }
-  const { x } = nnls(
-    points.map((point) => [point.strain / longest, (point.strain / longest) ** 3]),
-    points.map((point) => point.tension / largest),
-    { maxIterations: 50 },
-  )
-  const a = (Math.max(0, x.get(0, 0)) * largest) / longest
-  const b = (Math.max(0, x.get(1, 0)) * largest) / longest ** 3
-  return { a, b }
+  const determinant = xx * yy - xy * xy
+  const a = (yy * xt - xy * yt) / determinant
+  const b = (xx * yt - xy * xt) / determinant
+  if (determinant > ONE_STEP * xx * yy && a >= 0 && b >= 0) return { a: a / longest, b: b / longest ** 3 }
+  const linear = determinant <= ONE_STEP * xx * yy || (xt * xt) / xx >= (yt * yt) / yy
+  return linear ? { a: xt / xx / longest, b: 0 } : { a: 0, b: yt / yy / longest ** 3 }
 }
 
 const bySpecimen = (points: readonly TestPoint[]): readonly (readonly TestPoint[])[] => {

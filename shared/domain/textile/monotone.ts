@@ -70,6 +70,9 @@ export function monotoneSlope(curve: MonotoneCurve, strain: number): number {
   return (6 * s * t * (tensions[i + 1]! - tensions[i]!)) / h + s * (1 - 3 * t) * slopes[i]! + t * (3 * t - 2) * slopes[i + 1]!
 }
 
+/** Neighbours that rise by less of the largest tension count as flat and are pooled. */
+const LEAST_RISE = 1e-4
+
 /**
  * Brings points in order of strain to knots that rise strictly in both, the origin first: neighbours that fall are pooled to their mean
  * (pool adjacent violators), equal strains likewise.
@@ -77,12 +80,13 @@ export function monotoneSlope(curve: MonotoneCurve, strain: number): number {
 export function risingKnots(
   points: readonly { readonly strain: number; readonly tension: number }[],
 ): readonly { readonly strain: number; readonly tension: number }[] {
+  const flat = LEAST_RISE * Math.max(0, ...points.map((point) => point.tension))
   const pools: { strain: number; tension: number; count: number }[] = []
   for (const point of [...points].sort((one, other) => one.strain - other.strain)) {
     let pool = { ...point, count: 1 }
     while (pools.length > 0) {
       const before = pools[pools.length - 1]!
-      if (before.tension < pool.tension && before.strain < pool.strain) break
+      if (pool.tension - before.tension > flat && before.strain < pool.strain) break
       pools.pop()
       const count = before.count + pool.count
       pool = {
@@ -91,7 +95,7 @@ export function risingKnots(
         count,
       }
     }
-    if (pool.strain > 0 && pool.tension > 0) pools.push(pool)
+    if (pool.strain > 0 && pool.tension > flat) pools.push(pool)
   }
   return [{ strain: 0, tension: 0 }, ...pools.map(({ strain, tension }) => ({ strain, tension }))]
 }

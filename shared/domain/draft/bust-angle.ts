@@ -1,5 +1,5 @@
-import { pathLength, pathSplitAt, pathStart, pathStartTangent, pathTransform } from '../geometry/path'
-import { pointAlong, pointSubtract, pointTurn, vectorLength } from '../geometry/point'
+import { pathLength, pathPointAt, pathSplitAt, pathStart, pathStartTangent, pathTransform } from '../geometry/path'
+import { pointAdd, pointAlong, pointSubtract, pointTurn, vectorLength, vectorUnit } from '../geometry/point'
 import { cubicSegment } from '../geometry/segment'
 import { moveBy, transformThen, turnAbout } from '../geometry/transform'
 import type { Transform } from '../geometry/transform'
@@ -97,6 +97,8 @@ export function bustAngle(input: {
 
 /** Length of seam over which the corner at the bust is faired, on each side of the bust point, mm. */
 export const FAIRING = 40
+/** Handle at the bust point as a share of that length: short enough that the edge grows by at most .6 mm at 35°. */
+const FAIRING_HANDLE = 0.26
 
 /** The side piece's princess edge above and below the bust, both read from the bust point outwards. */
 export interface FairedEdge {
@@ -116,7 +118,17 @@ function faired(path: Path, from: Point, direction: Point): Path {
   const rest = pathSplitAt(path, reach)[1]
   const to = pathStart(rest)
   const handle = reach / 3
-  return [cubicSegment(from, pointAlong(from, direction, handle), pointAlong(to, pathStartTangent(rest), -handle), to), ...rest]
+  return [
+    cubicSegment(from, pointAlong(from, direction, reach * FAIRING_HANDLE), pointAlong(to, pathStartTangent(rest), -handle), to),
+    ...rest,
+  ]
+}
+
+/** Direction through the corner: half-way between where the seam comes from and goes to over the faired stretches. */
+function cornerBisector(bust: BustAngle, up: Path, down: Path): Point {
+  const below = vectorUnit(pointSubtract(bust.bustPoint, pathPointAt(down, FAIRING)))
+  const above = vectorUnit(pointSubtract(bust.turn(pathPointAt(up, FAIRING)), bust.bustPoint))
+  return vectorUnit(pointAdd(below, above))
 }
 
 /**
@@ -127,7 +139,7 @@ function faired(path: Path, from: Point, direction: Point): Path {
 export function fairBustCorner(bust: BustAngle, up: Path, down: Path): FairedEdge {
   const turn = turnAbout(bust.bustPoint, -bust.angle)
   if (bust.angle === 0) return { up, down, turned: turn, excess: 0 }
-  const bisector = pointTurn({ x: 0, y: 1 }, { x: 0, y: 0 }, -bust.angle / 2)
+  const bisector = cornerBisector(bust, up, down)
   const seam = pointTurn({ x: 0, y: 1 }, { x: 0, y: 0 }, -bust.angle)
   const fairedDown = faired(down, bust.bustPoint, { x: -bisector.x, y: -bisector.y })
   const asked = pathLength(up) + pathLength(down)

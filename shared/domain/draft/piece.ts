@@ -2,10 +2,11 @@ import type { LevelId } from '../body/types'
 import { pathCrossingsAtHeight } from '../geometry/crossings'
 import { outlineOffset } from '../geometry/offset'
 import { pathFlatten } from '../geometry/path'
-import { pointDistance } from '../geometry/point'
+import { pointAlong, pointDistance } from '../geometry/point'
 import { polygonArea, polygonIsSimple } from '../geometry/polygon'
 import type { Polygon } from '../geometry/polygon'
-import type { Point } from '../geometry/types'
+import { segmentTangentAt } from '../geometry/segment'
+import type { Path, Point } from '../geometry/types'
 import { mm } from '../units/brand'
 import type { DraftPiece, EdgeId, PieceEdge, PieceId } from './types'
 
@@ -54,9 +55,20 @@ export function outlineIsSound(edges: readonly PieceEdge[]): boolean {
   return polygonArea(outline) > 0 && polygonIsSimple(outline)
 }
 
+/** An edge's line starts and ends along its own tangents for this long, mm, so that corners are mitred square to the true curve. */
+const TRUE_END = 0.3
+
+function pointsWithTrueEnds(path: Path): readonly Point[] {
+  const points = pathFlatten(path)
+  const [first, last] = [path[0], path.at(-1)]
+  const start = first?.kind === 'cubic' ? [pointAlong(first.from, segmentTangentAt(first, 0), TRUE_END)] : []
+  const end = last?.kind === 'cubic' ? [pointAlong(last.to, segmentTangentAt(last, 1), -TRUE_END)] : []
+  return [...points.slice(0, 1), ...start, ...points.slice(1, -1), ...end, ...points.slice(-1)]
+}
+
 /** The cutting line: each edge outwards by its own allowance, corners mitred, folds left. */
 export function cuttingLineOf(edges: readonly PieceEdge[]): readonly Point[] {
-  return outlineOffset(edges.map((edge) => ({ points: pathFlatten(edge.path), allowance: edge.allowance }))) ?? []
+  return outlineOffset(edges.map((edge) => ({ points: pointsWithTrueEnds(edge.path), allowance: edge.allowance }))) ?? []
 }
 
 function middleAt(edges: readonly PieceEdge[], id: PieceId, y: number): { readonly x: number; readonly width: number } | null {

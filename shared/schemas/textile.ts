@@ -126,6 +126,7 @@ export const ringSolution = mirrors<RingSolution>()(
     cutBand: interval,
     band: z.enum(['light', 'easy', 'firm', 'strong', 'stop']),
     breathPressure: pressure(),
+    breathBand: interval,
     sidePressure: pressure(),
     frontPressure: pressure(),
     governs: z.enum(['hold', 'stretch', 'reduction']).nullable(),

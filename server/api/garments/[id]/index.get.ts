@@ -1,0 +1,4 @@
+import { getGarment } from '../../../services/garments'
+import { handle } from '../../../utils/handle'
+
+export default handle('garments.get', ({ room, id }) => getGarment(room, id))

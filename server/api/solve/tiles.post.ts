@@ -1,0 +1,4 @@
+import { tilesOfPieces } from '../../services/print'
+import { handle } from '../../utils/handle'
+
+export default handle('solve.tiles', ({ body }) => tilesOfPieces(body))

@@ -29,12 +29,15 @@ export const orderCautions = (found: readonly Caution[]): readonly Caution[] =>
 export const stopsOf = (found: readonly Caution[]): readonly Caution[] => found.filter((caution) => caution.severity === 'stop')
 
 /**
- * A caution as a maker may read it: the maker's words alone; what speaks of the wearer's body or health loses its code, figure, limit, source
- * and place.
+ * A caution as a maker may read it: the maker's words alone, without pressures (with a pull they would give the girth away); what speaks of
+ * the wearer's body or health loses its code, figure, limit, source and place too.
  */
 export function cautionForMaker(caution: Caution): Caution {
   const known = CAUTION_REGISTRY.get(caution.code)
-  if (known && !known.private) return { ...caution, message: caution.makerMessage }
+  if (known && !known.private) {
+    const pressure = caution.figure?.unit === 'Pa'
+    return { ...caution, message: caution.makerMessage, figure: pressure ? null : caution.figure, limit: pressure ? null : caution.limit }
+  }
   return {
     ...caution,
     code: 'wearer-limit',

@@ -61,4 +61,5 @@ export const cordsNearChildren = defineCaution<Record<string, never>>('cords-nea
   source:
     'EN 14682 by a market authority’s page (read); the standard leaves out dancewear and theatrical costume, not swimwear; local law decides',
   todo: 'Close it without a cord, or sew its ends in.',
+  private: true,
 })

@@ -64,13 +64,14 @@ export const BUST_ANGLE_MOST = 42
 
 function outside(at: string, what: string, value: number, low: number, high: number, unit: string): readonly Problem[] {
   if (Number.isFinite(value) && value >= low && value <= high) return []
-  const nearest = Number.isFinite(value) ? Math.min(high, Math.max(low, value)) : low
-  const shown = unit === '' ? nearest.toFixed(2) : (Math.round(nearest * 10) / 10).toString()
+  // Shown rounded inwards, so that the value on the screen works itself.
+  const steps = unit === '' ? 100 : 10
+  const nearest = value > high ? Math.floor(high * steps + 1e-6) / steps : Math.ceil(low * steps - 1e-6) / steps
   return [
     {
-      code: `style-${at.replaceAll('.', '-').toLowerCase()}`,
+      code: `style-${at.replaceAll('.', '-').replaceAll(/[A-Z]/g, (letter) => `-${letter.toLowerCase()}`)}`,
       message: `${what} cannot be drafted at ${Number.isFinite(value) ? value : 'no number'}${unit}.`,
-      todo: `The nearest value that works is ${shown}${unit}.`,
+      todo: `The nearest value that works is ${nearest}${unit}.`,
       at: `style.${at}`,
     },
   ]

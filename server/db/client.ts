@@ -18,10 +18,15 @@ export function createDatabase(url: string, connections = 12): Database {
   })
 }
 
+/** From here to its end the transaction sees the rows of one workroom alone. */
+export async function enterWorkroom(trx: Work, workroom: string): Promise<void> {
+  await sql`select set_config('tenterframe.workroom', ${workroom}, true)`.execute(trx)
+}
+
 /** Runs work in a transaction that sees the rows of one workroom alone. */
 export function inWorkroom<T>(db: Database, workroom: string, work: (trx: Work) => Promise<T>): Promise<T> {
   return db.transaction().execute(async (trx) => {
-    await sql`select set_config('tenterframe.workroom', ${workroom}, true)`.execute(trx)
+    await enterWorkroom(trx, workroom)
     return work(trx)
   })
 }

@@ -64,8 +64,8 @@ export interface WornRing {
   readonly rigid: Mm
 }
 
-/** Rounding allowed above a cap, Pa: the cut is solved to meet it exactly. */
-const CAP_TOLERANCE = 0.5
+/** Part of a cap that a ring may pass it by: the cut is solved to meet the cap, and the widths on the pieces settle within .5 % of the tension. */
+const CAP_TOLERANCE = 0.005
 
 /** Stops and cautions of a wearer's limits on the rings of a garment. `measuringDays`: age of the measuring, null when not known. */
 export function wearerCautions(flags: WearerFlags, rings: readonly WornRing[], measuringDays: number | null): readonly Caution[] {
@@ -85,10 +85,10 @@ export function wearerCautions(flags: WearerFlags, rings: readonly WornRing[], m
     const limits = wearerLimits(flags, ring.level)
     if (limits.cap !== null) {
       const why = limits.why.join(', ')
-      if (ring.upperAtRest > limits.cap + CAP_TOLERANCE) {
+      if (ring.upperAtRest > limits.cap * (1 + CAP_TOLERANCE)) {
         found.push(cautions.wearerCapAtRest(place, { ring: ring.name, pressure: ring.upperAtRest, limit: limits.cap, why }))
       }
-      if (ring.upperInBreath > limits.cap + CAP_TOLERANCE) {
+      if (ring.upperInBreath > limits.cap * (1 + CAP_TOLERANCE)) {
         found.push(cautions.wearerCapInBreath(place, { ring: ring.name, pressure: ring.upperInBreath, limit: limits.cap, why }))
       }
     }

@@ -43,6 +43,19 @@ export const wearerCapInBreath = defineCaution<CapFacts>('wearer-cap-in-breath',
   private: true,
 })
 
+/** The hold asked for was lowered to a wearer's cap before the cut was solved. */
+export const holdLowered = defineCaution<{ readonly ring: string; readonly hold: Pascal; readonly asked: Pascal }>('hold-lowered', {
+  severity: 'note',
+  message: ({ ring, hold, asked }) =>
+    `${ring}: the hold asked for, ${formatPressure(asked)}, was lowered to ${formatPressure(hold)} for this wearer’s limit.`,
+  maker: MAKER,
+  figure: ({ hold }) => pa(hold),
+  limit: ({ asked }) => pa(asked),
+  source: PRACTICE,
+  todo: 'Leave it; the upper end of the hold now meets the limit, at a deep breath too.',
+  private: true,
+})
+
 /** A flagged wearer without the recorded agreement of a licensed practitioner. */
 export const wearerNotAgreed = defineCaution<{ readonly why: string }>('wearer-not-agreed', {
   severity: 'stop',

@@ -25,6 +25,8 @@ export const GAP_UNEVEN = mm(15)
 /** What keeps a garment up, judged on the mean, Pa. An assumption, a setting. */
 export const KEEPS_UP = { straps: pascal(400), topEdge: pascal(600), strapless: pascal(1300) } as const
 
+/** Part by which a hold has to be lower than the one asked for to be told as lowered. */
+const LOWERED = 1e-3
 const ABOVE = 1 + 1e-9
 const DAYS_PER_MONTH = 30.44
 
@@ -60,6 +62,9 @@ export function ringCautions({ geometry, solution, asked }: JudgedRing): readonl
   if (band === 'firm' || band === 'strong' || band === 'stop') {
     const limit = band === 'firm' ? BAND_LIMITS.easy : band === 'strong' ? BAND_LIMITS.firm : BAND_LIMITS.strong
     found.push(cautions.holdHigh(place, { ring, pressure: upper, limit, band }))
+  }
+  if (solution.hold !== null && solution.hold < asked * (1 - LOWERED)) {
+    found.push(cautions.holdLowered(place, { ring, hold: solution.hold, asked }))
   }
   if ((solution.governs === 'stretch' || solution.governs === 'reduction') && solution.pressure < asked) {
     found.push(cautions.holdNotReached(place, { ring, pressure: solution.pressure, asked, governs: solution.governs }))

@@ -3,7 +3,9 @@ import { pascal } from '../units/brand'
 import { solveRing } from './ring'
 import type { RingGeometry, TextileSettings } from './types'
 
-const HALVINGS = 40
+/** How near the upper end comes to the cap, and the hold to the one that meets it, Pa. Always from below. */
+const TOLERANCE = 1e-3
+const MOST_STEPS = 60
 
 /** Upper end of the pressure a ring puts on its wearer when cut for a hold: at rest or at a deep breath, whichever is more, Pa. Null where the ring has no solution. */
 export function upperPressure(geometry: RingGeometry, hold: Pascal, settings: TextileSettings): Pascal | null {
@@ -17,17 +19,24 @@ export function upperPressure(geometry: RingGeometry, hold: Pascal, settings: Te
  */
 export function cappedHold(hold: Pascal, cap: Pascal | null, geometry: RingGeometry, settings: TextileSettings): Pascal {
   if (cap === null) return hold
-  const passes = (asked: number): boolean => {
-    const upper = upperPressure(geometry, pascal(asked), settings)
-    return upper === null || upper <= cap
-  }
-  if (passes(hold)) return hold
-  let low = 0
+  const over = (asked: number): number => (upperPressure(geometry, pascal(asked), settings) ?? 0) - cap
   let high: number = hold
-  for (let i = 0; i < HALVINGS && high - low > 1e-6; i++) {
-    const middle = (low + high) / 2
-    if (passes(middle)) low = middle
-    else high = middle
+  let overHigh = over(high)
+  if (overHigh <= 0) return hold
+  let low = 0
+  let overLow = over(low)
+  if (overLow > 0) return pascal(0)
+  for (let i = 0; i < MOST_STEPS && overLow < -TOLERANCE && high - low > TOLERANCE; i++) {
+    const secant = low + ((high - low) * -overLow) / (overHigh - overLow)
+    const next = i % 3 === 2 ? (low + high) / 2 : secant
+    const at = over(next)
+    if (at <= 0) {
+      low = next
+      overLow = at
+    } else {
+      high = next
+      overHigh = at
+    }
   }
   return pascal(low)
 }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { stopsOf } from '../../../shared/domain/cautions/registry'
+import { cautionForMaker, stopsOf } from '../../../shared/domain/cautions/registry'
 import type { JudgedRing, TextileContext } from '../../../shared/domain/textile/cautions'
 import { heldUpCautions, lacingCautions, planCautions, ringCautions, textileCautions } from '../../../shared/domain/textile/cautions'
 import { DEFAULT_TEXTILE_SETTINGS } from '../../../shared/domain/textile/defaults'
@@ -51,6 +51,13 @@ describe('cautions of a ring', () => {
     const [found] = ringCautions(judged(around(light), 900, DEFAULT_TEXTILE_SETTINGS))
     expect(found).toMatchObject({ code: 'hold-not-reached', severity: 'note', limit: { value: 900 } })
     expect(found!.message).toContain('largest reduction governs')
+  })
+
+  it('tell that a hold was lowered for a wearer’s limit, to makers without figures', () => {
+    const lowered = { ...judged(around(strong), 600), asked: pascal(900) }
+    const [found] = ringCautions(lowered)
+    expect(found).toMatchObject({ code: 'hold-lowered', severity: 'note', figure: { value: 600 }, limit: { value: 900 } })
+    expect(cautionForMaker(found!)).toMatchObject({ code: 'wearer-limit', message: 'Limit set for this wearer.', figure: null })
   })
 
   it('tell a fixed half, little stretching width, wear and tested range passed', () => {

@@ -78,22 +78,24 @@ function middleAt(edges: readonly PieceEdge[], id: PieceId, y: number): { readon
   return from === undefined || to === undefined ? null : { x: (from.x + to.x) / 2, width: to.x - from.x }
 }
 
-/** Grain line, arrow of greatest stretch and place of the label, all within the piece between the bust and the hem. */
+/** Grain line, arrow of greatest stretch and place of the label, within the piece, clear of the level lines. */
 function marksOf(
   id: PieceId,
   edges: readonly PieceEdge[],
   heights: readonly LevelHeight[],
 ): Pick<DraftPiece, 'grain' | 'stretch' | 'labelAt'> {
   const bottom = Math.max(...edgeIn(edges, 'hem').nodes.map(({ at }) => at.y))
-  const top = heights.find(({ level }) => level === 'bust')?.y ?? bottom
+  const heightOf = (level: LevelId) => Math.max(bottom, heights.find((own) => own.level === level)?.y ?? bottom)
+  const [top, underbust, waist] = [heightOf('bust'), heightOf('underbust'), heightOf('waist')]
   const at = (share: number) => bottom + (top - bottom) * share
   const middles = [0.1, 0.35, 0.6, 0.85].map((share) => middleAt(edges, id, at(share))).filter((middle) => middle !== null)
   const x = middles.reduce((sum, middle) => sum + middle.x, 0) / Math.max(1, middles.length)
-  const arrow = middleAt(edges, id, at(0.5)) ?? { x, width: 40 }
+  const y = (underbust + waist) / 2
+  const arrow = middleAt(edges, id, y) ?? { x, width: 40 }
   return {
     grain: { from: { x, y: at(0.08) }, to: { x, y: at(0.92) } },
-    stretch: { from: { x: arrow.x - arrow.width * 0.3, y: at(0.5) }, to: { x: arrow.x + arrow.width * 0.3, y: at(0.5) } },
-    labelAt: { x, y: at(0.72) },
+    stretch: { from: { x: arrow.x - arrow.width * 0.3, y }, to: { x: arrow.x + arrow.width * 0.3, y } },
+    labelAt: { x, y: (top + underbust) / 2 },
   }
 }
 

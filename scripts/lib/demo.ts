@@ -86,18 +86,20 @@ interface DemoGarment {
   /** Label and cloth code, from the outside in. */
   readonly layers: readonly (readonly [string, string])[]
   readonly hold?: number
-  readonly change?: (document: GarmentDocument) => GarmentDocument
+  readonly centreBack: 'lacing' | 'seam'
 }
 
-const lacedBack = (document: GarmentDocument): GarmentDocument => ({
+/** A laced back stands open by 50 mm at every level; a seam takes no gap. */
+const withBack = (document: GarmentDocument, centreBack: DemoGarment['centreBack']): GarmentDocument => ({
   ...document,
-  style: { ...document.style, centreBack: 'lacing' },
-  levels: document.levels.map((level) => ({ ...level, gapBack: mm(50) })),
+  style: { ...document.style, centreBack },
+  levels: document.levels.map((level) => ({ ...level, gapBack: mm(centreBack === 'lacing' ? 50 : 0) })),
 })
 
 const GARMENTS: readonly DemoGarment[] = [
   {
     code: 'LS-031',
+    centreBack: 'lacing',
     name: 'Heron bodice, mock-up',
     wearer: 'Ilse Marenbach',
     dueOn: '2026-12-18',
@@ -110,6 +112,7 @@ const GARMENTS: readonly DemoGarment[] = [
   },
   {
     code: 'LS-032',
+    centreBack: 'lacing',
     name: 'Heron bodice',
     wearer: 'Ilse Marenbach',
     dueOn: '2027-01-22',
@@ -124,6 +127,7 @@ const GARMENTS: readonly DemoGarment[] = [
   },
   {
     code: 'LS-040',
+    centreBack: 'lacing',
     name: 'Chorus bodice',
     wearer: 'Tomma Felsing',
     dueOn: '2027-02-05',
@@ -138,6 +142,7 @@ const GARMENTS: readonly DemoGarment[] = [
   },
   {
     code: 'AR-007',
+    centreBack: 'lacing',
     name: 'Pairs dress bodice',
     wearer: 'Annika Roswald',
     dueOn: '2026-12-30',
@@ -147,7 +152,6 @@ const GARMENTS: readonly DemoGarment[] = [
       ['Shell', 'VL-21'],
       ['Lining', 'LN-05'],
     ],
-    change: lacedBack,
   },
 ]
 
@@ -175,7 +179,7 @@ async function seedGarment(
     plans: { front: layersOf(garment, cloths, 'front'), back: layersOf(garment, cloths, 'back') },
     levels: copy.document.levels.map((level) => ({ ...level, hold: pascal(garment.hold ?? level.hold) })),
   }
-  const saved = await saveWorkingCopy(room, id, { base: copy.revision, document: garment.change ? garment.change(plain) : plain })
+  const saved = await saveWorkingCopy(room, id, { base: copy.revision, document: withBack(plain, garment.centreBack) })
   if (!saved.solution) throw new Error(`${code} does not solve: ${saved.problem?.message}`)
   return { id, saved }
 }
@@ -232,6 +236,7 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
       ])
       const garment: DemoGarment = {
         code: 'NQ-01',
+      centreBack: 'seam',
         name: 'Revue bodice',
         wearer: 'Solveig Amsel',
         dueOn: '2027-01-09',

@@ -53,6 +53,13 @@ export async function listVersions({ db, workroom, role }: Room, garment: string
   return { items: shown.map((row) => summaryOf(row, role)) }
 }
 
+/** The frame of a draft and its findings speak of the body; a measuring is the wearer's. */
+const forMaker = (kept: VersionKept): VersionKept => ({
+  ...kept,
+  document: { ...kept.document, measuringId: null },
+  draft: { ...kept.draft, frame: {}, findings: [] },
+})
+
 export async function getVersion(room: Room, id: string): Promise<RouteAnswer<'versions.get'>> {
   const { db, workroom, role } = room
   const row = await readableVersion(room, id)
@@ -60,7 +67,7 @@ export async function getVersion(room: Room, id: string): Promise<RouteAnswer<'v
   const own = role === 'maker' ? undefined : await findVersionBody(db, workroom, id)
   return {
     ...summaryOf(row, role),
-    kept,
+    kept: role === 'maker' ? forMaker(kept) : kept,
     body: own?.body ? fromJson<VersionBody>(own.body) : null,
     wearerName: own?.wearerName ?? null,
   }

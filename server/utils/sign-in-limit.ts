@@ -53,6 +53,7 @@ export function signInLimit(points: number): AttemptLimit {
     },
     async clear(email, address) {
       await byAccount.delete(`${email} ${address}`)
+      await byAddress.reward(address)
     },
   }
 }

@@ -1,0 +1,184 @@
+import { beforeAll, describe, expect, it } from 'vitest'
+import { call, signIn } from './caller'
+
+let maker: string
+beforeAll(async () => {
+  maker = await signIn('maker')
+})
+
+const strip = {
+  kind: 'strip',
+  direction: 'crosswise',
+  state: 'dry',
+  specimens: [
+    {
+      width: 50,
+      gauge: 100,
+      restLength: 103,
+      readings: [
+        { load: 5, length: 125, on: 'loading' },
+        { load: 10, length: 150, on: 'loading' },
+      ],
+    },
+  ],
+}
+
+/** A cloth that pulls 400 N/m per unit of strain, tested to 60 %. */
+const layer = {
+  id: 'shell',
+  label: 'Shell',
+  count: 1,
+  cutRatio: 1,
+  cloth: {
+    clothId: 'a',
+    name: 'A',
+    direction: 'crosswise',
+    state: 'dry',
+    curve: { kind: 'cubic', a: 400, b: 0, knots: [], testedTo: 0.6, residual: 0, spread: 0, specimens: 3, points: [] },
+    figures: { stretch: 0.6, growth: null, recovery: null, testTension: null },
+    thickness: 0,
+    wearLimit: 0.6,
+    pullOnLimit: 0.6,
+    testedOn: null,
+  },
+}
+const plan = (zone: string) => ({ zone, layers: [layer] })
+const ring = {
+  level: 'waist',
+  name: 'Waist',
+  girth: 700,
+  frontShare: 0.5,
+  segments: [
+    { id: 'f', half: 'front', plan: plan('front'), share: 1 },
+    { id: 'b', half: 'back', plan: plan('back'), share: 1 },
+  ],
+  rigidFront: 0,
+  rigidBack: 0,
+  gapFront: 0,
+  gapBack: 0,
+  squeeze: 0,
+  aspect: 1,
+  aspectEstimated: false,
+  breath: 20,
+}
+
+describe('stateless solving', () => {
+  // Test-method formulas of the ASTM D3107 / EN 14704-1 kind: 100 mm held at 150, 103 after rest gives 50, 3 and 94 %.
+  it('gives the figures and the curve of a stretch test', async () => {
+    const { body } = await call('solve.curve', { body: { test: strip } }, maker)
+    expect(body.figures.stretch).toBeCloseTo(0.5, 9)
+    expect(body.figures.growth).toBeCloseTo(0.03, 9)
+    expect(body.figures.recovery).toBeCloseTo(0.94, 9)
+    // Derived: 5 N on 50 mm is 100 N/m at 25 %, 10 N is 200 N/m at 50 %: a line of 400 N/m.
+    expect(body.curve.a).toBeCloseTo(400, 3)
+    expect(body.curve.b).toBeCloseTo(0, 3)
+  })
+
+  // Laplace: 1 N/cm at 70 cm girth is .898 kPa (derived). At 400 N/m per unit of strain 100 N/m is 25 %, so the cut is 700 / 1.25 = 560.
+  it('solves a ring from its cut', async () => {
+    const { body } = await call(
+      'solve.rings',
+      { body: { rings: [{ geometry: ring, mode: { solve: 'tension', widths: [280, 280] } }] } },
+      maker,
+    )
+    expect(body.rings[0].problem).toBeNull()
+    expect(body.rings[0].solution.tension).toBeCloseTo(100, 6)
+    expect(body.rings[0].solution.pressure / 1000).toBeCloseTo(0.898, 3)
+  })
+
+  it('gives each ring its own answer', async () => {
+    const bare = { ...ring, level: 'bust', segments: [] }
+    const { status, body } = await call(
+      'solve.rings',
+      {
+        body: {
+          rings: [
+            { geometry: bare, mode: { solve: 'cut', hold: 900 } },
+            { geometry: ring, mode: { solve: 'cut', hold: 600 } },
+          ],
+        },
+      },
+      maker,
+    )
+    expect(status).toBe(200)
+    expect(body.rings[0].problem.code).toEqual(expect.any(String))
+    expect(body.rings[1].solution.pressure).toBeCloseTo(600, 3)
+  })
+
+  it('drafts pieces from a body and widths, and lays them on pages', async () => {
+    const values = {
+      bustGirth: 900,
+      underbustGirth: 760,
+      waistGirth: 700,
+      hipGirth: 980,
+      neckBaseGirth: 370,
+      shoulderLength: 124,
+      acrossBack: 350,
+      backWaistLength: 410,
+      frontWaistLength: 425,
+      neckShoulderToBustPoint: 265,
+      sideWaistLength: 205,
+      waistToHip: 205,
+      bustPointDistance: 185,
+    }
+    const measured = Object.fromEntries(Object.entries(values).map(([key, value]) => [key, { value }]))
+    const widths = (
+      [
+        ['bust', 207],
+        ['underbust', 177],
+        ['waist', 164],
+        ['high-hip', 204],
+        ['hip', 225],
+      ] as const
+    ).map(([level, half]) => ({ level, front: half, back: half, gapFront: 0, gapBack: 0 }))
+    const pieces = await call('solve.pieces', { body: { measured, widths } }, maker)
+    expect(pieces.status).toBe(200)
+    expect(pieces.body.pieces).toHaveLength(4)
+    for (const seam of pieces.body.seams) expect(Math.abs(seam.difference), seam.name).toBeLessThan(25)
+    const tiles = await call('solve.tiles', { body: { pieces: pieces.body.pieces, paper: 'letter', margin: 12 } }, maker)
+    expect(tiles.status).toBe(200)
+    expect(tiles.body.margin).toBe(12)
+    expect(tiles.body.tiles.length + tiles.body.blank.length).toBe(tiles.body.rows * tiles.body.columns)
+  })
+
+  it('says in the domain’s words why something cannot be computed', async () => {
+    const answer = await call(
+      'solve.pieces',
+      {
+        body: {
+          measured: { bustGirth: { value: 900 } },
+          widths: ['bust', 'underbust', 'waist', 'high-hip', 'hip'].map((level) => ({
+            level,
+            front: 200,
+            back: 200,
+            gapFront: 0,
+            gapBack: 0,
+          })),
+        },
+      },
+      maker,
+    )
+    expect(answer.body.type).toBe('/problems/cannot-solve')
+    expect(answer.body.problem.message).toContain('Not measured')
+    const odd = await call(
+      'solve.curve',
+      { body: { test: { ...strip, specimens: [{ ...strip.specimens[0], readings: [{ load: -1, length: 120, on: 'loading' }] }] } } },
+      maker,
+    )
+    expect(odd.body.fields[0].path).toBe('test.specimens.0.readings.0.load')
+  })
+})
+
+describe('the API description', () => {
+  it('has every route of the table, and no other', async () => {
+    const { routes, routeIds } = await import('../../shared/schemas/routes')
+    const { body } = await call('openapi.get')
+    expect(body.openapi).toBe('3.1.0')
+    const described = Object.entries(body.paths).flatMap(([path, methods]) =>
+      Object.keys(methods as object).map((method) => `${method} ${path}`),
+    )
+    expect(described.toSorted()).toEqual(
+      routeIds.map((id) => `${routes[id].method.toLowerCase()} ${routes[id].path.replace(':id', '{id}')}`).toSorted(),
+    )
+  })
+})

@@ -236,7 +236,7 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
       ])
       const garment: DemoGarment = {
         code: 'NQ-01',
-      centreBack: 'seam',
+        centreBack: 'seam',
         name: 'Revue bodice',
         wearer: 'Solveig Amsel',
         dueOn: '2027-01-09',

@@ -13,7 +13,8 @@ for (const name of ['unit', 'nuxt', 'api']) {
   }
   const report = JSON.parse(readFileSync(file, 'utf8'))
   total.passed += report.numPassedTests
-  total.failed += report.numFailedTests + (report.testResults ?? []).filter((one) => one.status === 'failed' && one.assertionResults.length === 0).length
+  total.failed +=
+    report.numFailedTests + (report.testResults ?? []).filter((one) => one.status === 'failed' && one.assertionResults.length === 0).length
   total.skipped += report.numPendingTests + (report.numTodoTests ?? 0)
 }
 

@@ -121,5 +121,11 @@ describe('ids that come in a body', () => {
     expect(clothed.body.solution).toBeNull()
     expect(clothed.body.lastGood.revision).toBe(copy.revision)
     expect(JSON.stringify(clothed.body.input.cloths)).not.toContain(foreign.cloth)
+    const back = await call(
+      'garments.saveWorkingCopy',
+      { id: own.garment, body: { base: clothed.body.revision, document: copy.document } },
+      cookies.drafter,
+    )
+    expect(back.body.solution).not.toBeNull()
   })
 })

@@ -66,7 +66,7 @@ export default defineNuxtConfig({
     experimental: { asyncContext: true },
   },
   vite: {
-    optimizeDeps: { include: ['vee-validate', '@vee-validate/zod', 'zod', 'konva', 'vue-konva', 'clipper2-ts', 'nnls'] },
+    optimizeDeps: { include: ['vee-validate', '@vee-validate/zod', 'zod', 'konva', 'konva/lib/Core', 'vue-konva', 'clipper2-ts', 'nnls'] },
   },
   typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
 })

@@ -1,3 +1,4 @@
+import type { RingReading } from '#shared/domain/textile/reading-working'
 import type { HoldBand, RingSolution } from '#shared/domain/textile/types'
 
 /** Distance of two stretch ticks at rest, mm; on the body it is drawn times (1 + strain). */
@@ -19,8 +20,8 @@ export const HOLD_BAND_ENDS: readonly { readonly band: HoldBand; readonly to: nu
 /** Right end of the drawn hold scale, Pa: what presses harder stands at the end with a double mark. */
 export const HOLD_SCALE_END = 4200
 
-export type RingFigure =
-  'pressure' | 'breath' | 'side' | 'front' | 'tension' | 'cut' | 'negativeEase' | 'k' | 'strain' | 'gap' | 'hold' | 'slack' | 'governs'
+/** The readings of a ring that open their working. */
+export type RingFigure = RingReading
 
 /** One part of a ring laid end to end, mm from the centre front on the body. */
 export interface RingPart {

@@ -44,7 +44,10 @@ interface Word {
   readonly bottom: number
 }
 interface Page {
+  readonly width: number
+  readonly height: number
   readonly lines: readonly Line[]
+  /** Words that lie on the page; the text of a label that the tile cuts off may lie past its edge. */
   readonly words: readonly Word[]
 }
 
@@ -103,6 +106,12 @@ const wordsOf = (xml: string): Word[] =>
     }),
   )
 
+function pageOf(svg: string, words: string): Page {
+  const [, width, height] = /<page width="([\d.]+)" height="([\d.]+)"/.exec(words)!.map((each) => Number(each) * POINTS_TO_MM)
+  const onPage = wordsOf(words).filter((word) => word.top >= 0 && word.left >= 0 && word.bottom <= height! && word.right <= width!)
+  return { width: width!, height: height!, lines: linesOf(svg), words: onPage }
+}
+
 const SEAM = '4.0 2.0'
 const JOIN = '2.0 2.0'
 const apart = (a: Point, b: Point) => Math.hypot(a.x - b.x, a.y - b.y)
@@ -159,8 +168,8 @@ interface ReadTile {
 /** A tile by what is printed on it: its name at the foot, its join lines and the names beside them. */
 function readTile(page: Page): ReadTile | null {
   if (!/ tile \d+ of \d+/.test(page.words.map((word) => word.text).join(' '))) return null
-  const foot = Math.max(...page.words.map((word) => word.bottom))
-  const name = page.words.filter((word) => foot - word.bottom < 2).sort((a, b) => a.left - b.left)[0]!.text
+  const foot = page.words.find((word, i) => word.text === 'tile' && page.words[i + 2]?.text === 'of')!.bottom
+  const name = page.words.filter((word) => Math.abs(foot - word.bottom) < 2).sort((a, b) => a.left - b.left)[0]!.text
   const lines = page.lines.filter((line) => line.dash === JOIN)
   const joins = page.words.flatMap((word) => {
     if (word.text !== 'joins') return []
@@ -175,7 +184,7 @@ function readTile(page: Page): ReadTile | null {
   })
   const xs = lines.filter(({ points: [a, b] }) => Math.abs(a!.x - b!.x) < 0.01).map(({ points: [a] }) => a!.x)
   const ys = lines.filter(({ points: [a, b] }) => Math.abs(a!.y - b!.y) < 0.01).map(({ points: [a] }) => a!.y)
-  const { middleX, middleY } = middleOf(page)
+  const [middleX, middleY] = [page.width / 2, page.height / 2]
   return {
     name,
     joins,
@@ -187,12 +196,6 @@ function readTile(page: Page): ReadTile | null {
       bottom: Math.min(Infinity, ...ys.filter((y) => y > middleY)),
     },
   }
-}
-
-const middleOf = (page: Page) => {
-  const foot = Math.max(...page.words.map((word) => word.bottom))
-  const right = Math.max(...page.words.map((word) => word.right))
-  return { middleX: right / 2, middleY: foot / 2 }
 }
 
 /** Lays the tiles beside each other so that their join lines meet; throws when a neighbour does not name back. */
@@ -246,7 +249,7 @@ describe.skipIf(missing.length > 0).each(cases)('pattern print on $name, read ba
       const only = ['-f', `${i + 1}`, '-l', `${i + 1}`]
       const svg = join(folder, `${i}.svg`)
       run('pdftocairo', '-svg', '-origpagesizes', '-noshrink', '-nocenter', ...only, file, svg)
-      return { lines: linesOf(readFileSync(svg, 'utf8')), words: wordsOf(run('pdftotext', '-bbox', ...only, file, '-')) }
+      return pageOf(readFileSync(svg, 'utf8'), run('pdftotext', '-bbox', ...only, file, '-'))
     })
   })
   afterAll(() => rmSync(folder, { recursive: true, force: true }))

@@ -24,6 +24,11 @@ const follow =
     await page.goto(base + href + suffix, { waitUntil: 'networkidle' })
     await page.waitForTimeout(400)
   }
+const wearer = (suffix: string) => async (page: Page) => {
+  await follow('/clients', '/clients/')(page)
+  const href = await page.locator('main a[href^="/wearers/"]').first().getAttribute('href')
+  await page.goto(base + href + suffix, { waitUntil: 'networkidle' })
+}
 const bench = (step: string) => async (page: Page) => {
   await page.goto(base + '/garments', { waitUntil: 'networkidle' })
   const href = await page.locator('main a[href^="/garments/"]').filter({ hasNotText: 'New garment' }).first().getAttribute('href')
@@ -36,6 +41,8 @@ const screens: readonly Screen[] = [
   { name: 'home', open: goto('/') },
   { name: 'clients', open: goto('/clients') },
   { name: 'client', open: follow('/clients', '/clients/') },
+  { name: 'wearer', open: wearer('') },
+  { name: 'measure', open: wearer('/measure') },
   { name: 'cloths', open: goto('/cloths') },
   { name: 'cloth', open: follow('/cloths', '/cloths/') },
   { name: 'garments', open: goto('/garments') },

@@ -18,11 +18,11 @@ function freePort(): Promise<number> {
   })
 }
 
-/** Starts the built server on a free port and waits until it is ready. */
-export async function startServer(env: Readonly<Record<string, string>>): Promise<RunningServer> {
+/** Starts the built server on a port, a free one unless told, and waits until it is ready. */
+export async function startServer(env: Readonly<Record<string, string>>, fixedPort?: number): Promise<RunningServer> {
   const entry = resolve(process.env.TENTERFRAME_OUTPUT_DIR ?? '.output', 'server/index.mjs')
   if (!existsSync(entry)) throw new Error(`There is no built server at ${entry}: run the build first.`)
-  const port = await freePort()
+  const port = fixedPort ?? (await freePort())
   const url = `http://127.0.0.1:${port}`
   const child = spawn(process.execPath, [entry], {
     env: {

@@ -1,11 +1,8 @@
-import { execFileSync } from 'node:child_process'
 import { randomBytes } from 'node:crypto'
-import pg from 'pg'
 import type { TestProject } from 'vitest/node'
-import { migrateDatabase } from '../../scripts/migrate'
-import { seedDemo, type DemoIds } from '../../scripts/lib/demo'
-import { createDatabase } from '../../server/db/client'
+import type { DemoIds } from '../../scripts/lib/demo'
 import { startServer } from './server'
+import { throwawayDatabase } from './throwaway'
 
 declare module 'vitest' {
   interface ProvidedContext {
@@ -18,45 +15,10 @@ declare module 'vitest' {
   }
 }
 
-/** Addresses of a database server: those given, else those of this checkout's own cluster. */
-function databaseUrls(): { readonly app: string; readonly owner: string } {
-  const { NUXT_DATABASE_URL: app, NUXT_DATABASE_OWNER_URL: owner } = process.env
-  if (app && owner) return { app, owner }
-  const script = 'set -e; source scripts/lib/database.sh; database_up; printf "%s\\n%s\\n" "$NUXT_DATABASE_URL" "$NUXT_DATABASE_OWNER_URL"'
-  const [ownApp, ownOwner] = execFileSync('bash', ['-c', script], { encoding: 'utf8', env: { ...process.env, NUXT_DATABASE_URL: '' } })
-    .trim()
-    .split('\n')
-  return { app: ownApp!, owner: ownOwner! }
-}
-
-const withDatabase = (url: string, name: string): string => {
-  const changed = new URL(url)
-  changed.pathname = `/${name}`
-  return changed.href
-}
-
-async function run(url: string, statement: string): Promise<void> {
-  const client = new pg.Client({ connectionString: url })
-  await client.connect()
-  try {
-    await client.query(statement)
-  } finally {
-    await client.end()
-  }
-}
-
-/** A throwaway database on the server named, migrated and seeded, and the built server on it. The named database is never touched. */
+/** The built server on a throwaway database. */
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
-  const urls = databaseUrls()
-  const name = `tf_test_${randomBytes(6).toString('hex')}`
-  await run(urls.owner, `create database ${name} template template0 encoding 'UTF8'`)
-  const drop = () => run(urls.owner, `drop database if exists ${name} with (force)`)
+  const { app, owner, seeded, drop } = await throwawayDatabase(new Date())
   try {
-    const owner = withDatabase(urls.owner, name)
-    const app = withDatabase(urls.app, name)
-    await migrateDatabase(owner)
-    const asOwner = createDatabase(owner, 2)
-    const seeded = await seedDemo(asOwner, new Date()).finally(() => asOwner.destroy())
     const sessionPassword = randomBytes(24).toString('hex')
     const server = await startServer({ NUXT_DATABASE_URL: app, NUXT_SESSION_PASSWORD: sessionPassword, NUXT_LOGIN_LIMIT: '10000' })
     project.provide('baseUrl', server.url)

@@ -9,7 +9,7 @@ tools_up chromium=chromium
 database_up
 build_up
 port="${SHOTS_PORT:-4180}"
-npx --no-install jiti tests/e2e/server.ts "$port" &
+node_modules/.bin/jiti tests/e2e/server.ts "$port" &
 server=$!
 trap 'kill "$server" 2>/dev/null || true' EXIT
 for _ in $(seq 1 120); do

@@ -15,24 +15,29 @@ const goto = (path: string) => async (page: Page) => {
   await page.goto(base + path, { waitUntil: 'networkidle' })
 }
 
-/** First link of a list that leads further down. */
-const follow =
-  (path: string, link: string, suffix = '') =>
+/** Address of the first record that a list of the screen leads to. */
+async function firstOf(page: Page, kind: 'clients' | 'wearers' | 'cloths' | 'garments'): Promise<string> {
+  const links = await page.locator(`main a[href^="/${kind}/"]`).evaluateAll((all) => all.map((one) => one.getAttribute('href') ?? ''))
+  const found = links.find((link) => /\/[0-9a-f]{8}-[0-9a-f-]{27}$/.test(link))
+  if (!found) throw new Error(`${page.url()} leads to none of ${kind}`)
+  return found
+}
+const record =
+  (kind: 'clients' | 'cloths', suffix = '') =>
   async (page: Page) => {
-    await page.goto(base + path, { waitUntil: 'networkidle' })
-    const href = await page.locator(`main a[href^="${link}"]`).first().getAttribute('href')
-    await page.goto(base + href + suffix, { waitUntil: 'networkidle' })
+    await goto(`/${kind}`)(page)
+    await goto((await firstOf(page, kind)) + suffix)(page)
     await page.waitForTimeout(400)
   }
-const wearer = (suffix: string) => async (page: Page) => {
-  await follow('/clients', '/clients/')(page)
-  const href = await page.locator('main a[href^="/wearers/"]').first().getAttribute('href')
-  await page.goto(base + href + suffix, { waitUntil: 'networkidle' })
-}
+const wearer =
+  (suffix = '') =>
+  async (page: Page) => {
+    await record('clients')(page)
+    await goto((await firstOf(page, 'wearers')) + suffix)(page)
+  }
 const bench = (step: string) => async (page: Page) => {
-  await page.goto(base + '/garments', { waitUntil: 'networkidle' })
-  const href = await page.locator('main a[href^="/garments/"]').filter({ hasNotText: 'New garment' }).first().getAttribute('href')
-  await page.goto(`${base}${href}?step=${step}`, { waitUntil: 'networkidle' })
+  await goto('/garments')(page)
+  await goto(`${await firstOf(page, 'garments')}?step=${step}`)(page)
   await page.waitForTimeout(700)
 }
 
@@ -40,11 +45,11 @@ const screens: readonly Screen[] = [
   { name: 'sign-in', open: goto('/sign-in'), signedOut: true },
   { name: 'home', open: goto('/') },
   { name: 'clients', open: goto('/clients') },
-  { name: 'client', open: follow('/clients', '/clients/') },
-  { name: 'wearer', open: wearer('') },
+  { name: 'client', open: record('clients') },
+  { name: 'wearer', open: wearer() },
   { name: 'measure', open: wearer('/measure') },
   { name: 'cloths', open: goto('/cloths') },
-  { name: 'cloth', open: follow('/cloths', '/cloths/') },
+  { name: 'cloth', open: record('cloths') },
   { name: 'garments', open: goto('/garments') },
   { name: 'garment-new', open: goto('/garments/new') },
   { name: 'bench-body', open: bench('body') },

@@ -47,7 +47,7 @@ sources_hash() {
   else
     list="$(find . -type f -not -path './node_modules/*' -not -path './.*' | sed 's|^\./||')"
   fi
-  printf '%s\n' "$list" | grep -v -E '^(tests|docs|\.ci)/|\.md$' | LC_ALL=C sort | while IFS= read -r file; do
+  printf '%s\n' "$list" | grep -v -E '^(tests|docs|scripts|\.ci)/|\.md$' | LC_ALL=C sort | while IFS= read -r file; do
     if [ -f "$file" ]; then sha256sum "$file"; fi
   done | sha256sum | cut -d ' ' -f 1
 }

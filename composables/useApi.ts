@@ -1,11 +1,20 @@
 import type { FetchError } from 'ofetch'
 import { routeClient, routePath, type Fetcher, type RouteArguments } from '#shared/schemas/client'
-import type { RouteAnswer, RouteId } from '#shared/schemas/routes'
+import { routes, type RouteAnswer, type RouteId } from '#shared/schemas/routes'
 import type { ProblemDetails } from '#shared/types/problem-details'
 
-/** The typed client for what follows an event; pages load by `useLoaded`. */
+/** Changes that no loaded list shows: they leave what is loaded as it is. */
+const SHOWS_NOWHERE: ReadonlySet<RouteId> = new Set<RouteId>(['garments.saveWorkingCopy', 'print.tiles'])
+
+/** The typed client for what follows an event; pages load by `useLoaded`. What is loaded is read again after a change. */
 export function useApi() {
-  return routeClient($fetch as unknown as Fetcher)
+  const client = routeClient($fetch as unknown as Fetcher)
+  return async <K extends RouteId>(route: K, ...given: RouteArguments<K>): Promise<RouteAnswer<K>> => {
+    const answer = await client(route, ...given)
+    const changes = routes[route].method !== 'GET' && !/^(session|solve)\./.test(route) && !SHOWS_NOWHERE.has(route)
+    if (changes) await refreshNuxtData()
+    return answer
+  }
 }
 
 /** Loads a route for a page, with the cookies of the request. The answer is kept by its address. */

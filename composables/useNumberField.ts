@@ -1,5 +1,5 @@
 import type { Mm, Newton, NewtonPerMetre, Pascal } from '#shared/domain/units/brand'
-import { newtonToKilogramForce } from '#shared/domain/units/convert'
+import { mmToCm, newtonToKilogramForce } from '#shared/domain/units/convert'
 import {
   formatDegrees,
   formatLength,
@@ -12,6 +12,9 @@ import {
 import type { ParseProblem, Parsed } from '#shared/domain/units/parse'
 import { parseLength, parseLoad, parseMass, parsePercent, parsePlain, parsePressure, parseTension } from '#shared/domain/units/parse'
 import type { Result } from '#shared/domain/units/result'
+
+/** Largest difference at which typed text still stands for a stored value: below what any tape or scale shows. */
+const SAME = 1e-6
 
 /** What a number field holds. Values are in the domain's unit: mm, N, kg, a ratio, degrees, a count, years, Pa, N/m; `plain` any number. */
 export type NumberKind = 'length' | 'load' | 'mass' | 'percent' | 'degree' | 'count' | 'year' | 'pressure' | 'tension' | 'plain'
@@ -47,11 +50,19 @@ export function readNumber(text: string, kind: NumberKind, units: NumberFieldUni
   }
 }
 
+/** A length no coarser than a tape shows it: 0.55 mm of thickness and 92.75 cm of girth must not read as 1 mm and 92.8 cm. */
+function writeLength(value: Mm, unit: LengthUnit): string {
+  if (unit === 'mm') return `${plainDecimal(value, 2)} mm`
+  const tenths = formatLength(value, unit)
+  const exact = unit === 'in' || Math.abs(value - Math.round(value)) < SAME
+  return exact ? tenths : `${plainDecimal(mmToCm(value), 3)} cm`
+}
+
 /** A stored value as the person reads it, with its unit. */
 export function writeNumber(value: number, kind: NumberKind, units: NumberFieldUnits): string {
   switch (kind) {
     case 'length':
-      return formatLength(value as Mm, units.length)
+      return writeLength(value as Mm, units.length)
     case 'load':
       if (units.load === 'N') return `${plainDecimal(value, 3)} N`
       if (units.load === 'lb') return `${plainDecimal(newtonToKilogramForce(value as Newton) / 0.45359237, 3)} lb`
@@ -74,9 +85,6 @@ export function writeNumber(value: number, kind: NumberKind, units: NumberFieldU
       return plainDecimal(value, 4)
   }
 }
-
-/** Largest difference at which typed text still stands for a stored value: below what any tape or scale shows. */
-const SAME = 1e-6
 
 /** Whether the text, read in these units, gives the value: text typed before a change of unit may not. */
 export function standsFor(text: string, value: number | null, kind: NumberKind, units: NumberFieldUnits): boolean {

@@ -66,6 +66,12 @@ export const useBench = defineStore('bench', () => {
     return { ...facts.value.input, document: shown, measured: measuring?.values ?? {}, measuredOn: measuring?.measuredOn ?? null }
   }
 
+  /** A move goes over to the mate where it is wished and there is one. */
+  function carries(role: PointRole): boolean {
+    const piece = lastGood.value?.draft.pieces.find((one) => one.id === role.piece)
+    return carry.value && Boolean(piece?.edges.find((edge) => edge.id === role.edge)?.mate)
+  }
+
   const input = computed<GarmentInput | null>(() => inputOf(document.value))
   const outcome = computed(() => (input.value ? solveGarment(input.value) : null))
   /** The garment while a point is being dragged: lengths, seams and rings follow live; the board draws the drag itself. */
@@ -77,7 +83,7 @@ export const useBench = defineStore('bench', () => {
       role,
       dx: mm(dx),
       dy: mm(dy),
-      carry: carry.value,
+      carry: carries(role),
       id: 'drag',
     }).document
     const solved = solveGarment(inputOf(moved)!)
@@ -157,9 +163,9 @@ export const useBench = defineStore('bench', () => {
 
   const freshId = () => `alteration-${Date.now().toString(36)}-${(counter++).toString(36)}`
   const movePoint = (role: PointRole, dx: number, dy: number) =>
-    run({ kind: 'move-point', role, dx: mm(dx), dy: mm(dy), carry: carry.value, id: freshId() })
+    run({ kind: 'move-point', role, dx: mm(dx), dy: mm(dy), carry: carries(role), id: freshId() })
   const setPoint = (role: PointRole, dx: number, dy: number) =>
-    run({ kind: 'set-move', role, dx: mm(dx), dy: mm(dy), carry: carry.value, id: freshId() })
+    run({ kind: 'set-move', role, dx: mm(dx), dy: mm(dy), carry: carries(role), id: freshId() })
 
   function schedule(after = SAVE_AFTER) {
     if (saveState.value === 'conflict') return

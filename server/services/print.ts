@@ -4,8 +4,10 @@ import type { PrintFacts } from '../../shared/domain/output/print-words'
 import { layoutPieces } from '../../shared/domain/output/layout'
 import { PAPERS } from '../../shared/domain/output/paper'
 import { placePoint } from '../../shared/domain/output/placing'
+import type { Placement } from '../../shared/domain/output/types'
 import { planTiles, type TilePlan } from '../../shared/domain/output/tiles'
 import type { DraftPiece } from '../../shared/domain/draft/types'
+import type { Point } from '../../shared/domain/geometry/types'
 import type { ParsedBody } from '../../shared/schemas/routes'
 import type { PrintQuery } from '../../shared/schemas/print'
 import type { LengthUnit } from '../../shared/schemas/session'
@@ -42,23 +44,31 @@ export async function printOfVersion(
   id: string,
   query: PrintQuery,
   unit: LengthUnit,
-): Promise<{ set: PrintSet; title: string }> {
+): Promise<{ set: PrintSet; title: string; outlines: Point[][] }> {
   const row = await readableVersion(room, id)
   const kept = fromJson<VersionKept>(found(await findVersionKept(room.db, room.workroom, id)).kept)
   const marks = [row.clearedAt ? 'cleared for cutting' : 'not cleared for cutting', ...(row.erasedAt ? ['body erased'] : [])]
   const version = `version ${row.number}, ${marks.join(', ')}`
   const set = printSet(factsOf(kept, row.garmentCode, version, room.today, unit), kept.draft.pieces, query)
   if (!set.ok) return refuse('cannot-solve', { problem: set.problem })
-  return { set: set.value, title: `${row.garmentCode} version ${row.number}` }
+  return {
+    set: set.value,
+    outlines: outlinesOf(kept.draft.pieces, set.value.placements),
+    title: `${row.garmentCode} version ${row.number}`,
+  }
 }
+
+/** Cutting lines as they lie on the drafting plane. */
+const outlinesOf = (pieces: readonly DraftPiece[], placements: readonly Placement[]): Point[][] =>
+  placements.map((placement) => {
+    const piece = pieces.find((one) => one.id === placement.piece)!
+    return piece.cuttingLine.map((point) => placePoint(point, placement))
+  })
 
 /** Pages for pieces that are not saved. */
 export function tilesOfPieces({ pieces, paper, spacing, ...options }: ParsedBody<'solve.tiles'>): TilePlan {
   const placements = layoutPieces(pieces, 'packed', spacing)
-  const outlines = placements.map((placement) => {
-    const piece = pieces.find((one: DraftPiece) => one.id === placement.piece)!
-    return piece.cuttingLine.map((point) => placePoint(point, placement))
-  })
+  const outlines = outlinesOf(pieces, placements)
   const plan = planTiles(outlines, PAPERS[paper], options)
   return plan.ok ? plan.value : refuse('cannot-solve', { problem: plan.problem })
 }

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import type { TilePlan } from '../domain/output/tiles'
+import type { Point } from '../domain/geometry/types'
 import { figure, length, mirrors, point } from './base'
 
 export const paperId = z.enum(['A4', 'A3', 'letter'])
@@ -26,21 +27,26 @@ const join = z.object({
   marks: z.array(point),
 })
 
-export const tilePlan = mirrors<TilePlan>()(
-  z.object({
-    paper: z.object({ id: paperId, name: z.string(), width: length(), height: length() }),
-    orientation: z.enum(['portrait', 'landscape']),
-    page: z.object({ width: length(), height: length() }),
-    margin: z.number(),
-    overlap: z.number(),
-    strip: z.number(),
-    rows: z.number().int(),
-    columns: z.number().int(),
-    tiles: z.array(
-      z.object({ name: z.string(), row: z.number().int(), column: z.number().int(), area: bounds, cell: bounds, joins: z.array(join) }),
-    ),
-    blank: z.array(z.string()),
-    drawing: bounds,
-    whole: bounds,
-  }),
-)
+const pages = z.object({
+  paper: z.object({ id: paperId, name: z.string(), width: length(), height: length() }),
+  orientation: z.enum(['portrait', 'landscape']),
+  page: z.object({ width: length(), height: length() }),
+  margin: z.number(),
+  overlap: z.number(),
+  strip: z.number(),
+  rows: z.number().int(),
+  columns: z.number().int(),
+  tiles: z.array(
+    z.object({ name: z.string(), row: z.number().int(), column: z.number().int(), area: bounds, cell: bounds, joins: z.array(join) }),
+  ),
+  blank: z.array(z.string()),
+  drawing: bounds,
+  whole: bounds,
+})
+export const tilePlan = mirrors<TilePlan>()(pages)
+
+/** How a version will print: its pages, and the pieces' cutting lines as they lie on them. */
+export interface TileMap extends TilePlan {
+  readonly outlines: readonly (readonly Point[])[]
+}
+export const tileMap = mirrors<TileMap>()(pages.extend({ outlines: z.array(z.array(point)) }))

@@ -5,7 +5,7 @@ import { cloth, clothBody, clothSummary, clothTest, clothUpdate, clothWhole, tes
 import { draft } from './draft'
 import { garmentBody, garmentSummary, garmentUpdate, garmentWhole, workingCopy, workingCopySave } from './garments'
 import { measuring, measuringBody, measuringUpdate } from './measuring'
-import { printQuery, tilePlan } from './print'
+import { printQuery, tileMap, tilePlan } from './print'
 import { me, preferencesBody, signInBody, type Role } from './session'
 import { solveCurveAnswer, solveCurveBody, solvePiecesBody, solveRingsAnswer, solveRingsBody, solveTilesBody } from './solve'
 import { clearanceBody, restoreBody, versionBody, versionSummary, versionWhole } from './versions'
@@ -467,7 +467,7 @@ export const routes = {
     path: '/api/versions/:id/tiles',
     access: everyone,
     query: printQuery,
-    response: tilePlan,
+    response: tileMap,
     group: 'Print',
     summary: 'How a version is laid on pages.',
   },

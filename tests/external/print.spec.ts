@@ -16,9 +16,9 @@ import { printSet } from '../../shared/domain/output/print-set'
 import type { PrintOptions, PrintSet } from '../../shared/domain/output/print-set'
 import { printerCorrection } from '../../shared/domain/output/printer-correction'
 import { printFacts } from '../fixtures/print-facts'
+import { apart, linesOf, pageOf, POINTS_TO_MM, type Line, type Page } from '../fixtures/read-print'
 import { draftedPieces } from '../fixtures/print-draft'
 
-const POINTS_TO_MM = 25.4 / 72
 const has = (tool: string) => {
   try {
     execFileSync('which', [tool], { stdio: 'ignore' })
@@ -31,90 +31,8 @@ const missing = ['pdfinfo', 'pdffonts', 'pdftotext', 'pdftocairo', 'qpdf'].filte
 if (missing.length > 0) console.warn(`print checks skipped: ${missing.join(', ')} not installed (Debian: poppler-utils, qpdf)`)
 const run = (tool: string, ...args: string[]) => execFileSync(tool, args, { encoding: 'utf8', maxBuffer: 64_000_000 })
 
-interface Line {
-  readonly points: readonly Point[]
-  readonly dash: string
-  readonly width: number
-}
-interface Word {
-  readonly text: string
-  readonly left: number
-  readonly top: number
-  readonly right: number
-  readonly bottom: number
-}
-interface Page {
-  readonly width: number
-  readonly height: number
-  readonly lines: readonly Line[]
-  /** Words that lie on the page; the text of a label that the tile cuts off may lie past its edge. */
-  readonly words: readonly Word[]
-}
-
-/** Stroked lines of a page in mm, y down, from poppler's SVG; curves as 64 chords. */
-function linesOf(svg: string): Line[] {
-  return [...svg.matchAll(/<path style="([^"]*)" d="([^"]*)"(?: transform="matrix\(([^)]*)\)")?/g)].flatMap(
-    ([, style = '', d = '', matrix]) => {
-      if (!style.includes('stroke-width')) return []
-      const [a = 1, b = 0, c = 0, e = 1, dx = 0, dy = 0] = matrix ? matrix.split(',').map(Number) : []
-      const place = (x: number, y: number): Point => ({ x: (a * x + c * y + dx) * POINTS_TO_MM, y: (b * x + e * y + dy) * POINTS_TO_MM })
-      const points: Point[] = []
-      let [at, start] = [
-        [0, 0],
-        [0, 0],
-      ]
-      for (const [, command, rest = ''] of d.matchAll(/([MLCZ])([^MLCZ]*)/g)) {
-        const n = rest.trim().split(/\s+/).filter(Boolean).map(Number)
-        if (command === 'M' && points.length > 0) break
-        if (command === 'C')
-          for (let i = 1; i <= 64; i += 1) {
-            const [t, s] = [i / 64, 1 - i / 64]
-            const mix = (k: 0 | 1) => s ** 3 * at[k]! + 3 * s * s * t * n[k]! + 3 * s * t * t * n[2 + k]! + t ** 3 * n[4 + k]!
-            points.push(place(mix(0), mix(1)))
-          }
-        else if (command !== 'Z') points.push(place(n[0]!, n[1]!))
-        else points.push(place(start[0]!, start[1]!))
-        if (command === 'M') start = n.slice(0, 2)
-        at = command === 'Z' ? start : n.slice(-2)
-      }
-      const dash = /stroke-dasharray:([^;]*)/.exec(style)?.[1] ?? ''
-      const width = Number(/stroke-width:([\d.]+)/.exec(style)![1]) * POINTS_TO_MM
-      return [
-        {
-          points,
-          width,
-          dash: dash
-            ? dash
-                .split(',')
-                .map((each) => (Number(each) * POINTS_TO_MM).toFixed(1))
-                .join(' ')
-            : '',
-        },
-      ]
-    },
-  )
-}
-
-const wordsOf = (xml: string): Word[] =>
-  [...xml.matchAll(/<word xMin="([\d.]+)" yMin="([\d.]+)" xMax="([\d.]+)" yMax="([\d.]+)">([^<]*)</g)].map(
-    ([, left, top, right, bottom, text]) => ({
-      text: text!,
-      left: Number(left) * POINTS_TO_MM,
-      top: Number(top) * POINTS_TO_MM,
-      right: Number(right) * POINTS_TO_MM,
-      bottom: Number(bottom) * POINTS_TO_MM,
-    }),
-  )
-
-function pageOf(svg: string, words: string): Page {
-  const [, width, height] = /<page width="([\d.]+)" height="([\d.]+)"/.exec(words)!.map((each) => Number(each) * POINTS_TO_MM)
-  const onPage = wordsOf(words).filter((word) => word.top >= 0 && word.left >= 0 && word.bottom <= height! && word.right <= width!)
-  return { width: width!, height: height!, lines: linesOf(svg), words: onPage }
-}
-
 const SEAM = '4.0 2.0'
 const JOIN = '2.0 2.0'
-const apart = (a: Point, b: Point) => Math.hypot(a.x - b.x, a.y - b.y)
 
 function pathLengthByChords(path: Path): number {
   let length = 0

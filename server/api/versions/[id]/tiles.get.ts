@@ -1,4 +1,7 @@
 import { printOfVersion } from '../../../services/print'
 import { handle } from '../../../utils/handle'
 
-export default handle('print.tiles', async ({ room, who, id, query }) => (await printOfVersion(room, id, query, who.unit)).set.plan)
+export default handle('print.tiles', async ({ room, who, id, query }) => {
+  const { set, outlines } = await printOfVersion(room, id, query, who.unit)
+  return { ...set.plan, outlines }
+})

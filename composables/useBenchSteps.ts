@@ -87,7 +87,9 @@ export function benchSteps(facts: StepFacts): StepState[] {
       id: 'layers',
       name: 'Layers',
       state: state('layers', planned),
-      detail: planned ? `${stack('front')} front, ${stack('back')} back${count('layers')}` : 'no layers yet',
+      detail: planned
+        ? `${stack('front') === stack('back') ? `${stack('front')} layers` : `${stack('front')} front, ${stack('back')} back`}${count('layers')}`
+        : 'no layers yet',
     },
     {
       id: 'draft',

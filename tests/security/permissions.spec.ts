@@ -24,6 +24,9 @@ let own: Record<ResourceKind, string>
 let foreign: Record<ResourceKind, string>
 const cookies: Record<string, string> = {}
 
+/** A cloth that the demo's cleared garment does not use: the routes below archive it and its test. */
+const SPARE = `'VL-21'`
+
 /** One row of each kind; of garments and versions the cleared one, which a maker may read. */
 async function idsOf(client: pg.Client, workroom: string): Promise<Record<ResourceKind, string>> {
   const ids: Partial<Record<ResourceKind, string>> = {}
@@ -31,7 +34,13 @@ async function idsOf(client: pg.Client, workroom: string): Promise<Record<Resour
   await client.query(`select set_config('tenterframe.workroom', $1, true)`, [workroom])
   for (const [kind, table] of Object.entries(tables) as [ResourceKind, string][]) {
     const cleared = `exists (select from clearance join version v on v.id = clearance.version_id where ${kind === 'version' ? 'v.id' : 'v.garment_id'} = row.id)`
-    const order = kind === 'garment' || kind === 'version' ? `order by ${cleared} desc` : 'order by row.id'
+    const orders: Partial<Record<ResourceKind, string>> = {
+      garment: `${cleared} desc`,
+      version: `${cleared} desc`,
+      cloth: `row.code = ${SPARE} desc`,
+      test: `(select cloth.code = ${SPARE} from cloth where cloth.id = row.cloth_id) desc`,
+    }
+    const order = `order by ${orders[kind] ?? 'row.id'}`
     const { rows } = await client.query<{ id: string }>(`select row.id from ${table} row ${order} limit 1`)
     ids[kind] = rows[0]!.id
   }

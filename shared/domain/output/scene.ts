@@ -1,5 +1,6 @@
 import type { LevelId } from '../body/types'
 import type { DraftPiece, PieceEdge } from '../draft/types'
+import { pointDistance } from '../geometry/point'
 import type { Path, Point } from '../geometry/types'
 import { mm } from '../units/brand'
 import { insideAtHeight, pointsAlong } from './crossings'
@@ -89,8 +90,9 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
     for (const edge of piece.edges) for (const notch of edge.notches) for (const stroke of notchStrokes(notch, edge)) draw('notch', stroke)
   }
   if (shows('arrows')) {
-    const { grain, stretch } = piece
-    for (const part of besideWords(grain, labels)) draw('grain', [{ kind: 'line', ...part }])
+    const { stretch } = piece
+    const grain = longest(besideWords(piece.grain, labels))
+    draw('grain', [{ kind: 'line', ...grain }])
     draw('grain', arrowHead(grain.from, grain.to, ARROW_HEAD))
     draw('grain', arrowHead(grain.to, grain.from, ARROW_HEAD))
     draw('stretch', [{ kind: 'line', from: stretch.from, to: stretch.to }])
@@ -162,6 +164,10 @@ function besideWords(
   const last = Math.max(...struck.map(([, leave]) => leave))
   return [...(first > 0 ? [{ from, to: at(first) }] : []), ...(last < 1 ? [{ from: at(last), to }] : [])]
 }
+
+/** An arrow keeps both heads on one shaft: where words part it, its longer part is the arrow. */
+const longest = (parts: readonly { from: Point; to: Point }[]): { from: Point; to: Point } =>
+  parts.reduce((long, part) => (pointDistance(part.from, part.to) > pointDistance(long.from, long.to) ? part : long))
 
 function arrowBoxes(piece: DraftPiece): KeepClear[] {
   return [piece.grain, piece.stretch].map(({ from, to }) => ({

@@ -1,27 +1,23 @@
 import type { FetchError } from 'ofetch'
 import { routeClient, routePath, type Fetcher, type RouteArguments } from '#shared/schemas/client'
-import { routes, type RouteAnswer, type RouteId } from '#shared/schemas/routes'
+import type { RouteAnswer, RouteId } from '#shared/schemas/routes'
 import type { ProblemDetails } from '#shared/types/problem-details'
 
-/** Changes that no loaded list shows: they leave what is loaded as it is. */
-const SHOWS_NOWHERE: ReadonlySet<RouteId> = new Set<RouteId>(['garments.saveWorkingCopy', 'print.tiles'])
-
-/** The typed client for what follows an event; pages load by `useLoaded`. What is loaded is read again after a change. */
+/** The typed client for what follows an event; pages load by `useLoaded`. */
 export function useApi() {
-  const client = routeClient($fetch as unknown as Fetcher)
-  return async <K extends RouteId>(route: K, ...given: RouteArguments<K>): Promise<RouteAnswer<K>> => {
-    const answer = await client(route, ...given)
-    const changes = routes[route].method !== 'GET' && !/^(session|solve)\./.test(route) && !SHOWS_NOWHERE.has(route)
-    if (changes) await refreshNuxtData()
-    return answer
-  }
+  return routeClient($fetch as unknown as Fetcher)
 }
 
-/** Loads a route for a page, with the cookies of the request. The answer is kept by its address. */
+/**
+ * Loads a route for a page, with the cookies of the request. The answer is kept by its address; where the page that is being left holds
+ * the same one, it is read again, because what was done there may have changed it.
+ */
 export function useLoaded<K extends RouteId>(route: K, ...[given]: RouteArguments<K>) {
   const request = useRequestFetch()
   const path = routePath(route, given)
-  return useAsyncData<RouteAnswer<K>>(path, () => request<RouteAnswer<K>>(path) as Promise<RouteAnswer<K>>, { deep: false })
+  const loaded = useAsyncData<RouteAnswer<K>>(path, () => request<RouteAnswer<K>>(path) as Promise<RouteAnswer<K>>, { deep: false })
+  if (import.meta.client && !useNuxtApp().isHydrating && loaded.status.value === 'success') void loaded.refresh()
+  return loaded
 }
 
 /** What came back instead of an answer: problem details, or nothing at all when there is no connection. */

@@ -1,16 +1,6 @@
 import { fail, succeed } from '../units/result'
 import type { Result } from '../units/result'
-import {
-  BUST_POINT_TO_UNDERBUST,
-  estimateAcrossFront,
-  estimateArmscyeGirth,
-  estimateBustPointDistance,
-  estimateFrontWaistLength,
-  estimateHighHipGirth,
-  estimateNeckBaseGirth,
-  estimateNeckShoulderToBustPoint,
-  SHOULDER_SLOPE,
-} from './estimates'
+import { estimateOf, measuredValue, type EstimatedKey } from './estimates'
 import type { DraftBody, DraftBodyKey, MeasuredValues, MeasurementKey } from './types'
 
 const NEEDED_WORDS: Readonly<
@@ -59,10 +49,7 @@ function missingFrom(value: (key: MeasurementKey) => number | undefined): readon
  * is asked for: the problem names it (`at` holds the keys, with commas).
  */
 export function completeBody(measured: MeasuredValues): Result<DraftBody> {
-  const value = (key: MeasurementKey): number | undefined => {
-    const own = measured[key]?.value
-    return own !== undefined && Number.isFinite(own) && own > 0 ? own : undefined
-  }
+  const value = (key: MeasurementKey): number | undefined => measuredValue(measured, key)
   if (value('waistGirth') === undefined && value('navelWaistGirth') !== undefined) {
     return fail({
       code: 'natural-waist-missing',
@@ -81,37 +68,33 @@ export function completeBody(measured: MeasuredValues): Result<DraftBody> {
     })
   }
   const estimated: DraftBodyKey[] = []
-  const take = (key: DraftBodyKey, estimate: () => number): number => {
+  const take = (key: DraftBodyKey & EstimatedKey): number => {
     const own = value(key)
     if (own !== undefined) return own
     estimated.push(key)
-    return estimate()
+    return estimateOf(key, measured)!.value
   }
   const needed = (key: NeededKey): number => value(key) as number
-  const bustGirth = needed('bustGirth')
-  const waistGirth = needed('waistGirth')
-  const hipGirth = needed('hipGirth')
-  const acrossBack = needed('acrossBack')
   return succeed({
     values: {
-      bustGirth,
+      bustGirth: needed('bustGirth'),
       underbustGirth: needed('underbustGirth'),
-      waistGirth,
-      highHipGirth: take('highHipGirth', () => estimateHighHipGirth(waistGirth, hipGirth)),
-      hipGirth,
-      neckBaseGirth: take('neckBaseGirth', () => estimateNeckBaseGirth(bustGirth, hipGirth, value('stature') as number)),
+      waistGirth: needed('waistGirth'),
+      highHipGirth: take('highHipGirth'),
+      hipGirth: needed('hipGirth'),
+      neckBaseGirth: take('neckBaseGirth'),
       shoulderLength: needed('shoulderLength'),
-      shoulderSlope: take('shoulderSlope', () => SHOULDER_SLOPE),
-      acrossBack,
-      acrossFront: take('acrossFront', () => estimateAcrossFront(bustGirth, acrossBack)),
+      shoulderSlope: take('shoulderSlope'),
+      acrossBack: needed('acrossBack'),
+      acrossFront: take('acrossFront'),
       backWaistLength: needed('backWaistLength'),
-      frontWaistLength: take('frontWaistLength', () => estimateFrontWaistLength(needed('neckShoulderToBustPoint'))),
-      neckShoulderToBustPoint: take('neckShoulderToBustPoint', () => estimateNeckShoulderToBustPoint(needed('frontWaistLength'))),
+      frontWaistLength: take('frontWaistLength'),
+      neckShoulderToBustPoint: take('neckShoulderToBustPoint'),
       sideWaistLength: needed('sideWaistLength'),
       waistToHip: needed('waistToHip'),
-      bustPointDistance: take('bustPointDistance', () => estimateBustPointDistance(bustGirth)),
-      bustPointToUnderbust: take('bustPointToUnderbust', () => BUST_POINT_TO_UNDERBUST),
-      armscyeGirth: take('armscyeGirth', () => estimateArmscyeGirth(bustGirth)),
+      bustPointDistance: take('bustPointDistance'),
+      bustPointToUnderbust: take('bustPointToUnderbust'),
+      armscyeGirth: take('armscyeGirth'),
     },
     estimated,
   })

@@ -2,7 +2,7 @@ import type { Caution, Severity } from '#shared/domain/cautions/types'
 import type { GarmentDocument } from '#shared/domain/document/types'
 import type { GarmentProblem, GarmentSolution } from '#shared/domain/garment/types'
 
-export type BenchStep = 'body' | 'cloth' | 'layers' | 'draft' | 'cut'
+export type BenchStep = 'body' | 'cloth' | 'layers' | 'draft' | 'cut' | 'fit'
 
 export interface StepState {
   readonly id: BenchStep
@@ -56,7 +56,7 @@ export function benchSteps(facts: StepFacts): StepState[] {
   }
   const count = (step: BenchStep) => {
     const own = current.filter((caution) => stepOf(caution) === step && caution.severity !== 'note').length
-    return own > 0 ? ` · ${plural(own, 'caution')}` : ''
+    return own > 0 ? plural(own, 'caution') : ''
   }
   const layers = [...document.plans.front, ...document.plans.back]
   const cloths = new Set(layers.map((layer) => layer.clothId)).size
@@ -75,31 +75,28 @@ export function benchSteps(facts: StepFacts): StepState[] {
           ? 'no measuring chosen'
           : fails('body')
             ? 'measurements missing'
-            : `measured ${shortDate(facts.measuredOn)}${count('body')}`,
+            : count('body') || `measured ${shortDate(facts.measuredOn)}`,
     },
     {
       id: 'cloth',
       name: 'Cloth',
       state: state('cloth', cloths > 0),
-      detail: cloths === 0 ? 'none chosen' : fails('cloth') ? 'test missing' : `${plural(cloths, 'cloth')}${count('cloth')}`,
+      detail: cloths === 0 ? 'none chosen' : fails('cloth') ? 'test missing' : count('cloth') || plural(cloths, 'cloth'),
     },
     {
       id: 'layers',
       name: 'Layers',
       state: state('layers', planned),
-      detail: planned
-        ? `${stack('front') === stack('back') ? `${stack('front')} layers` : `${stack('front')} front, ${stack('back')} back`}${count('layers')}`
-        : 'no layers yet',
+      detail: !planned
+        ? 'no layers yet'
+        : count('layers') ||
+          (stack('front') === stack('back') ? plural(stack('front'), 'layer') : `${stack('front')} front, ${stack('back')} back`),
     },
     {
       id: 'draft',
       name: 'Draft',
       state: state('draft', solution !== null && problem === null),
-      detail: problem
-        ? 'cannot be drafted'
-        : solution
-          ? `${plural(solution.draft.pieces.length, 'piece')}${count('draft')}`
-          : 'not drafted',
+      detail: problem ? 'cannot be drafted' : solution ? count('draft') || plural(solution.draft.pieces.length, 'piece') : 'not drafted',
     },
     {
       id: 'cut',
@@ -107,6 +104,7 @@ export function benchSteps(facts: StepFacts): StepState[] {
       state: last?.cleared ? 'done' : 'todo',
       detail: last ? `version ${last.number}, ${last.cleared ? 'cleared' : 'not cleared'}` : 'no version yet',
     },
+    { id: 'fit', name: 'Fit', state: 'todo', detail: 'recut, fitting record' },
   ]
 }
 

@@ -30,6 +30,26 @@ const screens: readonly Screen[] = [
   { name: 'bench-layers', open: bench('layers') },
   { name: 'bench-draft', open: bench('draft') },
   { name: 'bench-cut', open: bench('cut') },
+  {
+    name: 'bench-fit',
+    open: async (page) => {
+      await bench('fit')(page)
+      const option = page.getByLabel('Version that fitted').locator('option').filter({ hasText: 'Mock-up that fits' })
+      await page.getByLabel('Version that fitted').selectOption(await option.getAttribute('value'))
+      await page.waitForTimeout(500)
+    },
+  },
+  {
+    name: 'bench-trial',
+    open: async (page) => {
+      await bench('layers')(page)
+      await page.getByRole('button', { name: 'What if' }).click()
+      await page
+        .getByRole('listitem', { name: /^Layer 2,/ })
+        .getByLabel('Count')
+        .selectOption('3')
+    },
+  },
   { name: 'api-guide', open: goto('/api-guide') },
 ]
 

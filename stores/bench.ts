@@ -5,7 +5,7 @@ import type { GarmentDocument } from '#shared/domain/document/types'
 import type { PointRole } from '#shared/domain/draft/types'
 import { solveGarment } from '#shared/domain/garment/solve'
 import type { GarmentInput, GarmentProblem, GarmentSolution } from '#shared/domain/garment/types'
-import type { MeasuredValues } from '#shared/domain/body/types'
+import type { MeasuredValues, MeasurementKey } from '#shared/domain/body/types'
 import { mm } from '#shared/domain/units/brand'
 
 /** What the server holds of a working copy, as it was last read or saved. */
@@ -45,7 +45,12 @@ const keptUnder = (facts: BenchFacts) => unsentKey(facts.accountId, `bench:${fac
 export const useBench = defineStore('bench', () => {
   const facts = shallowRef<BenchFacts | null>(null)
   const held = shallowRef<HeldCopy | null>(null)
-  const document = shallowRef<GarmentDocument | null>(null)
+  /** The working copy: what is saved, undone and redone. */
+  const kept = shallowRef<GarmentDocument | null>(null)
+  /** What is tried before it is taken: a document beside the working copy, and measurements other than the measured ones. */
+  const trial = shallowRef<{ readonly document: GarmentDocument; readonly measured: MeasuredValues } | null>(null)
+  /** What the bench shows and edits: the trial while there is one. */
+  const document = computed<GarmentDocument | null>(() => trial.value?.document ?? kept.value)
   const past = shallowRef<readonly DocumentDiff[]>([])
   const future = shallowRef<readonly DocumentDiff[]>([])
   const selection = shallowRef<PointRole | null>(null)
@@ -60,10 +65,11 @@ export const useBench = defineStore('bench', () => {
   let timer: ReturnType<typeof setTimeout> | undefined
   let counter = 0
 
-  function inputOf(shown: GarmentDocument | null): GarmentInput | null {
+  function inputOf(shown: GarmentDocument | null, tried = trial.value?.measured): GarmentInput | null {
     if (!facts.value || !shown) return null
     const measuring = facts.value.measurings.find((one) => one.id === shown.measuringId)
-    return { ...facts.value.input, document: shown, measured: measuring?.values ?? {}, measuredOn: measuring?.measuredOn ?? null }
+    const measured = { ...measuring?.values, ...tried }
+    return { ...facts.value.input, document: shown, measured, measuredOn: measuring?.measuredOn ?? null }
   }
 
   /** A move goes over to the mate where it is wished and there is one. */
@@ -74,6 +80,12 @@ export const useBench = defineStore('bench', () => {
 
   const input = computed<GarmentInput | null>(() => inputOf(document.value))
   const outcome = computed(() => (input.value ? solveGarment(input.value) : null))
+  /** The working copy as it stands, while something else is tried. */
+  const present = computed<GarmentSolution | null>(() => {
+    const standing = trial.value ? inputOf(kept.value, {}) : null
+    const solved = standing ? solveGarment(standing) : null
+    return solved?.ok ? solved.value : null
+  })
   /** The garment while a point is being dragged: lengths, seams and rings follow live; the board draws the drag itself. */
   const dragged = computed<GarmentSolution | null>(() => {
     if (!document.value || !drag.value) return null
@@ -106,7 +118,8 @@ export const useBench = defineStore('bench', () => {
     clearTimeout(timer)
     facts.value = next
     held.value = copy
-    document.value = copy.document
+    kept.value = copy.document
+    trial.value = null
     past.value = []
     future.value = []
     selection.value = null
@@ -121,10 +134,10 @@ export const useBench = defineStore('bench', () => {
   /** Changes that a crash or a dropped connection kept from being sent. */
   function recover() {
     if (!import.meta.client || !facts.value || !held.value) return
-    const kept = localStorage.getItem(keptUnder(facts.value))
-    if (!kept) return
-    const unsent = JSON.parse(kept) as { readonly base: number; readonly document: GarmentDocument }
-    document.value = unsent.document
+    const stored = localStorage.getItem(keptUnder(facts.value))
+    if (!stored) return
+    const unsent = JSON.parse(stored) as { readonly base: number; readonly document: GarmentDocument }
+    kept.value = unsent.document
     if (unsent.base === held.value.revision) schedule()
     else {
       theirs.value = held.value
@@ -137,7 +150,11 @@ export const useBench = defineStore('bench', () => {
     const { document: next, diff } = applyCommand(document.value, command)
     drag.value = null
     if (diff.changes.length === 0) return
-    document.value = next
+    if (trial.value) {
+      trial.value = { ...trial.value, document: next }
+      return
+    }
+    kept.value = next
     past.value = [...past.value, diff]
     future.value = []
     schedule()
@@ -145,8 +162,8 @@ export const useBench = defineStore('bench', () => {
 
   function undo() {
     const diff = past.value.at(-1)
-    if (!diff || !document.value) return
-    document.value = replayDiff(document.value, invertDiff(diff))
+    if (!diff || !kept.value || trial.value) return
+    kept.value = replayDiff(kept.value, invertDiff(diff))
     past.value = past.value.slice(0, -1)
     future.value = [diff, ...future.value]
     schedule()
@@ -154,8 +171,8 @@ export const useBench = defineStore('bench', () => {
 
   function redo() {
     const diff = future.value[0]
-    if (!diff || !document.value) return
-    document.value = replayDiff(document.value, diff)
+    if (!diff || !kept.value || trial.value) return
+    kept.value = replayDiff(kept.value, diff)
     future.value = future.value.slice(1)
     past.value = [...past.value, diff]
     schedule()
@@ -170,7 +187,7 @@ export const useBench = defineStore('bench', () => {
   function schedule(after = SAVE_AFTER) {
     if (saveState.value === 'conflict') return
     if (import.meta.client && facts.value && held.value) {
-      localStorage.setItem(keptUnder(facts.value), JSON.stringify({ base: held.value.revision, document: document.value }))
+      localStorage.setItem(keptUnder(facts.value), JSON.stringify({ base: held.value.revision, document: kept.value }))
     }
     if (saveState.value !== 'saving') saveState.value = 'unsaved'
     clearTimeout(timer)
@@ -180,14 +197,14 @@ export const useBench = defineStore('bench', () => {
   /** Sends what is unsent. One at a time; what changes meanwhile is sent after it. */
   async function save(): Promise<boolean> {
     clearTimeout(timer)
-    if (!saver || !held.value || !document.value || saveState.value === 'saving' || saveState.value === 'conflict') return false
-    if (document.value === held.value.document) return true
-    const sent = document.value
+    if (!saver || !held.value || !kept.value || saveState.value === 'saving' || saveState.value === 'conflict') return false
+    if (kept.value === held.value.document) return true
+    const sent = kept.value
     saveState.value = 'saving'
     const result = await saver(held.value.revision, sent)
     if (result.kind === 'saved') {
       held.value = { ...result.held, document: sent }
-      if (document.value === sent) {
+      if (kept.value === sent) {
         saveState.value = 'saved'
         if (facts.value) localStorage.removeItem(keptUnder(facts.value))
         return true
@@ -213,7 +230,7 @@ export const useBench = defineStore('bench', () => {
   function takeTheirs() {
     if (!theirs.value) return
     held.value = theirs.value
-    document.value = theirs.value.document
+    kept.value = theirs.value.document
     past.value = []
     future.value = []
     theirs.value = null
@@ -221,10 +238,37 @@ export const useBench = defineStore('bench', () => {
     if (facts.value) localStorage.removeItem(keptUnder(facts.value))
   }
 
+  /** Everything that is changed from here on is tried only, until it is taken or dropped. */
+  function beginTrial() {
+    if (kept.value && !trial.value) trial.value = { document: kept.value, measured: {} }
+  }
+  /** A girth other than the measured one, mm; null goes back to it. */
+  function tryMeasurement(key: MeasurementKey, value: number | null) {
+    if (!trial.value) return
+    const { [key]: _before, ...others } = trial.value.measured
+    trial.value = { ...trial.value, measured: value === null ? others : { ...others, [key]: { value } } }
+  }
+  function dropTrial() {
+    trial.value = null
+  }
+  /** Takes what was tried into the working copy, as one step. A measurement that was tried is not: it has to be measured. */
+  function takeTrial() {
+    const tried = trial.value?.document
+    trial.value = null
+    if (tried) run({ kind: 'take-over', document: tried, label: 'what was tried' })
+  }
+
   return {
     facts,
     held,
     document,
+    kept,
+    trial,
+    present,
+    beginTrial,
+    tryMeasurement,
+    dropTrial,
+    takeTrial,
     past,
     future,
     selection,

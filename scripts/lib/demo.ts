@@ -1,4 +1,6 @@
 import { sql } from 'kysely'
+import type { LevelId } from '../../shared/domain/body/types'
+import type { Alteration } from '../../shared/domain/draft/types'
 import type { GarmentDocument, LayerChoice } from '../../shared/domain/document/types'
 import { DEFAULT_TEXTILE_SETTINGS } from '../../shared/domain/textile/defaults'
 import { mm, pascal } from '../../shared/domain/units/brand'
@@ -85,7 +87,9 @@ interface DemoGarment {
   readonly note: string | null
   /** Label and cloth code, from the outside in. */
   readonly layers: readonly (readonly [string, string])[]
-  readonly hold?: number
+  /** Pa, at every level or by level. */
+  readonly hold?: number | Readonly<Partial<Record<LevelId, number>>>
+  readonly alterations?: readonly Alteration[]
   readonly centreBack: 'lacing' | 'seam'
 }
 
@@ -104,10 +108,23 @@ const GARMENTS: readonly DemoGarment[] = [
     wearer: 'Ilse Marenbach',
     dueOn: '2026-12-18',
     stage: 'mock-up',
-    note: 'Two light layers, to see the lines.',
+    note: 'Two light layers, to see the lines; taken in at the waist on the wearer.',
     layers: [
       ['Mock-up', 'MU-02'],
       ['Light net', 'PN-12'],
+    ],
+    hold: { bust: 320, underbust: 320, waist: 420, 'high-hip': 300, hip: 300 },
+    alterations: [
+      {
+        id: 'fitted-waist',
+        kind: 'move',
+        name: 'side front, side seam at waist',
+        role: { piece: 'side-front', edge: 'side', node: 'waist' },
+        dx: mm(-3),
+        dy: mm(0),
+        carry: true,
+        on: true,
+      },
     ],
   },
   {
@@ -177,7 +194,11 @@ async function seedGarment(
   const plain: GarmentDocument = {
     ...copy.document,
     plans: { front: layersOf(garment, cloths, 'front'), back: layersOf(garment, cloths, 'back') },
-    levels: copy.document.levels.map((level) => ({ ...level, hold: pascal(garment.hold ?? level.hold) })),
+    levels: copy.document.levels.map((level) => ({
+      ...level,
+      hold: pascal((typeof garment.hold === 'object' ? garment.hold[level.level] : garment.hold) ?? level.hold),
+    })),
+    alterations: garment.alterations ?? [],
   }
   const saved = await saveWorkingCopy(room, id, { base: copy.revision, document: withBack(plain, garment.centreBack) })
   if (!saved.solution) throw new Error(`${code} does not solve: ${saved.problem?.message}`)
@@ -200,6 +221,12 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
       const wearers = await seedPeople(room, DEMO_CLIENTS)
       for (const garment of GARMENTS) {
         const { id, saved } = await seedGarment(room, garment, wearers, cloths)
+        if (garment.code === 'LS-031')
+          await createVersion(room, id, {
+            base: saved.revision,
+            name: 'Mock-up that fits',
+            note: 'Fitted; to be recut in the final cloth.',
+          })
         if (garment.code !== 'LS-032') continue
         const version = await createVersion(room, id, { base: saved.revision, name: 'First cut', note: 'After the mock-up fitting.' })
         if (version.stops > 0)

@@ -35,7 +35,13 @@ const pdfText = (bytes: ArrayBuffer): string => {
 
 describe('working copies', () => {
   it('solve on the server, and show the turn from stretch or reduction to hold as layers are added', async () => {
-    const governs = async (garment: string) => (await copyOf(garment)).solution.rings.map((ring: { governs: string }) => ring.governs)
+    const governs = async (garment: string) => {
+      const { revision, document } = await copyOf(garment)
+      const levels = document.levels.map((level: object) => ({ ...level, hold: 900 }))
+      const saved = await save(garment, revision, { ...document, levels, alterations: [] })
+      await save(garment, saved.body.revision, document)
+      return saved.body.solution.rings.map((ring: { governs: string }) => ring.governs)
+    }
     expect(await governs(bodice.id)).toContain('hold')
     expect(await governs(mockUp.id)).not.toContain('hold')
   })

@@ -30,6 +30,8 @@ export type Command =
     }
   | { readonly kind: 'remove-alteration'; readonly id: string }
   | { readonly kind: 'order-alteration'; readonly id: string; readonly to: number }
+  /** A whole document in place of this one: a recut, a trial. */
+  | { readonly kind: 'take-over'; readonly document: GarmentDocument; readonly label: string }
 
 /** What a command changed, key by key, so that it can be undone and redone without the command. */
 export interface DocumentDiff {
@@ -114,6 +116,8 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
       return { ...document, alterations: document.alterations.filter((one) => one.id !== command.id) }
     case 'order-alteration':
       return { ...document, alterations: ordered(document.alterations, command.id, command.to) }
+    case 'take-over':
+      return command.document
   }
 }
 
@@ -171,5 +175,7 @@ function commandWords(command: Command): string {
       return 'alteration removed'
     case 'order-alteration':
       return 'order of alterations'
+    case 'take-over':
+      return command.label
   }
 }

@@ -1,9 +1,9 @@
-import type { BodyLevel, DraftBody, MeasuredValues } from '../body/types'
+import type { BodyLevel, DraftBody, MeasuredValues, WearerFlags } from '../body/types'
 import { cautionForMaker } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
 import type { GarmentDocument } from '../document/types'
 import type { Alteration, Draft } from '../draft/types'
-import type { LayerPlan, RingGeometry, RingSolution, TextileSettings } from '../textile/types'
+import type { LayerCloth, LayerPlan, RingGeometry, RingSolution, TextileSettings } from '../textile/types'
 import type { GarmentInput, GarmentSolution } from './types'
 
 /** A ring as a version keeps it for everyone: cut widths and hold, nothing that is the body's own. */
@@ -76,5 +76,27 @@ export function splitBody(input: GarmentInput, solution: GarmentSolution): { rea
       settled,
     },
     body: { measuredOn: input.measuredOn, measured: input.measured, body, levels, ringInputs, rings, cautions },
+  }
+}
+
+/**
+ * The input that a version was solved from, as far as it keeps it: its own plans, settings and measured body, so that a cloth tested again
+ * or a new measuring changes nothing of it. Flags of the wearer are not kept in a version: those of today are given.
+ */
+export function inputOfVersion(kept: VersionKept, body: VersionBody, wearer: WearerFlags, today: string): GarmentInput {
+  const cloths = new Map<string, LayerCloth[]>()
+  for (const { cloth } of kept.plans.flatMap((plan) => plan.layers)) {
+    const known = cloths.get(cloth.clothId) ?? []
+    if (!known.some((one) => one.direction === cloth.direction && one.state === cloth.state)) known.push(cloth)
+    cloths.set(cloth.clothId, known)
+  }
+  return {
+    document: kept.document,
+    measured: body.measured,
+    measuredOn: body.measuredOn,
+    wearer,
+    cloths: [...cloths].map(([id, directions]) => ({ id, code: '', name: directions[0]!.name, archived: false, directions })),
+    settings: kept.settings,
+    today,
   }
 }

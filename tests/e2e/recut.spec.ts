@@ -1,0 +1,86 @@
+/** From a mock-up that fitted to the final layers, and what-if: on the demo's own garments, in a real browser. */
+import AxeBuilder from '@axe-core/playwright'
+import { expect, test, type Page } from '@playwright/test'
+import { DEMO_ACCOUNTS } from '../../shared/demo'
+import type { RouteAnswer } from '../../shared/schemas/routes'
+
+const drafter = DEMO_ACCOUNTS.find((one) => one.role === 'drafter')!
+
+async function openBench(page: Page, baseURL: string, code: string, step: string): Promise<string> {
+  await page.request.post('/api/session', { data: { email: drafter.email, password: drafter.password }, headers: { origin: baseURL } })
+  const { items } = (await (await page.request.get('/api/garments')).json()) as RouteAnswer<'garments.list'>
+  const { id } = items.find((one) => one.code === code)!
+  await page.goto(`/garments/${id}?step=${step}`, { waitUntil: 'networkidle' })
+  return id
+}
+async function accessible(page: Page): Promise<void> {
+  const { violations } = await new AxeBuilder({ page }).analyze()
+  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.target.join(' ')).join(', ')}`)).toEqual([])
+}
+const copyOf = async (page: Page, id: string) =>
+  (await (await page.request.get(`/api/garments/${id}/working-copy`)).json()) as RouteAnswer<'garments.workingCopy'>
+
+test('the two-layer mock-up that fits is strong at the waist when copied into four layers, and is recut to hold as it did', async ({
+  page,
+  baseURL,
+}) => {
+  const id = await openBench(page, baseURL!, 'LS-032', 'fit')
+  const before = await copyOf(page, id)
+  const select = page.getByLabel('Version that fitted')
+  const option = select.locator('option').filter({ hasText: 'Mock-up that fits' })
+  await expect(option).toHaveCount(1)
+  await select.selectOption(await option.getAttribute('value'))
+  const waist = page.getByRole('row', { name: /^Waist/ })
+  await expect(waist.getByRole('cell').nth(0)).toContainText('easy')
+  await expect(waist.getByRole('cell').nth(1)).toContainText('strong')
+  await expect(waist.getByRole('cell').nth(2)).toContainText('let out')
+  await expect(waist.getByRole('cell').nth(2)).toContainText('easy')
+  await expect(page.getByRole('region', { name: 'Hold as it fitted' })).toContainText('side front, side seam at waist')
+  await accessible(page)
+  await page.getByRole('button', { name: 'Take over: hold as it fitted' }).click()
+  await expect(page.getByText(/Taken over into the working copy/)).toBeVisible()
+  await expect.poll(async () => (await copyOf(page, id)).revision).toBeGreaterThan(before.revision)
+  const after = await copyOf(page, id)
+  const mockUp = await copyOf(
+    page,
+    ((await (await page.request.get('/api/garments')).json()) as RouteAnswer<'garments.list'>).items.find((one) => one.code === 'LS-031')!
+      .id,
+  )
+  for (const ring of after.solution!.rings) {
+    const fitted = mockUp.solution!.rings.find((one) => one.level === ring.level)!
+    expect(Math.abs(ring.pressure / fitted.pressure - 1)).toBeLessThan(0.02)
+  }
+  expect(after.document.alterations[0]!.dx).toBeGreaterThan(-3)
+  await page.getByRole('button', { name: 'Undo' }).click()
+  await expect.poll(async () => (await copyOf(page, id)).document.alterations).toEqual(before.document.alterations)
+})
+
+test('a change is tried beside the present rings, and saved only when it is taken', async ({ page, baseURL }) => {
+  const id = await openBench(page, baseURL!, 'LS-040', 'layers')
+  const before = await copyOf(page, id)
+  await page.getByRole('button', { name: 'What if' }).click()
+  const trial = page.getByRole('region', { name: 'Trying a change' })
+  await page
+    .getByRole('listitem', { name: /^Layer 2,/ })
+    .getByLabel('Count')
+    .selectOption('3')
+  await expect(trial.getByRole('row', { name: /^Waist/ })).toContainText('+')
+  await trial.getByRole('textbox', { name: 'Waist girth (natural waist)' }).fill('80')
+  await expect(trial).toContainText('A girth that was tried is not taken')
+  await accessible(page)
+  await expect(page.getByRole('button', { name: 'Save version' })).toBeDisabled()
+  await trial.getByRole('button', { name: 'Drop it' }).click()
+  await expect(trial).toBeHidden()
+  await page.waitForTimeout(1200)
+  expect((await copyOf(page, id)).revision).toBe(before.revision)
+
+  await page.getByRole('button', { name: 'What if' }).click()
+  await page
+    .getByRole('listitem', { name: /^Layer 2,/ })
+    .getByLabel('Count')
+    .selectOption('2')
+  await trial.getByRole('button', { name: 'Take it' }).click()
+  await expect.poll(async () => (await copyOf(page, id)).document.plans.front[1]!.count).toBe(2)
+  await page.getByRole('button', { name: 'Undo' }).click()
+  await expect.poll(async () => (await copyOf(page, id)).document.plans.front[1]!.count).toBe(1)
+})

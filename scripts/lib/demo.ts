@@ -93,11 +93,16 @@ interface DemoGarment {
   readonly centreBack: 'lacing' | 'seam'
 }
 
-/** A laced back stands open by 50 mm at every level; a seam takes no gap. */
+/** A laced back stands open by 50 mm at every level and by 320 mm unlaced, with a dresser at hand; a seam takes no gap. */
 const withBack = (document: GarmentDocument, centreBack: DemoGarment['centreBack']): GarmentDocument => ({
   ...document,
   style: { ...document.style, centreBack },
-  levels: document.levels.map((level) => ({ ...level, gapBack: mm(centreBack === 'lacing' ? 50 : 0) })),
+  use: centreBack === 'lacing' ? { ...document.use, opens: 'part', dresser: 'Mirela Quist' } : document.use,
+  levels: document.levels.map((level) => ({
+    ...level,
+    gapBack: mm(centreBack === 'lacing' ? 50 : 0),
+    opening: centreBack === 'lacing' ? mm(320) : null,
+  })),
 })
 
 const GARMENTS: readonly DemoGarment[] = [

@@ -29,6 +29,7 @@ const levelChoice = z.object({
   gapFront: length(0, 2000),
   gapBack: length(0, 2000),
   squeeze: length(0, 500),
+  opening: length(0, 3000).nullable().default(null),
 })
 
 /** What the bench edits and the working copy stores. */
@@ -37,7 +38,14 @@ export const garmentDocument = mirrors<GarmentDocument>()(
     schema: z.literal(1),
     measuringId: z.string().uuid().nullable(),
     state: clothState,
-    use: z.object({ water: z.boolean(), strapless: z.boolean() }),
+    use: z.object({
+      water: z.boolean(),
+      strapless: z.boolean(),
+      way: z.enum(['overhead', 'step-in']).default('overhead'),
+      opens: z.enum(['unsaid', 'closed', 'part', 'whole']).default('unsaid'),
+      frontRelease: z.boolean().default(false),
+      dresser: z.string().trim().max(120).default(''),
+    }),
     plans: z.object({ front: z.array(layerChoice).max(12), back: z.array(layerChoice).max(12) }),
     levels: z
       .array(levelChoice)
@@ -102,6 +110,23 @@ export const garmentSolution = mirrors<GarmentSolution>()(
     cautions: z.array(caution),
     rounds: z.number().int(),
     settled: z.boolean(),
+    passes: z
+      .array(
+        z.object({
+          level: z.string(),
+          name: z.string(),
+          needs: length(),
+          reach: length(),
+          limit: tension(),
+          tension: tension().nullable(),
+          pull: z.number().nullable(),
+          verdict: z.enum(['open', 'passes', 'tight', 'cannot']),
+          over: z.enum(['shoulders', 'bust', 'high hip', 'hip']),
+          estimated: z.boolean(),
+          from: z.string(),
+        }),
+      )
+      .default([]),
     alterationGirth: z.array(z.object({ level: z.string(), by: length() })),
   }),
 )

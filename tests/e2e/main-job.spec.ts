@@ -143,7 +143,8 @@ async function beginGarment(page: Page, hands: Hands, client: string, wearer: st
   await accessible(page)
 }
 
-const step = (page: Page, name: string) => page.getByRole('navigation', { name: 'Steps of the bench' }).getByRole('button', { name })
+const step = (page: Page, name: string) =>
+  page.getByRole('navigation', { name: 'Steps of the bench' }).getByRole('button', { name: new RegExp(`^${name}`) })
 
 async function planLayers(page: Page, hands: Hands, cloth: string): Promise<void> {
   await hands.press(step(page, 'Layers'))
@@ -153,6 +154,9 @@ async function planLayers(page: Page, hands: Hands, cloth: string): Promise<void
     await hands.pick(layer.getByLabel('Cloth'), count === 1 ? cloth : 'PN-12')
     await hands.pick(layer.getByLabel('Round the body'), 'crosswise')
   }
+  await expect(page.getByText('no dresser is named')).not.toHaveCount(0)
+  await hands.pick(page.getByLabel('It opens'), 'over its whole length')
+  await hands.write(page.getByLabel('Dresser who stays within call'), 'Ines Aster')
   const waist = page.getByRole('heading', { name: 'Waist', exact: true }).locator('xpath=ancestor::div[contains(@class, "rounded")][1]')
   await expect(waist).toContainText('%')
   await hands.press(waist.getByRole('button', { name: /^Negative ease/ }))

@@ -1,22 +1,25 @@
 import { defineCaution } from './define'
 
-/** The only opening is a lacing behind: nobody closes or opens that on their own body quickly. */
-export const cannotLeaveAlone = defineCaution<{ readonly because: 'water' | 'child' | null }>('cannot-leave-alone', {
-  severity: ({ because }) => (because === null ? 'caution' : 'stop'),
-  message: ({ because }) =>
-    because === 'water'
-      ? 'The only opening is a lacing at the back: in water the wearer cannot get out alone and quickly.'
-      : because === 'child'
-        ? 'The only opening is a lacing at the back: a child cannot get out alone and quickly.'
-        : 'The only opening is a lacing at the back: the wearer cannot get out alone.',
-  maker: 'The only opening is at the back.',
-  source: 'safety rule of the workroom: out alone and quickly; local codes decide',
-  todo: ({ because }) =>
-    because === null
-      ? 'Name a dresser who stays within call, or give it an opening at the front.'
-      : 'Give it an opening at the front that the wearer can reach.',
-  clearable: false,
-})
+/** It opens behind alone: nobody opens that on their own body quickly. On dry land a named dresser makes it a caution. */
+export const cannotLeaveAlone = defineCaution<{ readonly because: 'water' | 'child' | null; readonly dresser: string }>(
+  'cannot-leave-alone',
+  {
+    severity: ({ because }) => (because === null ? 'caution' : 'stop'),
+    message: ({ because, dresser }) =>
+      because === 'water'
+        ? 'It opens at the back alone: in water the wearer cannot get out alone and quickly.'
+        : because === 'child'
+          ? 'It opens at the back alone: a child cannot get out alone and quickly.'
+          : `It opens at the back alone: ${dresser} has to stay within call while it is worn.`,
+    maker: 'The only opening is at the back.',
+    source: 'safety rule of the workroom: out alone and quickly; local codes decide',
+    todo: ({ because }) =>
+      because === null
+        ? 'Say so to wearer and dresser, or give it a release at the front that the wearer can reach.'
+        : 'Give it an opening at the front that the wearer can reach.',
+    clearable: false,
+  },
+)
 
 /** No opening at all: whether it goes over shoulders or hips is not known from the rings alone. */
 export const noOpening = defineCaution<Record<string, never>>('no-opening', {

@@ -22,6 +22,7 @@ export function freshLevel(level: LevelId): LevelChoice {
     gapFront: mm(0),
     gapBack: mm(0),
     squeeze: mm(0),
+    opening: null,
   }
 }
 
@@ -31,7 +32,7 @@ export function freshDocument(): GarmentDocument {
     schema: 1,
     measuringId: null,
     state: 'dry',
-    use: { water: false, strapless: false },
+    use: { water: false, strapless: false, way: 'overhead', opens: 'unsaid', frontRelease: false, dresser: '' },
     plans: { front: [], back: [] },
     levels: LEVEL_IDS.map(freshLevel),
     style: defaultStyle(),

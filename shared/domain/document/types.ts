@@ -1,3 +1,4 @@
+import type { EntryWay } from '../body/passing'
 import type { LevelId } from '../body/types'
 import type { Alteration, BodiceStyle } from '../draft/types'
 import type { ClothDirection, ClothState } from '../textile/types'
@@ -25,6 +26,21 @@ export interface LevelChoice {
   readonly gapFront: Mm
   readonly gapBack: Mm
   readonly squeeze: Mm
+  /** How far the closures open here while it is put on, mm; null: as far as it stands open when worn. */
+  readonly opening: Mm | null
+}
+
+/** How it is worn, put on and left. */
+export interface GarmentUse {
+  readonly water: boolean
+  readonly strapless: boolean
+  readonly way: EntryWay
+  /** `unsaid` until somebody says it; `part`: by the opening of each level. */
+  readonly opens: 'unsaid' | 'closed' | 'part' | 'whole'
+  /** The wearer can open it alone at the front. */
+  readonly frontRelease: boolean
+  /** Who stays within call to open it; empty when nobody is named. */
+  readonly dresser: string
 }
 
 /** What the bench edits and the working copy stores. Everything computed is left out. */
@@ -32,7 +48,7 @@ export interface GarmentDocument {
   readonly schema: 1
   readonly measuringId: string | null
   readonly state: ClothState
-  readonly use: { readonly water: boolean; readonly strapless: boolean }
+  readonly use: GarmentUse
   readonly plans: { readonly front: readonly LayerChoice[]; readonly back: readonly LayerChoice[] }
   readonly levels: readonly LevelChoice[]
   readonly style: BodiceStyle

@@ -1,12 +1,13 @@
 import { checkMeasuring } from '../body/plausibility'
 import { isFlagged, wearerCautions } from '../body/wearer'
-import { cautions, orderCautions } from '../cautions/registry'
+import { orderCautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
 import type { AlterationEffect } from '../draft/alterations'
 import { textileCautions } from '../textile/cautions'
 import type { LayerCloth } from '../textile/types'
 import { mm, pascal } from '../units/brand'
 import { draftCautions } from './draft-cautions'
+import { entryCautions } from './passes'
 import type { GarmentInput, GarmentSolution } from './types'
 
 const MILLISECONDS_PER_DAY = 86_400_000
@@ -19,14 +20,6 @@ const daysBetween = (from: string, to: string): number =>
 function directionsUsed(input: GarmentInput, solution: Pick<GarmentSolution, 'plans'>): readonly LayerCloth[] {
   const used = new Set(solution.plans.flatMap((plan) => plan.layers.map((layer) => layer.cloth.clothId)))
   return input.cloths.filter((cloth) => used.has(cloth.id)).flatMap((cloth) => cloth.directions)
-}
-
-function openingCautions(input: GarmentInput): readonly Caution[] {
-  const { style, use } = input.document
-  const place = { kind: 'garment' } as const
-  if (style.centreFront === 'lacing') return []
-  if (style.centreBack !== 'lacing') return [cautions.noOpening(place, {})]
-  return [cautions.cannotLeaveAlone(place, { because: use.water ? 'water' : input.wearer.child ? 'child' : null })]
 }
 
 /** Every caution of a solved garment, stops first: body, wearer, cloth and rings, draft, openings. */
@@ -51,7 +44,7 @@ export function garmentCautions(
   return orderCautions([
     ...checkMeasuring(input.measured, null, { child: wearer.child }),
     ...wearerCautions(wearer, worn, input.measuredOn === null ? null : daysBetween(input.measuredOn, today)),
-    ...openingCautions(input),
+    ...entryCautions(input, solution.passes),
     ...textileCautions({
       rings: judged,
       plans: solution.plans,

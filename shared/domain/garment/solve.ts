@@ -15,6 +15,7 @@ import type { LayerPlan, RingGeometry, RingMode, RingSolution } from '../textile
 import { mm } from '../units/brand'
 import { fail, succeed, type Problem, type Result } from '../units/result'
 import { garmentCautions } from './cautions'
+import { passesOf } from './passes'
 import { planOf } from './plans'
 import { gapsOf, modeOf, ringGeometry } from './rings'
 import type { GarmentInput, GarmentProblem, GarmentSolution } from './types'
@@ -102,6 +103,12 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
     rings,
     draft: altered.draft,
     parked: document.alterations.filter((one) => altered.effects.some((effect) => effect.id === one.id && isNotApplied(effect.state))),
+    passes: passesOf(
+      input,
+      levels.map((level) => level.body),
+      ringInputs,
+      rings,
+    ),
     rounds,
     settled: done,
     alterationGirth,

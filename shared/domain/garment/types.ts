@@ -1,7 +1,9 @@
 import type { BodyLevel, DraftBody, MeasuredValues, WearerFlags } from '../body/types'
+import type { Passing } from '../body/passing'
 import type { Caution } from '../cautions/types'
 import type { GarmentDocument } from '../document/types'
 import type { Alteration, Draft } from '../draft/types'
+import type { LevelPass } from '../textile/getting-in'
 import type { LayerCloth, LayerPlan, RingGeometry, RingSolution, TextileSettings } from '../textile/types'
 import type { Mm } from '../units/brand'
 import type { Problem } from '../units/result'
@@ -26,6 +28,13 @@ export interface GarmentInput {
   readonly today: string
 }
 
+/** A level on the way on and off, and what it passes there. */
+export interface GarmentPass extends LevelPass {
+  readonly over: Passing['over']
+  readonly estimated: boolean
+  readonly from: string
+}
+
 export interface GarmentSolution {
   readonly engine: string
   readonly body: DraftBody
@@ -40,6 +49,8 @@ export interface GarmentSolution {
   /** Rounds of solve, draft, read and correct that were needed; settled or not. */
   readonly rounds: number
   readonly settled: boolean
+  /** The way on and off, level by level. */
+  readonly passes: readonly GarmentPass[]
   /** By level, what alterations add to the cut girth. */
   readonly alterationGirth: readonly { readonly level: string; readonly by: Mm }[]
 }

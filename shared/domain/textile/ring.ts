@@ -138,7 +138,7 @@ const stacksOf = (geometry: RingGeometry, side: BandSide): readonly Stack[] =>
  * Tension of segments in series whose cloth of widths `w` has to reach `length`: root of sum w (1 + e(T)) = length. 0 when they reach it slack.
  * The root lies between the least and the greatest tension that the segments have at their common mean strain.
  */
-function seriesTension(stacks: readonly Stack[], widths: readonly number[], length: number): number {
+export function seriesTension(stacks: readonly Stack[], widths: readonly number[], length: number): number {
   let total = 0
   let slack = 0
   for (let i = 0; i < stacks.length; i++) {

@@ -1,11 +1,13 @@
 import type { Migration } from 'kysely'
 import * as accounts from './2026-12-01T0600_accounts'
 import * as workroomRows from './2026-12-01T0601_workroom_rows'
+import * as fittings from './2026-12-01T1100_fittings'
 
 /** Every migration by its file name, in order. A test holds this list against the folder. */
 export const migrations: Readonly<Record<string, Migration>> = {
   '2026-12-01T0600_accounts': accounts,
   '2026-12-01T0601_workroom_rows': workroomRows,
+  '2026-12-01T1100_fittings': fittings,
 }
 
 /** The newest migration: a server built with it refuses an older schema. */

@@ -3,11 +3,12 @@ import type { LevelId } from '../../shared/domain/body/types'
 import type { Alteration } from '../../shared/domain/draft/types'
 import type { GarmentDocument, LayerChoice } from '../../shared/domain/document/types'
 import { DEFAULT_TEXTILE_SETTINGS } from '../../shared/domain/textile/defaults'
-import { mm, pascal } from '../../shared/domain/units/brand'
+import { mm, newton, pascal } from '../../shared/domain/units/brand'
 import { DEMO_ACCOUNTS, DEMO_ZONE } from '../../shared/demo'
 import { enterWorkroom, type Database, type Work } from '../../server/db/client'
 import { createClient } from '../../server/services/clients'
 import { archiveCloth, createCloth, createTest } from '../../server/services/cloths'
+import { recordFitting } from '../../server/services/fittings'
 import { createGarment } from '../../server/services/garments'
 import { createMeasuring } from '../../server/services/measurings'
 import { dateIn, type Room } from '../../server/services/room'
@@ -226,12 +227,24 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
       const wearers = await seedPeople(room, DEMO_CLIENTS)
       for (const garment of GARMENTS) {
         const { id, saved } = await seedGarment(room, garment, wearers, cloths)
-        if (garment.code === 'LS-031')
-          await createVersion(room, id, {
+        if (garment.code === 'LS-031') {
+          const fits = await createVersion(room, id, {
             base: saved.revision,
             name: 'Mock-up that fits',
             note: 'Fitted; to be recut in the final cloth.',
           })
+          await recordFitting(room, id, {
+            versionId: fits.id,
+            fittedOn: '2026-11-24',
+            note: 'Laced by Mirela; the waist a little narrow.',
+            levels: [
+              { level: 'bust', gap: mm(52), feel: 'right', pull: null },
+              { level: 'underbust', gap: mm(50), feel: 'right', pull: null },
+              { level: 'waist', gap: mm(38), feel: 'close', pull: { force: newton(2.4), tab: mm(40) } },
+              { level: 'high-hip', gap: mm(51), feel: 'right', pull: null },
+            ],
+          })
+        }
         if (garment.code !== 'LS-032') continue
         const version = await createVersion(room, id, { base: saved.revision, name: 'First cut', note: 'After the mock-up fitting.' })
         if (version.stops > 0)
@@ -277,7 +290,13 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
         layers: [['Shell', 'NQ-1']],
       }
       const { id: made, saved } = await seedGarment(room, garment, wearers, { 'NQ-1': id })
-      await createVersion(room, made, { base: saved.revision, name: 'Draft one', note: null })
+      const one = await createVersion(room, made, { base: saved.revision, name: 'Draft one', note: null })
+      await recordFitting(room, made, {
+        versionId: one.id,
+        fittedOn: '2026-11-20',
+        note: null,
+        levels: [{ level: 'waist', gap: null, feel: 'right', pull: null }],
+      })
     }
     return { first, second }
   })

@@ -77,6 +77,18 @@ export interface Cloth {
   workroomId: string
 }
 
+export interface Fitting {
+  fittedOn: string
+  garmentId: string
+  id: Generated<string>
+  levels: Json
+  note: string | null
+  savedAt: Timestamp
+  savedBy: string | null
+  versionId: string
+  workroomId: string
+}
+
 export interface Garment {
   archivedAt: Timestamp | null
   code: string
@@ -230,6 +242,7 @@ export interface DB {
   clearance: Clearance
   client: Client
   cloth: Cloth
+  fitting: Fitting
   garment: Garment
   loginAttempt: LoginAttempt
   measuring: Measuring

@@ -53,6 +53,10 @@ export const garmentDocument = mirrors<GarmentDocument>()(
       .refine((levels) => new Set(levels.map((one) => one.level)).size === levels.length, 'A level stands only once.'),
     style: bodiceStyle,
     alterations: z.array(alteration).max(500),
+    stiffness: z
+      .object({ factor: z.number().min(0.05).max(20), uncertainty: z.number().min(0).max(5), learntOn: isoDate })
+      .nullable()
+      .default(null),
   }),
 )
 

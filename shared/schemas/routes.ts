@@ -3,6 +3,7 @@ import { done, idParams, list, page, pageQuery } from './base'
 import { client, clientBody, clientSummary, clientUpdate, clientWhole } from './clients'
 import { cloth, clothBody, clothSummary, clothTest, clothUpdate, clothWhole, testBody, testUpdate } from './cloths'
 import { draft } from './draft'
+import { fitting, fittingBody } from './fittings'
 import { garmentBody, garmentSummary, garmentUpdate, garmentWhole, workingCopy, workingCopySave } from './garments'
 import { measuring, measuringBody, measuringUpdate } from './measuring'
 import { printQuery, tileMap, tilePlan } from './print'
@@ -409,6 +410,27 @@ export const routes = {
     response: workingCopy,
     group: 'Garments',
     summary: 'Save the working copy. A stale base answers 409 with theirs.',
+  },
+
+  'fittings.list': {
+    ...of('garment'),
+    method: 'GET',
+    path: '/api/garments/:id/fittings',
+    access: drafting,
+    response: list(fitting),
+    group: 'Fittings',
+    summary: 'Fittings of a garment, newest first.',
+  },
+  'fittings.create': {
+    ...of('garment'),
+    method: 'POST',
+    path: '/api/garments/:id/fittings',
+    access: drafting,
+    body: fittingBody,
+    response: fitting,
+    status: 201,
+    group: 'Fittings',
+    summary: 'Record what was seen at a fitting of a version. It never changes again.',
   },
 
   'versions.list': {

@@ -52,6 +52,7 @@ describe('workrooms in SQL, as the role that serves', () => {
       'clearance',
       'client',
       'cloth',
+      'fitting',
       'garment',
       'measuring',
       'membership',

@@ -1,5 +1,6 @@
 import type { LevelId } from '../body/types'
 import type { Alteration, BodiceStyle, PointRole } from '../draft/types'
+import type { Stiffness } from '../textile/stiffness'
 import type { ClothState } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
 import type { GarmentDocument, LayerChoice, LevelChoice } from './types'
@@ -14,6 +15,7 @@ export type Command =
   | { readonly kind: 'set-layers'; readonly zone: Zone | 'both'; readonly layers: readonly LayerChoice[] }
   | { readonly kind: 'set-level'; readonly level: LevelId | 'all'; readonly patch: Partial<Omit<LevelChoice, 'level'>> }
   | { readonly kind: 'set-style'; readonly patch: Partial<BodiceStyle> }
+  | { readonly kind: 'set-stiffness'; readonly stiffness: Stiffness | null }
   | {
       readonly kind: 'move-point'
       readonly role: PointRole
@@ -104,6 +106,8 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
       }
     case 'set-style':
       return { ...document, style: { ...document.style, ...command.patch } }
+    case 'set-stiffness':
+      return { ...document, stiffness: command.stiffness }
     case 'move-point':
     case 'set-move':
       return { ...document, alterations: moved(document.alterations, command) }
@@ -166,6 +170,8 @@ function commandWords(command: Command): string {
       return command.level === 'all' ? 'all levels' : command.level.replace('-', ' ')
     case 'set-style':
       return 'style'
+    case 'set-stiffness':
+      return 'stiffness learnt'
     case 'move-point':
     case 'set-move':
       return roleWords(command.role)

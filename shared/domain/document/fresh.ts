@@ -37,5 +37,6 @@ export function freshDocument(): GarmentDocument {
     levels: LEVEL_IDS.map(freshLevel),
     style: defaultStyle(),
     alterations: [],
+    stiffness: null,
   }
 }

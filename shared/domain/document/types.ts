@@ -1,6 +1,7 @@
 import type { EntryWay } from '../body/passing'
 import type { LevelId } from '../body/types'
 import type { Alteration, BodiceStyle } from '../draft/types'
+import type { Stiffness } from '../textile/stiffness'
 import type { ClothDirection, ClothState } from '../textile/types'
 import type { Mm, NewtonPerMetre, Pascal } from '../units/brand'
 
@@ -53,4 +54,6 @@ export interface GarmentDocument {
   readonly levels: readonly LevelChoice[]
   readonly style: BodiceStyle
   readonly alterations: readonly Alteration[]
+  /** What a fitting taught of the cloth; null until one did, or once it was dropped. */
+  readonly stiffness: Stiffness | null
 }

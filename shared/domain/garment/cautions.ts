@@ -1,8 +1,9 @@
 import { checkMeasuring } from '../body/plausibility'
 import { isFlagged, wearerCautions } from '../body/wearer'
-import { orderCautions } from '../cautions/registry'
+import { cautions, orderCautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
 import type { AlterationEffect } from '../draft/alterations'
+import { isOddStiffness } from '../textile/stiffness'
 import { textileCautions } from '../textile/cautions'
 import type { LayerCloth } from '../textile/types'
 import { mm, pascal } from '../units/brand'
@@ -20,6 +21,16 @@ const daysBetween = (from: string, to: string): number =>
 function directionsUsed(input: GarmentInput, solution: Pick<GarmentSolution, 'plans'>): readonly LayerCloth[] {
   const used = new Set(solution.plans.flatMap((plan) => plan.layers.map((layer) => layer.cloth.clothId)))
   return input.cloths.filter((cloth) => used.has(cloth.id)).flatMap((cloth) => cloth.directions)
+}
+
+function stiffnessCautions(stiffness: GarmentInput['document']['stiffness']): readonly Caution[] {
+  if (stiffness === null) return []
+  const { factor, learntOn } = stiffness
+  const place = { kind: 'garment' } as const
+  return [
+    cautions.stiffnessLearnt(place, { factor, learntOn }),
+    ...(isOddStiffness(factor) ? [cautions.stiffnessOdd(place, { factor, learntOn })] : []),
+  ]
 }
 
 /** Every caution of a solved garment, stops first: body, wearer, cloth and rings, draft, openings. */
@@ -45,6 +56,7 @@ export function garmentCautions(
     ...checkMeasuring(input.measured, null, { child: wearer.child }),
     ...wearerCautions(wearer, worn, input.measuredOn === null ? null : daysBetween(input.measuredOn, today)),
     ...entryCautions(input, solution.passes),
+    ...stiffnessCautions(document.stiffness),
     ...textileCautions({
       rings: judged,
       plans: solution.plans,

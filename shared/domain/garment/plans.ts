@@ -1,4 +1,5 @@
 import type { LayerChoice } from '../document/types'
+import { stiffened, type Stiffness } from '../textile/stiffness'
 import type { ClothState, Layer, LayerCloth, LayerPlan } from '../textile/types'
 import { fail, succeed, type Result } from '../units/result'
 import type { GarmentCloth, GarmentProblem } from './types'
@@ -15,6 +16,7 @@ export function planOf(
   choices: readonly LayerChoice[],
   cloths: readonly GarmentCloth[],
   state: ClothState,
+  stiffness: Stiffness | null = null,
 ): Result<LayerPlan, GarmentProblem> {
   if (choices.length === 0) {
     return fail({
@@ -47,7 +49,7 @@ export function planOf(
         at: cloth.id,
       })
     }
-    layers.push({ id: choice.id, label: choice.label, cloth: tested, count: choice.count, cutRatio: choice.cutRatio })
+    layers.push({ id: choice.id, label: choice.label, cloth: stiffened(tested, stiffness), count: choice.count, cutRatio: choice.cutRatio })
   }
   return succeed({ zone, layers })
 }

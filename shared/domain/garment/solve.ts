@@ -57,9 +57,9 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   const [styleProblem] = checkStyle(document.style, body.value)
   if (styleProblem) return atStep('draft', styleProblem)
 
-  const front = planOf('front', document.plans.front, input.cloths, document.state)
+  const front = planOf('front', document.plans.front, input.cloths, document.state, document.stiffness)
   if (!front.ok) return front
-  const back = planOf('back', document.plans.back, input.cloths, document.state)
+  const back = planOf('back', document.plans.back, input.cloths, document.state, document.stiffness)
   if (!back.ok) return back
   const plans = { front: front.value, back: back.value }
 

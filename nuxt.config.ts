@@ -51,6 +51,7 @@ export default defineNuxtConfig({
         'style-src': ["'self'", "'unsafe-inline'"],
         'img-src': ["'self'", 'data:', 'blob:'],
         'font-src': ["'self'", 'data:'],
+        'worker-src': ["'self'"],
         'object-src': ["'none'"],
         'frame-ancestors': ["'none'"],
         'form-action': ["'self'"],
@@ -66,7 +67,9 @@ export default defineNuxtConfig({
     experimental: { asyncContext: true },
   },
   vite: {
-    optimizeDeps: { include: ['vee-validate', '@vee-validate/zod', 'zod', 'konva', 'konva/lib/Core', 'vue-konva', 'clipper2-ts', 'nnls'] },
+    optimizeDeps: {
+      include: ['vee-validate', '@vee-validate/zod', 'zod', 'konva', 'konva/lib/Core', 'papaparse', 'vue-konva', 'clipper2-ts', 'nnls'],
+    },
   },
   typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
 })

@@ -1,4 +1,12 @@
-import type { ClothDirection, ClothState, StretchReading, StretchTest } from '#shared/domain/textile/types'
+import type {
+  ClothDirection,
+  ClothState,
+  StretchReading,
+  StretchSpecimen,
+  StretchTest,
+  TensileRecord,
+  TestMethod,
+} from '#shared/domain/textile/types'
 import { mm, newton, strain } from '#shared/domain/units/brand'
 import type { LoadUnit } from '~/composables/useNumberField'
 
@@ -15,9 +23,16 @@ export interface StripRow {
   lengths: Entry[]
 }
 
+/** A machine's file as it was read: one specimen. */
+export interface RunEntry extends TensileRecord {
+  readonly specimen: StretchSpecimen
+}
+
 /** A stretch test while it is being entered: load steps down, specimens across. */
 export interface StripForm {
-  kind: 'strip' | 'label'
+  kind: 'strip' | 'run' | 'label'
+  method: TestMethod
+  runs: RunEntry[]
   direction: ClothDirection
   state: ClothState
   testedOn: string
@@ -51,6 +66,8 @@ export function freshStripForm(today: string): StripForm {
   const three = (make: () => Entry) => [make(), make(), make()]
   return {
     kind: 'strip',
+    method: 'workroom strip',
+    runs: [],
     direction: 'crosswise',
     state: 'dry',
     testedOn: today,
@@ -84,12 +101,26 @@ export function stripFormOf(
   }
   const known = (value: number) => entry(value, '')
   if (test.kind === 'label') return { ...common, stretch: known(test.stretch) }
+  const method = test.method ?? 'workroom strip'
+  if (test.runs) {
+    const { width, gauge } = test.specimens[0]!
+    const runs = test.runs.map((run, i) => ({ ...run, specimen: test.specimens[i]! }))
+    return {
+      ...common,
+      kind: 'run',
+      method,
+      runs,
+      widths: form.widths.map(() => known(width)),
+      gauges: form.gauges.map(() => known(gauge)),
+    }
+  }
   const keyOf = (reading: StretchReading) => `${reading.on} ${reading.load.toFixed(6)}`
   const steps = new Map<string, StretchReading>()
   for (const specimen of test.specimens)
     for (const reading of specimen.readings) steps.set(keyOf(reading), steps.get(keyOf(reading)) ?? reading)
   return {
     ...common,
+    method,
     widths: test.specimens.map((specimen) => known(specimen.width)),
     gauges: test.specimens.map((specimen) => known(specimen.gauge)),
     rests: test.specimens.map((specimen) => (specimen.restLength === null ? empty() : known(specimen.restLength))),
@@ -131,6 +162,21 @@ export function readStripForm(form: StripForm): StripReading {
       placeOf: nowhere,
     }
   }
+  if (form.kind === 'run') {
+    if (form.runs.length === 0) return { test: null, lacking: 'Choose a file of the machine: figures and curve follow.', placeOf: nowhere }
+    return {
+      test: {
+        kind: 'strip',
+        direction: form.direction,
+        state: form.state,
+        method: form.method,
+        specimens: form.runs.map((run) => run.specimen),
+        runs: form.runs.map(({ specimen: _specimen, ...run }) => run),
+      },
+      lacking: null,
+      placeOf: nowhere,
+    }
+  }
   const used = form.widths
     .map((_, specimen) => specimen)
     .filter((specimen) => form.rows.some((row) => row.lengths[specimen]!.value !== null))
@@ -144,6 +190,7 @@ export function readStripForm(form: StripForm): StripReading {
     kind: 'strip',
     direction: form.direction,
     state: form.state,
+    method: form.method,
     specimens: used.map((specimen) => ({
       width: mm(form.widths[specimen]!.value!),
       gauge: mm(form.gauges[specimen]!.value!),

@@ -32,6 +32,19 @@ export const stretchTest = mirrors<StretchTest>()(
       direction,
       state: clothState,
       specimens: z.array(specimen).min(1, 'Enter at least one specimen.').max(20),
+      method: z.enum(['workroom strip', 'EN ISO 20932-1', 'ASTM D2594', 'ASTM D3107', 'ASTM D4964', 'other']).optional(),
+      runs: z
+        .array(
+          z.object({
+            name: z.string().max(200),
+            rows: z.number().int().min(0),
+            cycles: z.number().int().min(0).max(10_000),
+            hasReturn: z.boolean(),
+            earlier: z.array(z.array(z.object({ strain: ratio(), tension: tension() })).max(64)).max(60),
+          }),
+        )
+        .max(20)
+        .optional(),
     }),
     z.object({ kind: z.literal('label'), direction, state: clothState, stretch: ratio(0.01, 4) }),
   ]),

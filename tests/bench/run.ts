@@ -3,6 +3,8 @@
  * milliseconds are printed for the reader.
  */
 import { Bezier } from 'bezier-js'
+import Papa from 'papaparse'
+import { readMachineFile } from '../../composables/cloth/tensile-file'
 import { solveGarment } from '../../shared/domain/garment/solve'
 import { draftBodice } from '../../shared/domain/draft/bodice'
 import { solveRing } from '../../shared/domain/textile/ring'
@@ -39,9 +41,52 @@ const ringTime = median(() => ringInputs.forEach((geometry) => solveRing(geometr
 const draftTime = median(() => draftBodice({ body, style: input.document.style, widths }))
 const wholeTime = median(() => solveGarment(input))
 
+/** Eight levels of six segments, five layers each: as wide as a garment gets. */
+const [wideGeometry] = ringInputs
+const manyLayers = {
+  ...wideGeometry!.segments[0]!.plan,
+  layers: Array.from({ length: 5 }, () => wideGeometry!.segments[0]!.plan.layers[0]!),
+}
+const wideRing = {
+  ...wideGeometry!,
+  segments: Array.from({ length: 6 }, (_, i) => ({
+    id: `segment-${i}`,
+    half: i < 3 ? ('front' as const) : ('back' as const),
+    plan: manyLayers,
+    share: 1 / 3,
+  })),
+}
+const solveWide = (count: number) => () => {
+  for (let i = 0; i < count; i++) solveRing(wideRing, { solve: 'cut', hold: pascal(1000 + i) }, input.settings)
+}
+const wideTime = median(solveWide(8))
+const runTime = median(solveWide(200), 60)
+
+/** A machine's file of 100,000 rows, five cycles. Invented. */
+const lines = ['Time (s),Extension (mm),Load (N)']
+for (let i = 0; i < 100_000; i++) {
+  const extension = 60 * (1 - Math.abs((i % 20_000) / 10_000 - 1))
+  lines.push(`${(i / 100).toFixed(2)},${extension.toFixed(4)},${(0.15 * extension).toFixed(5)}`)
+}
+const text = lines.join('\n')
+const once = async (work: () => unknown): Promise<number> => {
+  const times: number[] = []
+  for (let i = 0; i < 5; i++) {
+    const began = performance.now()
+    await work()
+    times.push(performance.now() - began)
+  }
+  return times.sort((a, b) => a - b)[2]!
+}
+const bareParse = await once(() => Papa.parse(text).data.length)
+const fileTime = await once(() => readMachineFile({ file: text, width: mm(50), gauge: mm(100), chosen: {} }))
+const { maxRSS } = process.resourceUsage()
+
 const rows = [
   { what: `peer: bezier-js, length of the draft's ${curves.length} curves`, time: peer, most: Infinity },
   { what: `rings: ${ringInputs.length} levels, 4 layers, cut from hold`, time: ringTime, most: 12 },
+  { what: 'rings: 8 levels, 6 segments, 5 layers, cut from hold', time: wideTime, most: 40 },
+  { what: 'rings: 200 of a size run, 6 segments, 5 layers', time: runTime, most: 900 },
   { what: 'draft: four pieces, trued, notched, offset', time: draftTime, most: 120 },
   { what: 'whole garment: solve, draft, read, judge', time: wholeTime, most: 150 },
 ]
@@ -52,4 +97,10 @@ for (const { what, time, most } of rows) {
   failed ||= over
   console.log(`${time.toFixed(3)} ms  ×${ratio.toFixed(1)}${most < Infinity ? ` (guard ×${most})` : ''}  ${what}${over ? '  OVER' : ''}`)
 }
+const fileRatio = fileTime / bareParse
+failed ||= fileRatio > 4
+console.log(`${bareParse.toFixed(0)} ms  ×1.0  bare: papaparse, 100,000 rows to a table`)
+console.log(
+  `${fileTime.toFixed(0)} ms  ×${fileRatio.toFixed(1)} (guard ×4)  machine's file of 100,000 rows read as a test; at most ${(maxRSS / 1000).toFixed(0)} MB held by the whole process${fileRatio > 4 ? '  OVER' : ''}`,
+)
 process.exit(failed ? 1 : 0)

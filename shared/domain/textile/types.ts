@@ -19,6 +19,19 @@ export interface StretchSpecimen {
   readonly restLength: Mm | null
 }
 
+/** How a strip was pulled, by the name of the method. */
+export type TestMethod = 'workroom strip' | 'EN ISO 20932-1' | 'ASTM D2594' | 'ASTM D3107' | 'ASTM D4964' | 'other'
+
+/** What is kept of a machine's file beside the readings taken from it. */
+export interface TensileRecord {
+  readonly name: string
+  readonly rows: number
+  readonly cycles: number
+  readonly hasReturn: boolean
+  /** Loadings before the last, for drawing. */
+  readonly earlier: readonly (readonly { readonly strain: Strain; readonly tension: NewtonPerMetre }[])[]
+}
+
 /** A stretch test of one cloth in one direction and state, as the workroom entered it. */
 export type StretchTest =
   | {
@@ -26,6 +39,9 @@ export type StretchTest =
       readonly direction: ClothDirection
       readonly state: ClothState
       readonly specimens: readonly StretchSpecimen[]
+      readonly method?: TestMethod
+      /** One for each specimen where they were read from a tensile machine's files. */
+      readonly runs?: readonly TensileRecord[]
     }
   | {
       /** Only a stretch percentage is known (label, hand pull): the assumed case. */

@@ -1,3 +1,4 @@
+import { acknowledgementOf } from '#shared/domain/cautions/acknowledge'
 import type { Caution, Severity } from '#shared/domain/cautions/types'
 import type { GarmentDocument } from '#shared/domain/document/types'
 import type { GarmentProblem, GarmentSolution } from '#shared/domain/garment/types'
@@ -49,7 +50,8 @@ const plural = (count: number, one: string, many = `${one}s`) => `${count} ${cou
 /** The steps of the bench with honest states: what is there, what is missing, where cautions stand. */
 export function benchSteps(facts: StepFacts): StepState[] {
   const { document, solution, problem, versions } = facts
-  const current = problem ? [] : (solution?.cautions ?? [])
+  const standing = problem ? [] : (solution?.cautions ?? [])
+  const current = standing.filter((caution) => acknowledgementOf(caution, document.acknowledged) === null)
   const worst = (step: BenchStep) => {
     const own = current.filter((caution) => stepOf(caution) === step && caution.severity !== 'note')
     return own.some((caution) => caution.severity === 'stop') ? 'stop' : own.length > 0 ? 'caution' : null

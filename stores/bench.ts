@@ -4,6 +4,7 @@ import { applyCommand, invertDiff, replayDiff, type Command, type DocumentDiff }
 import type { GarmentDocument } from '#shared/domain/document/types'
 import type { PointRole } from '#shared/domain/draft/types'
 import { solveGarment } from '#shared/domain/garment/solve'
+import { garmentDocument } from '#shared/schemas/garments'
 import type { GarmentInput, GarmentProblem, GarmentSolution } from '#shared/domain/garment/types'
 import type { MeasuredValues, MeasurementKey } from '#shared/domain/body/types'
 import { mm } from '#shared/domain/units/brand'
@@ -136,8 +137,10 @@ export const useBench = defineStore('bench', () => {
     if (!import.meta.client || !facts.value || !held.value) return
     const stored = localStorage.getItem(keptUnder(facts.value))
     if (!stored) return
-    const unsent = JSON.parse(stored) as { readonly base: number; readonly document: GarmentDocument }
-    kept.value = unsent.document
+    const unsent = JSON.parse(stored) as { readonly base: number; readonly document: unknown }
+    const read = garmentDocument.safeParse(unsent.document)
+    if (!read.success) return
+    kept.value = read.data
     if (unsent.base === held.value.revision) schedule()
     else {
       theirs.value = held.value

@@ -1,7 +1,9 @@
 import { splitBody, type VersionBody, type VersionKept } from '../../shared/domain/garment/snapshot'
+import { garmentDocument } from '../../shared/schemas/garments'
 import type { ParsedBody, RouteAnswer } from '../../shared/schemas/routes'
 import type { VersionSummary } from '../../shared/schemas/versions'
 import { fromJson } from '../db/client'
+import type { Json } from '../db/tables'
 import { findGarmentById, lockGarmentById } from '../db/queries/garments'
 import {
   findVersionBody,
@@ -53,6 +55,12 @@ export async function listVersions({ db, workroom, role }: Room, garment: string
   return { items: shown.map((row) => summaryOf(row, role)) }
 }
 
+/** What a version keeps, its document in today's shape. */
+function keptOf(stored: Json): VersionKept {
+  const kept = fromJson<VersionKept>(stored)
+  return { ...kept, document: garmentDocument.parse(kept.document) }
+}
+
 /** The frame of a draft and its findings speak of the body; a measuring is the wearer's. */
 const forMaker = (kept: VersionKept): VersionKept => ({
   ...kept,
@@ -63,7 +71,7 @@ const forMaker = (kept: VersionKept): VersionKept => ({
 export async function getVersion(room: Room, id: string): Promise<RouteAnswer<'versions.get'>> {
   const { db, workroom, role } = room
   const row = await readableVersion(room, id)
-  const kept = fromJson<VersionKept>(found(await findVersionKept(db, workroom, id)).kept)
+  const kept = keptOf(found(await findVersionKept(db, workroom, id)).kept)
   const own = role === 'maker' ? undefined : await findVersionBody(db, workroom, id)
   return {
     ...summaryOf(row, role),
@@ -101,7 +109,7 @@ export async function createVersion(room: Room, garment: string, { base, name, n
 export async function restoreVersion(room: Room, id: string, { base }: ParsedBody<'versions.restore'>) {
   const { db, workroom } = room
   const row = found(await findVersionById(db, workroom, id))
-  const { document } = fromJson<VersionKept>(found(await findVersionKept(db, workroom, id)).kept)
+  const { document } = keptOf(found(await findVersionKept(db, workroom, id)).kept)
   return saveWorkingCopy(room, row.garmentId, { base, document })
 }
 

@@ -2,8 +2,10 @@ import type { MeasuredValues } from '../../shared/domain/body/types'
 import type { GarmentDocument } from '../../shared/domain/document/types'
 import { solveGarment } from '../../shared/domain/garment/solve'
 import type { GarmentInput, GarmentSolution } from '../../shared/domain/garment/types'
+import { garmentDocument } from '../../shared/schemas/garments'
 import type { ParsedBody, RouteAnswer } from '../../shared/schemas/routes'
 import { fromJson } from '../db/client'
+import type { Json } from '../db/tables'
 import { findWorkingCopy, keepGoodSolution, saveWorkingCopyAt } from '../db/queries/garments'
 import { findMeasuringById } from '../db/queries/measurings'
 import { clothsForGarment } from './cloths'
@@ -12,6 +14,9 @@ import { found, refuse } from './refusal'
 import type { Room } from './room'
 import { limitsOfWearer } from './wearers'
 import { settingsOf } from './workroom'
+
+/** A stored document in today's shape: what was added since it was saved takes its default. */
+export const documentOf = (stored: Json): GarmentDocument => garmentDocument.parse(fromJson<unknown>(stored))
 
 type WorkingCopyRow = NonNullable<Awaited<ReturnType<typeof findWorkingCopy>>>
 type View = RouteAnswer<'garments.workingCopy'>
@@ -38,7 +43,7 @@ export async function garmentInputOf(
 }
 
 async function viewOf(room: Room, row: WorkingCopyRow): Promise<View> {
-  const document = fromJson<GarmentDocument>(row.document)
+  const document = documentOf(row.document)
   const input = await garmentInputOf(room, row, document)
   const solved = solveGarment(input)
   return {

@@ -53,6 +53,17 @@ export const garmentDocument = mirrors<GarmentDocument>()(
       .refine((levels) => new Set(levels.map((one) => one.level)).size === levels.length, 'A level stands only once.'),
     style: bodiceStyle,
     alterations: z.array(alteration).max(500),
+    acknowledged: z
+      .array(
+        z.object({
+          key: z.string().max(120),
+          reason: z.string().trim().min(1, 'Say why.').max(500),
+          by: z.string().max(160),
+          on: isoDate,
+        }),
+      )
+      .max(200)
+      .default([]),
     stiffness: z
       .object({ factor: z.number().min(0.05).max(20), uncertainty: z.number().min(0).max(5), learntOn: isoDate })
       .nullable()

@@ -1,4 +1,5 @@
 import type { LevelId } from '../body/types'
+import type { Acknowledged } from '../cautions/acknowledge'
 import type { Alteration, BodiceStyle, PointRole } from '../draft/types'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothState } from '../textile/types'
@@ -16,6 +17,8 @@ export type Command =
   | { readonly kind: 'set-level'; readonly level: LevelId | 'all'; readonly patch: Partial<Omit<LevelChoice, 'level'>> }
   | { readonly kind: 'set-style'; readonly patch: Partial<BodiceStyle> }
   | { readonly kind: 'set-stiffness'; readonly stiffness: Stiffness | null }
+  | { readonly kind: 'acknowledge'; readonly acknowledged: Acknowledged }
+  | { readonly kind: 'withdraw-acknowledgement'; readonly key: string }
   | {
       readonly kind: 'move-point'
       readonly role: PointRole
@@ -106,6 +109,13 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
       }
     case 'set-style':
       return { ...document, style: { ...document.style, ...command.patch } }
+    case 'acknowledge':
+      return {
+        ...document,
+        acknowledged: [...document.acknowledged.filter((one) => one.key !== command.acknowledged.key), command.acknowledged],
+      }
+    case 'withdraw-acknowledgement':
+      return { ...document, acknowledged: document.acknowledged.filter((one) => one.key !== command.key) }
     case 'set-stiffness':
       return { ...document, stiffness: command.stiffness }
     case 'move-point':
@@ -170,6 +180,9 @@ function commandWords(command: Command): string {
       return command.level === 'all' ? 'all levels' : command.level.replace('-', ' ')
     case 'set-style':
       return 'style'
+    case 'acknowledge':
+    case 'withdraw-acknowledgement':
+      return 'caution acknowledged'
     case 'set-stiffness':
       return 'stiffness learnt'
     case 'move-point':

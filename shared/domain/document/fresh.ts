@@ -37,6 +37,7 @@ export function freshDocument(): GarmentDocument {
     levels: LEVEL_IDS.map(freshLevel),
     style: defaultStyle(),
     alterations: [],
+    acknowledged: [],
     stiffness: null,
   }
 }

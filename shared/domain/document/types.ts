@@ -1,5 +1,6 @@
 import type { EntryWay } from '../body/passing'
 import type { LevelId } from '../body/types'
+import type { Acknowledged } from '../cautions/acknowledge'
 import type { Alteration, BodiceStyle } from '../draft/types'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothDirection, ClothState } from '../textile/types'
@@ -54,6 +55,8 @@ export interface GarmentDocument {
   readonly levels: readonly LevelChoice[]
   readonly style: BodiceStyle
   readonly alterations: readonly Alteration[]
+  /** Cautions seen and answered for. One whose figures have changed since no longer stands. */
+  readonly acknowledged: readonly Acknowledged[]
   /** What a fitting taught of the cloth; null until one did, or once it was dropped. */
   readonly stiffness: Stiffness | null
 }

@@ -47,6 +47,8 @@ export interface StripForm {
   rests: Entry[]
   rows: StripRow[]
   stretch: Entry
+  /** A ruler pull: the marks at rest, and drawn by hand. */
+  ruler: { rest: Entry; drawn: Entry }
 }
 
 export const empty = (): Entry => ({ value: null, typed: '' })
@@ -81,6 +83,7 @@ export function freshStripForm(today: string): StripForm {
     rests: three(empty),
     rows: steps.map(([grams, on]) => ({ load: entry(grams * GRAM, `${grams} g`), on, lengths: three(empty) })),
     stretch: empty(),
+    ruler: { rest: empty(), drawn: empty() },
   }
 }
 

@@ -80,6 +80,23 @@ export function curvePoints(specimens: readonly StretchSpecimen[]): readonly Tes
 const problem = (code: string, message: string, todo: string, at: string): { readonly ok: false; readonly problem: Problem } =>
   fail({ code, message, todo, at })
 
+/** A length may fall by so much of the gauge under a heavier load before it is a slip: reading by eye. Common practice. */
+const READING_SLIP = 0.01
+
+/** The first loading reading that is shorter than one under a lighter load, by its place; null where lengths rise with their loads. */
+function fallingAt(specimen: StretchSpecimen): number | null {
+  const loading = specimen.readings
+    .map((reading, place) => ({ reading, place }))
+    .filter(({ reading }) => reading.on === 'loading')
+    .sort((a, b) => a.reading.load - b.reading.load)
+  let longest = -Infinity
+  for (const { reading, place } of loading) {
+    if (reading.length < longest - READING_SLIP * specimen.gauge) return place
+    longest = Math.max(longest, reading.length)
+  }
+  return null
+}
+
 /** Holds a strip test against what can be: widths, gauges, loads, lengths. The first slip found is the problem. */
 export function checkStripTest(specimens: readonly StretchSpecimen[]): Result<true> {
   if (specimens.length === 0)
@@ -119,6 +136,15 @@ export function checkStripTest(specimens: readonly StretchSpecimen[]): Result<tr
           `${here}.length`,
         )
       }
+    }
+    const fallen = fallingAt(specimen)
+    if (fallen !== null) {
+      return problem(
+        'length-falls',
+        `${name}, reading ${fallen + 1} is shorter than under a lighter load: length cannot fall while the load grows.`,
+        'Read the length again, or enter it on the way back if the load was being taken off.',
+        `${at}.readings.${fallen}.length`,
+      )
     }
     if (specimen.restLength !== null && !(specimen.restLength > 0 && Number.isFinite(specimen.restLength))) {
       return problem(

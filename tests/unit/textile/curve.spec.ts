@@ -60,7 +60,8 @@ describe('the fitted load curve', () => {
   it('agrees with the active-set solver of another hand (nnls), wherever that one settles', () => {
     let compared = 0
     fc.assert(
-      fc.property(fc.array(between(1, 600), { minLength: 4, maxLength: 8 }), (tensions) => {
+      fc.property(fc.array(between(1, 600), { minLength: 4, maxLength: 8 }), (drawn) => {
+        const tensions = drawn.toSorted((one, other) => one - other)
         const strains = tensions.map((_, i) => 0.08 * (i + 1))
         const read = (e: number) => tensions[Math.round(e / 0.08) - 1]!
         const curve = must(fitLoadCurve(strip(specimen(read, strains))))
@@ -148,6 +149,17 @@ describe('the fitted load curve', () => {
     ['no width', strip({ ...specimen((e) => 400 * e, STRAINS), width: mm(0) }), 'width-impossible'],
     ['no gauge', strip({ ...specimen((e) => 400 * e, STRAINS), gauge: mm(0) }), 'gauge-impossible'],
     ['a reading shorter than the gauge', strip({ ...specimen((e) => 400 * e, [0.1]), gauge: mm(120) }), 'reading-shorter'],
+    [
+      'a length that falls while the load grows',
+      strip({
+        ...specimen((e) => 400 * e, []),
+        readings: [
+          { load: newton(1), length: mm(120), on: 'loading' },
+          { load: newton(2), length: mm(115), on: 'loading' },
+        ],
+      }),
+      'length-falls',
+    ],
     ['a length in the wrong unit', strip({ ...specimen((e) => 400 * e, [0.1]), gauge: mm(10) }), 'reading-impossible'],
     ['a label without stretch', { kind: 'label', direction: 'crosswise', state: 'dry', stretch: strain(0) } as const, 'no-stretch'],
   ])('refuses %s', (_, test, code) => {

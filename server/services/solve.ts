@@ -1,9 +1,11 @@
+import { readFitting } from '../../shared/domain/fit/fitting'
 import { completeBody } from '../../shared/domain/body/complete'
 import { bodyLevels } from '../../shared/domain/body/levels'
 import { freshLevel } from '../../shared/domain/document/fresh'
 import { draftBodice } from '../../shared/domain/draft/bodice'
 import { checkStyle, defaultStyle } from '../../shared/domain/draft/style'
 import type { Draft } from '../../shared/domain/draft/types'
+import { recut } from '../../shared/domain/garment/recut'
 import { gapsOf, modeOf, ringGeometry } from '../../shared/domain/garment/rings'
 import { fitLoadCurve } from '../../shared/domain/textile/curve'
 import { DEFAULT_TEXTILE_SETTINGS } from '../../shared/domain/textile/defaults'
@@ -44,6 +46,14 @@ export function ringsOf(body: ParsedBody<'solve.rings'>): RouteAnswer<'solve.rin
     return answerOf(level.id, mode === null ? cut : solveRing(geometry, mode, settings))
   })
   return { rings }
+}
+
+export function recutOf({ fitted, final }: ParsedBody<'solve.recut'>): RouteAnswer<'solve.recut'> {
+  return solved(recut(fitted, final))
+}
+
+export function fittingOf({ levels, geometries, rings, settings }: ParsedBody<'solve.fitting'>): RouteAnswer<'solve.fitting'> {
+  return readFitting(levels, geometries, rings, settings ?? DEFAULT_TEXTILE_SETTINGS)
 }
 
 export function piecesOf(given: ParsedBody<'solve.pieces'>): Draft {

@@ -3,7 +3,7 @@ import type { FittingLevel } from '../domain/fit/types'
 import { id, isoDate, length, load, mirrors, optionalText } from './base'
 import { levelId } from './draft'
 
-const fittingLevel = mirrors<FittingLevel>()(
+export const fittingLevel = mirrors<FittingLevel>()(
   z.object({
     level: levelId,
     gap: length(0, 2000).nullable(),

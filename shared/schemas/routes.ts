@@ -8,7 +8,18 @@ import { garmentBody, garmentSummary, garmentUpdate, garmentWhole, workingCopy, 
 import { measuring, measuringBody, measuringUpdate } from './measuring'
 import { printQuery, tileMap, tilePlan } from './print'
 import { me, preferencesBody, signInBody, type Role } from './session'
-import { solveCurveAnswer, solveCurveBody, solvePiecesBody, solveRingsAnswer, solveRingsBody, solveTilesBody } from './solve'
+import {
+  solveCurveAnswer,
+  solveCurveBody,
+  solveFittingAnswer,
+  solveFittingBody,
+  solvePiecesBody,
+  solveRecutAnswer,
+  solveRecutBody,
+  solveRingsAnswer,
+  solveRingsBody,
+  solveTilesBody,
+} from './solve'
 import { clearanceBody, restoreBody, versionBody, versionSummary, versionWhole } from './versions'
 import { flagsBody, wearer, wearerBody, wearerUpdate } from './wearers'
 import { member, workroom, workroomPatch } from './workroom'
@@ -524,6 +535,26 @@ export const routes = {
     response: solveRingsAnswer,
     group: 'Solve',
     summary: 'Rings from a body, plans and a hold, a cut or a gap.',
+  },
+  'solve.recut': {
+    ...plain,
+    method: 'POST',
+    path: '/api/solve/recut',
+    access: drafting,
+    body: solveRecutBody,
+    response: solveRecutAnswer,
+    group: 'Solve',
+    summary: 'Equal-hold recut of a fitted garment in another layer plan, for both targets.',
+  },
+  'solve.fitting': {
+    ...plain,
+    method: 'POST',
+    path: '/api/solve/fitting',
+    access: drafting,
+    body: solveFittingBody,
+    response: solveFittingAnswer,
+    group: 'Solve',
+    summary: 'What a fitting says: which level is tight and by how much, and the stiffness where a pull was taken.',
   },
   'solve.pieces': {
     ...plain,

@@ -1,8 +1,11 @@
 import { z } from 'zod'
-import { figure, mirrors } from './base'
+import { figure, length, mirrors, pressure, tension } from './base'
+import type { FittingReading } from '../domain/fit/types'
+import type { Recut } from '../domain/garment/recut'
 import type { Problem } from '../domain/units/result'
-import { bodiceStyle, draftBody, draftPiece, levelWidths } from './draft'
-import { garmentDocument } from './garments'
+import { bodiceStyle, draftBody, draftPiece, levelId, levelWidths } from './draft'
+import { fittingLevel } from './fittings'
+import { garmentDocument, garmentInput, garmentSolution } from './garments'
 import { measuredValues } from './measuring'
 import { paperId, tileOptions } from './print'
 import { layerPlan, loadCurve, ringGeometry, ringMode, ringSolution, stretchFigures, stretchTest } from './textile'
@@ -57,3 +60,65 @@ export const solveTilesBody = tileOptions.extend({
   /** Room between pieces, mm. */
   spacing: figure(0, 500).default(20),
 })
+
+const holdBand = z.enum(['light', 'easy', 'firm', 'strong', 'stop'])
+const recutProposal = z.object({
+  document: garmentDocument,
+  solution: garmentSolution,
+  steps: z.array(
+    z.object({
+      level: z.string(),
+      asked: pressure(),
+      cut: length(),
+      pressure: pressure(),
+      band: holdBand,
+      governs: z.enum(['hold', 'stretch', 'reduction']).nullable(),
+      change: length(),
+      changeFront: length(),
+      changeBack: length(),
+      factor: figure(),
+    }),
+  ),
+  alterations: z.array(z.object({ id: z.string(), name: z.string(), before: length(), after: length() })),
+})
+
+/** Equal-hold recut: the garment that fitted and the one with the final layers, each as an input of its solve. */
+export const solveRecutBody = z.object({ fitted: garmentInput, final: garmentInput })
+export const solveRecutAnswer = mirrors<Recut>()(
+  z.object({
+    levels: z.array(
+      z.object({
+        level: z.string(),
+        name: z.string(),
+        fitted: z.object({ cut: length(), pressure: pressure(), band: holdBand }),
+        copied: z.object({ pressure: pressure(), band: holdBand }).nullable(),
+      }),
+    ),
+    targets: z.object({ fitted: recutProposal, own: recutProposal }),
+  }),
+)
+
+/** What a fitting says: what was seen, and the rings that were drafted with their geometry. */
+export const solveFittingBody = z.object({
+  levels: z.array(fittingLevel).min(1).max(5),
+  geometries: z.array(ringGeometry).min(1).max(40),
+  rings: z.array(ringSolution).min(1).max(40),
+  settings: textileSettings.optional(),
+})
+export const solveFittingAnswer = mirrors<FittingReading>()(
+  z.object({
+    levels: z.array(
+      z.object({
+        level: levelId,
+        name: z.string(),
+        model: tension(),
+        wanted: tension(),
+        share: figure(),
+        letOut: length().nullable(),
+        measured: tension().nullable(),
+      }),
+    ),
+    tightest: levelId.nullable(),
+    stiffness: z.object({ factor: figure(), uncertainty: figure(), pulls: z.number().int(), isOdd: z.boolean() }).nullable(),
+  }),
+)

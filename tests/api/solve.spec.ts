@@ -1,4 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest'
+import { readFitting } from '../../shared/domain/fit/fitting'
+import type { FittingLevel } from '../../shared/domain/fit/types'
+import { recut } from '../../shared/domain/garment/recut'
 import { call, signIn } from './caller'
 
 let maker: string
@@ -180,5 +183,29 @@ describe('the API description', () => {
     expect(described.toSorted()).toEqual(
       routeIds.map((id) => `${routes[id].method.toLowerCase()} ${routes[id].path.replace(':id', '{id}')}`).toSorted(),
     )
+  })
+})
+
+describe('what follows a fitting', () => {
+  it('recuts and reads a fitting as the domain does, and answers a garment that cannot be solved with the problem', async () => {
+    const drafter = await signIn('drafter')
+    const items = (await call('garments.list', {}, drafter)).body.items as { id: string; code: string }[]
+    const input = async (code: string) =>
+      (await call('garments.workingCopy', { id: items.find((one) => one.code === code)!.id }, drafter)).body
+    const [fitted, final] = [await input('LS-031'), await input('LS-032')]
+    const answer = await call('solve.recut', { body: { fitted: fitted.input, final: final.input } }, drafter)
+    expect(answer.status).toBe(200)
+    const own = recut(fitted.input, final.input)
+    expect(answer.body).toEqual(JSON.parse(JSON.stringify(own.ok && own.value)))
+    const bare = { ...final.input, document: { ...final.input.document, plans: { front: [], back: [] } } }
+    const refused = await call('solve.recut', { body: { fitted: fitted.input, final: bare } }, drafter)
+    expect(refused.body).toMatchObject({ status: 422, problem: { code: 'no-layers' } })
+
+    const { ringInputs, rings } = fitted.solution
+    const levels = [{ level: 'waist', gap: 38, feel: 'close', pull: { force: 2.4, tab: 40 } }] as unknown as readonly FittingLevel[]
+    const body = { levels, geometries: ringInputs, rings, settings: fitted.input.settings }
+    const read = await call('solve.fitting', { body }, drafter)
+    expect(read.body).toEqual(JSON.parse(JSON.stringify(readFitting(levels, ringInputs, rings, fitted.input.settings))))
+    expect(read.body.stiffness.pulls).toBe(1)
   })
 })

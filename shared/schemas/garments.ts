@@ -41,6 +41,7 @@ export const garmentDocument = mirrors<GarmentDocument>()(
     use: z.object({
       water: z.boolean(),
       strapless: z.boolean(),
+      exertion: z.enum(['calm', 'stage', 'skating', 'swimming']).default('calm'),
       way: z.enum(['overhead', 'step-in']).default('overhead'),
       opens: z.enum(['unsaid', 'closed', 'part', 'whole']).default('unsaid'),
       frontRelease: z.boolean().default(false),

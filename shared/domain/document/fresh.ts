@@ -32,7 +32,7 @@ export function freshDocument(): GarmentDocument {
     schema: 1,
     measuringId: null,
     state: 'dry',
-    use: { water: false, strapless: false, way: 'overhead', opens: 'unsaid', frontRelease: false, dresser: '' },
+    use: { water: false, strapless: false, exertion: 'calm', way: 'overhead', opens: 'unsaid', frontRelease: false, dresser: '' },
     plans: { front: [], back: [] },
     levels: LEVEL_IDS.map(freshLevel),
     style: defaultStyle(),

@@ -2,6 +2,7 @@ import type { EntryWay } from '../body/passing'
 import type { LevelId } from '../body/types'
 import type { Acknowledged } from '../cautions/acknowledge'
 import type { Alteration, BodiceStyle } from '../draft/types'
+import type { Exertion } from '../textile/defaults'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothDirection, ClothState } from '../textile/types'
 import type { Mm, NewtonPerMetre, Pascal } from '../units/brand'
@@ -36,6 +37,7 @@ export interface LevelChoice {
 export interface GarmentUse {
   readonly water: boolean
   readonly strapless: boolean
+  readonly exertion: Exertion
   readonly way: EntryWay
   /** `unsaid` until somebody says it; `part`: by the opening of each level. */
   readonly opens: 'unsaid' | 'closed' | 'part' | 'whole'

@@ -1,6 +1,6 @@
 import type { BodyLevel, MeasuredValues } from '../body/types'
 import type { GarmentDocument, LevelChoice } from '../document/types'
-import { ASPECT_BY_LEVEL, BREATH_BY_LEVEL, FRONT_SHARE_BY_LEVEL } from '../textile/defaults'
+import { ASPECT_BY_LEVEL, breathAt, FRONT_SHARE_BY_LEVEL, type Exertion } from '../textile/defaults'
 import type { LayerPlan, RingGeometry, RingMode, RingSolution } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
 
@@ -29,6 +29,7 @@ export function ringGeometry(
   choice: LevelChoice,
   plans: { readonly front: LayerPlan; readonly back: LayerPlan },
   measured: MeasuredValues,
+  exertion: Exertion = 'calm',
 ): RingGeometry {
   const { aspect, estimated } = aspectAt(level, measured)
   const arc = level.id === 'bust' ? measured.frontBustArc?.value : undefined
@@ -48,7 +49,7 @@ export function ringGeometry(
     squeeze: choice.squeeze,
     aspect,
     aspectEstimated: estimated,
-    breath: BREATH_BY_LEVEL[level.id],
+    breath: breathAt(level.id, exertion),
   }
 }
 

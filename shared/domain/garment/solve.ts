@@ -66,7 +66,7 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   const levels: Level[] = []
   for (const level of bodyLevels(body.value)) {
     const choice = document.levels.find((one) => one.level === level.id) ?? freshLevel(level.id)
-    const geometry = ringGeometry(level, { ...choice, ...gapsOf(document, choice) }, plans, input.measured)
+    const geometry = ringGeometry(level, { ...choice, ...gapsOf(document, choice) }, plans, input.measured, document.use.exertion)
     const solved = solveLevel(input, choice, geometry)
     if (!solved.ok) return atStep('layers', { ...solved.problem, at: solved.problem.at ?? level.id })
     levels.push({ body: level, choice, geometry: withGaps(geometry, solved.value), solved: solved.value })

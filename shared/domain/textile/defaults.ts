@@ -24,6 +24,24 @@ export const BREATH_BY_LEVEL: Readonly<Record<DefaultLevel, Mm>> = {
   hip: mm(0),
 }
 
+/** How hard the wearer breathes in it. */
+export type Exertion = 'calm' | 'stage' | 'skating' | 'swimming'
+
+/** What exertion adds to a deep breath at rest, mm, at bust and underbust, and at the waist. Assumption without a source: a setting. */
+export const EXERTION_BREATH: Readonly<Record<Exertion, { readonly ribs: Mm; readonly waist: Mm }>> = {
+  calm: { ribs: mm(0), waist: mm(0) },
+  stage: { ribs: mm(10), waist: mm(5) },
+  skating: { ribs: mm(15), waist: mm(10) },
+  swimming: { ribs: mm(20), waist: mm(10) },
+}
+
+/** Girth that a deep breath adds at a level while the wearer exerts herself so, mm. */
+export function breathAt(level: DefaultLevel, exertion: Exertion): Mm {
+  const more = EXERTION_BREATH[exertion]
+  const add = level === 'bust' || level === 'underbust' ? more.ribs : level === 'waist' ? more.waist : 0
+  return mm(BREATH_BY_LEVEL[level] + add)
+}
+
 /** Breadth over depth of the body. Bust, waist, hip: means of ANSUR II women, estimates; underbust and high hip: half-way between their neighbours. */
 export const ASPECT_BY_LEVEL: Readonly<Record<DefaultLevel, number>> = {
   bust: 1.1,

@@ -17,6 +17,19 @@ const solved = (patch: Partial<GarmentDocument> = {}, input: Partial<GarmentInpu
 }
 const codes = (solution: GarmentSolution) => solution.cautions.map((one) => `${one.code} ${one.severity}`)
 
+describe('exertion', () => {
+  it('makes a deep breath larger where the ribs and the waist move, and changes nothing at rest', () => {
+    const [calm, swimming] = [solved(), solved({ use: { ...use, exertion: 'swimming' } })]
+    calm.rings.forEach((ring, i) => {
+      const other = swimming.rings[i]!
+      expect(other.cut).toBe(ring.cut)
+      expect(other.pressure).toBe(ring.pressure)
+      if (['bust', 'underbust', 'waist'].includes(ring.level)) expect(other.breathPressure).toBeGreaterThan(ring.breathPressure)
+      else expect(other.breathPressure).toBe(ring.breathPressure)
+    })
+  })
+})
+
 describe('getting in and out', () => {
   it('has every level pass shoulders with arms overhead, and the greatest girth below it when stepped into', () => {
     const { levels } = solved()

@@ -104,9 +104,9 @@ export function benchSteps(facts: StepFacts): StepState[] {
       id: 'cut',
       name: 'Cut',
       state: last?.cleared ? 'done' : 'todo',
-      detail: last ? `version ${last.number}, ${last.cleared ? 'cleared' : 'not cleared'}` : 'no version yet',
+      detail: last ? `${last.number}, ${last.cleared ? 'cleared' : 'not cleared'}` : 'no version yet',
     },
-    { id: 'fit', name: 'Fit', state: 'todo', detail: 'recut, fitting record' },
+    { id: 'fit', name: 'Fit', state: 'todo', detail: 'fittings, recut' },
   ]
 }
 

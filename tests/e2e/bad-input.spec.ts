@@ -1,23 +1,6 @@
 /** What people type wrongly, or what changes under their hands: a clear message where it happens, and nothing typed is lost. */
-import { expect, test, type APIRequestContext, type Page } from '@playwright/test'
-import { DEMO_ACCOUNTS } from '../../shared/demo'
-import type { RouteAnswer } from '../../shared/schemas/routes'
-import type { GarmentSummary } from '../../shared/schemas/garments'
-
-const drafter = DEMO_ACCOUNTS.find((one) => one.role === 'drafter')!
-
-async function signedIn(page: Page, baseURL: string): Promise<APIRequestContext> {
-  const answer = await page.request.post('/api/session', {
-    data: { email: drafter.email, password: drafter.password },
-    headers: { origin: baseURL },
-  })
-  expect(answer.ok()).toBe(true)
-  return page.request
-}
-const garmentOf = async (request: APIRequestContext, code: string): Promise<GarmentSummary> => {
-  const { items } = (await (await request.get('/api/garments')).json()) as { items: GarmentSummary[] }
-  return items.find((one) => one.code === code)!
-}
+import { expect, test } from '@playwright/test'
+import { clothOf, garmentOf, signedIn } from './screen'
 
 test('a form that somebody else saved meanwhile shows both, and saves mine only when told', async ({ page, baseURL }) => {
   const request = await signedIn(page, baseURL!)
@@ -116,8 +99,7 @@ test('a body that cannot be drafted names the measurement; it is saved all the s
 test('a version prints although its cloth was archived since', async ({ page, baseURL }) => {
   const request = await signedIn(page, baseURL!)
   const garment = await garmentOf(request, 'LS-032')
-  const { items } = (await (await request.get('/api/cloths')).json()) as RouteAnswer<'cloths.list'>
-  const cloth = items.find((one) => one.code === 'PN-30')!
+  const cloth = await clothOf(request, 'PN-30')
   await page.goto(`/cloths/${cloth.id}`, { waitUntil: 'networkidle' })
   await page.getByRole('button', { name: 'Archive' }).click()
   await expect(page.getByText(/^ ?archived .* versions that use it keep it/)).toBeVisible()

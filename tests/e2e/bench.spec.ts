@@ -1,21 +1,12 @@
 /** From a mock-up that fitted to the final layers, and what-if: on the demo's own garments, in a real browser. */
-import AxeBuilder from '@axe-core/playwright'
 import { expect, test, type Page } from '@playwright/test'
-import { DEMO_ACCOUNTS } from '../../shared/demo'
 import type { RouteAnswer } from '../../shared/schemas/routes'
-
-const drafter = DEMO_ACCOUNTS.find((one) => one.role === 'drafter')!
+import { accessible, garmentOf, signedIn } from './screen'
 
 async function openBench(page: Page, baseURL: string, code: string, step: string): Promise<string> {
-  await page.request.post('/api/session', { data: { email: drafter.email, password: drafter.password }, headers: { origin: baseURL } })
-  const { items } = (await (await page.request.get('/api/garments')).json()) as RouteAnswer<'garments.list'>
-  const { id } = items.find((one) => one.code === code)!
+  const { id } = await garmentOf(await signedIn(page, baseURL), code)
   await page.goto(`/garments/${id}?step=${step}`, { waitUntil: 'networkidle' })
   return id
-}
-async function accessible(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze()
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.target.join(' ')).join(', ')}`)).toEqual([])
 }
 const copyOf = async (page: Page, id: string) =>
   (await (await page.request.get(`/api/garments/${id}/working-copy`)).json()) as RouteAnswer<'garments.workingCopy'>
@@ -41,11 +32,7 @@ test('the two-layer mock-up that fits is strong at the waist when copied into fo
   await expect(page.getByText(/Taken over into the working copy/)).toBeVisible()
   await expect.poll(async () => (await copyOf(page, id)).revision).toBeGreaterThan(before.revision)
   const after = await copyOf(page, id)
-  const mockUp = await copyOf(
-    page,
-    ((await (await page.request.get('/api/garments')).json()) as RouteAnswer<'garments.list'>).items.find((one) => one.code === 'LS-031')!
-      .id,
-  )
+  const mockUp = await copyOf(page, (await garmentOf(page.request, 'LS-031')).id)
   for (const ring of after.solution!.rings) {
     const fitted = mockUp.solution!.rings.find((one) => one.level === ring.level)!
     expect(Math.abs(ring.pressure / fitted.pressure - 1)).toBeLessThan(0.02)

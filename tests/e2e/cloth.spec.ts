@@ -1,10 +1,6 @@
 /** A machine's run by file, what it asks when the file does not say, and another lot beside this one. */
-import AxeBuilder from '@axe-core/playwright'
 import { expect, test } from '@playwright/test'
-import { DEMO_ACCOUNTS } from '../../shared/demo'
-import type { RouteAnswer } from '../../shared/schemas/routes'
-
-const drafter = DEMO_ACCOUNTS.find((one) => one.role === 'drafter')!
+import { accessible, clothOf, signedIn } from './screen'
 
 /** Five cycles to 60 mm of extension, load 15 N/100 mm out and a tenth less back. Invented. */
 function csv(heading: string, row: (extension: number, load: number) => string, cycles = 5): string {
@@ -19,9 +15,7 @@ function csv(heading: string, row: (extension: number, load: number) => string, 
 }
 
 test('a tensile run is read from its file, asked about where it must be, and refused with a reason', async ({ page, baseURL }) => {
-  await page.request.post('/api/session', { data: { email: drafter.email, password: drafter.password }, headers: { origin: baseURL! } })
-  const { items } = (await (await page.request.get('/api/cloths')).json()) as RouteAnswer<'cloths.list'>
-  const cloth = items.find((one) => one.code === 'VL-21')!
+  const cloth = await clothOf(await signedIn(page, baseURL!), 'VL-21')
   await page.goto(`/cloths/${cloth.id}`, { waitUntil: 'networkidle' })
   await page.getByRole('button', { name: 'Enter a test' }).first().click()
   await page.getByRole('radio', { name: 'A machine pulled it (CSV)' }).check()
@@ -54,8 +48,7 @@ test('a tensile run is read from its file, asked about where it must be, and ref
   await question.getByRole('button', { name: 'Read it so' }).click()
   await expect(page.getByText('Specimen 2', { exact: true })).toBeVisible()
   await expect(page.getByText(/8 loadings before the last/)).toBeVisible()
-  const { violations } = await new AxeBuilder({ page }).analyze()
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.target.join(' ')).join(', ')}`)).toEqual([])
+  await accessible(page)
   await page.getByRole('button', { name: 'Save test' }).click()
   await expect(page.getByText(/Method: EN ISO 20932-1/)).toBeVisible()
   await expect(page.getByText(/one.csv \(2005 rows, 5 cycles\)/)).toBeVisible()

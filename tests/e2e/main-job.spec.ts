@@ -2,17 +2,14 @@
  * The main job on real input, from the sign-in to a print that measures right: once by pointer, once by keyboard alone.
  * The print is read by poppler (Debian's poppler-utils), which knows nothing of the drawing code.
  */
-import AxeBuilder from '@axe-core/playwright'
 import { execFileSync } from 'node:child_process'
 import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { expect, test, type Page } from '@playwright/test'
-import { DEMO_ACCOUNTS } from '../../shared/demo'
 import { apart, pageOf, POINTS_TO_MM } from '../fixtures/read-print'
 import { keyboard, pointer, type Hands } from './hands'
-
-const drafter = DEMO_ACCOUNTS.find((one) => one.role === 'drafter')!
+import { accessible, drafter } from './screen'
 
 /** What is typed, in the units that people use, and what the screen must say that it understood. Invented. */
 const MEASURED = [
@@ -41,11 +38,6 @@ const STRIP = [
 ] as const
 
 const field = (page: Page, name: string) => page.getByRole('textbox', { name, exact: true })
-
-async function accessible(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze()
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.target.join(' ')).join(', ')}`)).toEqual([])
-}
 
 async function signIn(page: Page, hands: Hands): Promise<void> {
   await page.goto('/sign-in')
@@ -242,7 +234,7 @@ async function saveAndPrint(page: Page, hands: Hands): Promise<void> {
   await hands.pick(page.getByLabel('Paper'), 'A4')
   await accessible(page)
 
-  const said = await page.getByText(/pages, (upright|lying), and an overview/).textContent()
+  const said = await page.getByText(/pages, (upright|lying), behind an overview/).textContent()
   const asked = page.waitForRequest(/pattern\.pdf/, { timeout: 10_000 })
   await hands.press(page.getByRole('link', { name: 'Print set (PDF)' }))
   const got = await page.request.get((await asked).url())
@@ -284,7 +276,7 @@ function measurePrint(pdf: Buffer, tiles: number): void {
 
 for (const way of ['pointer', 'keyboard'] as const) {
   test(`a drafter goes from the sign-in to a measured print by ${way}`, async ({ page }) => {
-    test.setTimeout(150_000)
+    test.setTimeout(240_000)
     const hands = way === 'pointer' ? pointer() : keyboard(page)
     const faults: string[] = []
     page.on('pageerror', (error) => faults.push(error.message))

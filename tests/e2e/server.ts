@@ -5,7 +5,13 @@ import { throwawayDatabase } from '../api/throwaway'
 /** The built server with the demo on a throwaway database, until it is told to stop. Called with the port. */
 const { app, drop } = await throwawayDatabase(new Date())
 try {
-  const env = { NUXT_DATABASE_URL: app, NUXT_SESSION_PASSWORD: randomBytes(24).toString('hex'), NUXT_DEMO: '1', NUXT_LOGIN_LIMIT: '10000' }
+  const env = {
+    NUXT_DATABASE_URL: app,
+    NUXT_SESSION_PASSWORD: randomBytes(24).toString('hex'),
+    NUXT_DEMO: '1',
+    NUXT_LOGIN_LIMIT: '10000',
+    TENTERFRAME_CHECK_ANSWERS: process.env.TENTERFRAME_CHECK_ANSWERS ?? '1',
+  }
   const server = await startServer(env, Number(process.argv[2]))
   console.log(server.url)
   await new Promise<void>((done) => {

@@ -84,11 +84,20 @@ export const layerCloth = mirrors<LayerCloth>()(
 )
 
 const layer = mirrors<Layer>()(
-  z.object({ id: label, label, cloth: layerCloth, count: z.number().int().min(0).max(12), cutRatio: figure(0.5, 2) }),
+  z.object({
+    id: label,
+    label,
+    cloth: layerCloth,
+    count: z.number().int().min(0).max(12),
+    cutRatio: figure(0.5, 2),
+    rigid: z.boolean().optional(),
+    askedAngle: figure(0, 90).optional(),
+  }),
 )
-export const layerPlan = mirrors<LayerPlan>()(z.object({ zone: label, layers: z.array(layer).max(12) }))
+export const layerPlan = mirrors<LayerPlan>()(z.object({ zone: label, layers: z.array(layer).max(12), state: clothState.optional() }))
 
-const segment = z.object({ id: label, half, plan: layerPlan, share: figure(0, 1) })
+const sewn = z.array(z.object({ layer: label, width: length(0, 3000) })).max(12)
+const segment = z.object({ id: label, half, plan: layerPlan, share: figure(0, 1), sewn: sewn.optional() })
 export const ringGeometry = mirrors<RingGeometry>()(
   z.object({
     level: label,
@@ -140,6 +149,7 @@ export const ringSolution = mirrors<RingSolution>()(
     band: z.enum(['light', 'easy', 'firm', 'strong', 'stop']),
     breathPressure: pressure(),
     breathBand: interval,
+    breathShort: length(0).optional(),
     sidePressure: pressure(),
     frontPressure: pressure(),
     governs: z.enum(['hold', 'stretch', 'reduction']).nullable(),

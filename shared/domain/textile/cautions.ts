@@ -5,7 +5,7 @@ import { mm, pascal } from '../units/brand'
 import { daysBetween } from '../units/days'
 import { BAND_LIMITS, BREATH_LIMITS, SIDE_LIMIT, holdBand } from './bands'
 import { ENOUGH_SPECIMENS, LARGEST_RESIDUAL } from './curve'
-import { layerStrain, planWearLimit } from './plan'
+import { layerStrainIn, segmentWearLimit } from './segment'
 import type { Layer, LayerCloth, LayerPlan, RingGeometry, RingSolution, TextileSettings } from './types'
 
 /** Recovery below which there is a caution. A setting. */
@@ -89,15 +89,16 @@ function stretchCautions(geometry: RingGeometry, solution: RingSolution): readon
   solution.segments.forEach((segment, i) => {
     if (!(segment.width > 0) || solution.slack > 0) return
     const { plan } = geometry.segments[i]!
-    const wear = planWearLimit(plan)
+    const wear = segmentWearLimit(geometry.segments[i]!, segment.width)
     if (segment.strain > wear * ABOVE && !told.has(plan.zone)) {
       told.add(plan.zone)
       found.push(cautions.wearLimitPassed(place, { ring, zone: plan.zone, strain: segment.strain, limit: wear }))
     }
-    for (const { cloth, cutRatio, count } of plan.layers) {
-      const strain = layerStrain(cutRatio, segment.strain)
+    for (const layer of plan.layers) {
+      const { cloth, count, rigid } = layer
+      const strain = layerStrainIn(geometry.segments[i]!, layer, segment.width, segment.strain)
       const key = `${cloth.clothId}/${cloth.direction}`
-      if (!(count > 0) || strain <= cloth.curve.testedTo * ABOVE || told.has(key)) continue
+      if (!(count > 0) || rigid || strain <= cloth.curve.testedTo * ABOVE || told.has(key)) continue
       told.add(key)
       found.push(cautions.testExtrapolated(place, { cloth: cloth.name, strain, testedTo: cloth.curve.testedTo }))
     }

@@ -12,23 +12,29 @@ export const planTensionAt = (plan: LayerPlan, e: number): NewtonPerMetre => new
 /** Slope of a plan's tension, N/m per strain. */
 export const planSlopeAt = (plan: LayerPlan, e: number): NewtonPerMetre => newtonPerMetre(slopeOfStack(stackOf(plan), e))
 
-/** The garment's strain under a tension; the free strain for none. The plan must pull. */
+/** The garment's strain under a tension; the free strain for none, the stop of its rigid layers for all that reach it. The plan must pull or have a rigid layer. */
 export function planStrainAt(plan: LayerPlan, tension: number): Strain {
   const stack = stackOf(plan)
-  if (!stack.pulls) throw new RangeError('A plan without pull has no strain under a tension')
+  if (!stack.pulls && stack.stop === Infinity) throw new RangeError('A plan without pull has no strain under a tension')
   return strain(strainOfStack(stack, tension))
 }
 
 /** e0 = min r - 1: up to this strain no layer pulls. Negative where a layer is cut smaller than the reference. */
 export const planFreeStrain = (plan: LayerPlan): Strain => strain(stackOf(plan).free)
 
-const leastOver = (plan: LayerPlan, limit: (layer: LayerPlan['layers'][number]) => number): number =>
-  plan.layers.reduce((least, layer) => (layer.count > 0 ? Math.min(least, layer.cutRatio * (1 + limit(layer)) - 1) : least), Infinity)
+/** Strain at which the plan's rigid layers stop it: min r - 1 over them. Infinite without one. */
+export const planStop = (plan: LayerPlan): Strain => strain(stackOf(plan).stop)
 
-/** Wear limit of a plan: min over its layers of r (1 + u) - 1. Infinite for a plan without layers. */
+const leastOver = (plan: LayerPlan, limit: (layer: LayerPlan['layers'][number]) => number): number =>
+  plan.layers.reduce(
+    (least, layer) => (layer.count > 0 && !layer.rigid ? Math.min(least, layer.cutRatio * (1 + limit(layer)) - 1) : least),
+    Infinity,
+  )
+
+/** Wear limit of a plan: min over its layers that stretch of r (1 + u) - 1. Infinite where none does. */
 export const planWearLimit = (plan: LayerPlan): Strain => strain(leastOver(plan, (layer) => layer.cloth.wearLimit))
 
-/** Pull-on limit of a plan: min over its layers of r (1 + p) - 1. Infinite for a plan without layers. */
+/** Pull-on limit of a plan: min over its layers that stretch of r (1 + p) - 1. Infinite where none does. */
 export const planPullOnLimit = (plan: LayerPlan): Strain => strain(leastOver(plan, (layer) => layer.cloth.pullOnLimit))
 
 /** Thickness of a plan, mm: its layers flat on each other. */
@@ -40,10 +46,11 @@ export const layerStrain = (cutRatio: number, e: number): Strain => strain((1 + 
 
 /** Whether a plan at strain e asks any layer for more than its tested range. */
 export const isExtrapolated = (plan: LayerPlan, e: number): boolean =>
-  plan.layers.some((layer) => layer.count > 0 && layerStrain(layer.cutRatio, e) > layer.cloth.curve.testedTo * (1 + 1e-12))
+  plan.layers.some((layer) => layer.count > 0 && !layer.rigid && layerStrain(layer.cutRatio, e) > layer.cloth.curve.testedTo * (1 + 1e-12))
 
 /** Whether a plan holds a cloth of which only a stretch is known. */
-export const isAssumed = (plan: LayerPlan): boolean => plan.layers.some((layer) => layer.count > 0 && layer.cloth.curve.kind === 'assumed')
+export const isAssumed = (plan: LayerPlan): boolean =>
+  plan.layers.some((layer) => layer.count > 0 && !layer.rigid && layer.cloth.curve.kind === 'assumed')
 
 /**
  * Turn of cloth q = 1 + 2 pi z / (G + pi t) for a layer drafted as a piece of its own: cut q times as wide, z its distance from the plan's

@@ -4,17 +4,20 @@ import { plainDecimal } from '../units/format'
 import type { Problem, Result } from '../units/result'
 import { fail, succeed } from '../units/result'
 import { holdBand } from './bands'
-import { isAssumed, isExtrapolated, planThickness, planWearLimit } from './plan'
+import { isAssumed, planThickness } from './plan'
 import { ellipsePressures, holdTension, ringPressure } from './pressure'
 import { risingRoot } from './root'
+import { filledWidth, hasSewn, isSegmentExtrapolated, stackOfSegment, widthAtWearLimit, widthUnder } from './segment'
 import type { BandSide, Stack } from './stack'
-import { slopeOfStack, stackOf, strainOfStack, tensionOfStack } from './stack'
-import type { Governs, Interval, RingGeometry, RingMode, RingSolution, TextileSettings } from './types'
+import { giveOfStack, stackOf, stackStretches, strainOfStack, tensionOfStack } from './stack'
+import type { Governs, Interval, RingGeometry, RingMode, RingSegment, RingSolution, TextileSettings } from './types'
 
 /** Share of the girth by which a soft waist may be squeezed at most. Source: Gau 1998 (read). */
 export const LARGEST_SQUEEZE = 0.1
 /** Edges that pass each other by less are taken to meet, mm. */
 const MEETING_TOLERANCE = 1e-6
+/** A ring that its rigid layers stop within this is taken to go round, mm. */
+const SHORT_TOLERANCE = 1e-6
 /** How far the shares of a half may be from 1 in sum. */
 const SHARE_TOLERANCE = 1e-6
 
@@ -106,17 +109,18 @@ function makeReady(geometry: RingGeometry): Ready {
   }
 }
 
-/** A ring without stretching width has no tension figure: by how much it is too short or loose. */
-function withoutStretch(geometry: RingGeometry, ready: Ready): { readonly ok: false; readonly problem: Problem } {
-  if (geometry.gapFront + geometry.gapBack >= ready.surface) {
+/** A ring without stretching width has no tension figure: by how much it is too short or loose. `reach`: what its cloth goes round without stretch, mm. */
+function withoutStretch(geometry: RingGeometry, ready: Ready, reach = 0): { readonly ok: false; readonly problem: Problem } {
+  const gap = geometry.gapFront + geometry.gapBack
+  if (gap >= ready.surface) {
     return at(
       geometry,
       'gap-larger-than-ring',
-      `the gap of ${millimetres(geometry.gapFront + geometry.gapBack)} is larger than the ring it lies in, ${millimetres(ready.surface)}.`,
+      `the gap of ${millimetres(gap)} is larger than the ring it lies in, ${millimetres(ready.surface)}.`,
       'Type a smaller gap.',
     )
   }
-  const over = ready.fixed - ready.surface
+  const over = ready.fixed + reach - ready.surface
   const said =
     Math.abs(over) < 0.05
       ? 'it goes round the body exactly'
@@ -127,16 +131,39 @@ function withoutStretch(geometry: RingGeometry, ready: Ready): { readonly ok: fa
     geometry,
     'no-stretching-width',
     `no cloth stretches between the rigid parts; ${said}.`,
-    'Make a rigid part narrower, or give the ring a gap that can close.',
+    gap > 0
+      ? `A gap of ${millimetres(Math.max(0, gap - over))} makes it fit. What it holds is then decided by the lacing alone and is not known here.`
+      : 'Make a rigid part narrower, or give the ring a gap that can close.',
   )
 }
 
-const stacksOf = (geometry: RingGeometry, side: BandSide): readonly Stack[] =>
-  geometry.segments.map((segment) => stackOf(segment.plan, side))
+/** Rigid layers stop the ring before it goes round the body. */
+const tooShort = (geometry: RingGeometry, by: number): { readonly ok: false; readonly problem: Problem } =>
+  at(
+    geometry,
+    'ring-too-short',
+    `its rigid layers give no further, and it is ${millimetres(by)} too short.`,
+    `Cut it larger, cut the rigid layers larger than the others, or open a gap by ${millimetres(by)}.`,
+  )
+
+const stacksOf = (geometry: RingGeometry, widths: readonly number[], side: BandSide): readonly Stack[] =>
+  geometry.segments.map((segment, i) => stackOfSegment(segment, widths[i]!, side))
+
+/** Length that segments reach with every rigid layer at its stop, mm; infinite where one has none. */
+const greatestReach = (stacks: readonly Stack[], widths: readonly number[]): number =>
+  stacks.reduce((sum, stack, i) => (widths[i]! > 0 ? sum + widths[i]! * (1 + stack.stop) : sum), 0)
+
+/** Least tension at which every segment is at its stop, N/m. */
+const tensionAtStop = (stacks: readonly Stack[], widths: readonly number[]): number =>
+  stacks.reduce((most, stack, i) => (widths[i]! > 0 && stack.stop < Infinity ? Math.max(most, tensionOfStack(stack, stack.stop)) : most), 0)
+
+/** Lengths nearer to each other than this part of them are the same. */
+const SAME_LENGTH = 1e-12
 
 /**
- * Tension of segments in series whose cloth of widths `w` has to reach `length`: root of sum w (1 + e(T)) = length. 0 when they reach it slack.
- * The root lies between the least and the greatest tension that the segments have at their common mean strain.
+ * Tension of segments in series whose cloth of widths `w` has to reach `length`: root of sum w (1 + e(T)) = length. 0 when they reach it
+ * slack; infinite when rigid layers stop them before. The root lies between the least and the greatest tension that the segments have at
+ * their common mean strain, or above where a segment is stopped.
  */
 export function seriesTension(stacks: readonly Stack[], widths: readonly number[], length: number): number {
   let total = 0
@@ -146,34 +173,43 @@ export function seriesTension(stacks: readonly Stack[], widths: readonly number[
     slack += widths[i]! * (1 + stacks[i]!.free)
   }
   if (slack >= length) return 0
+  const most = greatestReach(stacks, widths)
+  if (most <= length * (1 + SAME_LENGTH)) return most < length * (1 - SAME_LENGTH) ? Infinity : tensionAtStop(stacks, widths)
   const common = length / total - 1
   let low = Infinity
   let high = 0
+  let stopped = false
   for (let i = 0; i < stacks.length; i++) {
     if (!(widths[i]! > 0)) continue
+    if (common > stacks[i]!.stop) {
+      stopped = true
+      continue
+    }
     const tension = tensionOfStack(stacks[i]!, common)
     low = Math.min(low, tension)
     high = Math.max(high, tension)
   }
-  if (high - low <= 1e-15 * high) return high
+  if (!stopped && high - low <= 1e-15 * high) return high
   const miss = (tension: number): number => {
     let sum = -length
     for (let i = 0; i < stacks.length; i++) if (widths[i]! > 0) sum += widths[i]! * (1 + strainOfStack(stacks[i]!, tension))
     return sum
   }
+  if (stopped) {
+    high = Math.max(high, 1)
+    while (miss(high) < 0) high *= 2
+  }
   const slope = (tension: number): number => {
     let sum = 0
-    for (let i = 0; i < stacks.length; i++) {
-      if (widths[i]! > 0) sum += widths[i]! / slopeOfStack(stacks[i]!, strainOfStack(stacks[i]!, tension))
-    }
+    for (let i = 0; i < stacks.length; i++) if (widths[i]! > 0) sum += widths[i]! * giveOfStack(stacks[i]!, tension)
     return sum
   }
   return risingRoot(miss, slope, low, high, (low + high) / 2)
 }
 
-/** Cloth widths that go round their arcs under a tension: arc / (1 + e(T)). */
-const widthsUnder = (stacks: readonly Stack[], arcs: readonly number[], tension: number): readonly number[] =>
-  arcs.map((arc, i) => (arc > 0 ? arc / (1 + strainOfStack(stacks[i]!, tension)) : 0))
+/** Cloth widths that go round their arcs under a tension: arc / (1 + e(T)); where a rigid width fills a layer, the width at which it does. */
+const widthsUnder = (segments: readonly RingSegment[], arcs: readonly number[], tension: number): readonly number[] =>
+  arcs.map((arc, i) => widthUnder(segments[i]!, arc, tension) ?? filledWidth(segments[i]!))
 
 const sumOf = (values: readonly number[]): number => values.reduce((sum, value) => sum + value, 0)
 
@@ -183,27 +219,33 @@ interface CutTension {
 }
 
 /** T = min(T of the hold, T at the first wear limit, T at the largest reduction), and which of them it is. */
-function cutTension(geometry: RingGeometry, ready: Ready, stacks: readonly Stack[], hold: Pascal, largestReduction: number): CutTension {
+function cutTension(geometry: RingGeometry, ready: Ready, hold: Pascal, largestReduction: number): CutTension {
+  const { segments } = geometry
   let tension: number = holdTension(hold, mm(ready.girth))
   let governs: Governs = 'hold'
-  geometry.segments.forEach((segment, i) => {
-    if (!(ready.arcs[i]! > 0)) return
-    const wear = tensionOfStack(stacks[i]!, planWearLimit(segment.plan))
-    if (wear < tension) {
-      tension = wear
-      governs = 'stretch'
-    }
+  const limit = (to: number, by: Governs) => {
+    if (to >= tension) return
+    tension = to
+    governs = by
+  }
+  segments.forEach((segment, i) => {
+    const arc = ready.arcs[i]!
+    if (!(arc > 0)) return
+    const width = widthAtWearLimit(segment, arc)
+    if (width !== null && width > 0) limit(tensionOfStack(stackOfSegment(segment, width), arc / width - 1), 'stretch')
   })
+  if (segments.every((segment, i) => !(ready.arcs[i]! > 0) || stackOf(segment.plan).stop < Infinity)) {
+    const at = ready.arcs.map((arc, i) => arc / (1 + stackOf(segments[i]!.plan).stop))
+    limit(tensionAtStop(stacksOf(geometry, at, 'mean'), ready.arcs), 'stretch')
+  }
   const least = (1 - largestReduction) * ready.girth - ready.fixed
-  const spare = (at: number) => least - sumOf(widthsUnder(stacks, ready.arcs, at))
+  const spare = (at: number) => least - sumOf(widthsUnder(segments, ready.arcs, at))
   if (tension > 0 && spare(tension) > 0) {
     const slope = (at: number) =>
       sumOf(
-        ready.arcs.map((arc, i) => {
-          if (!(arc > 0)) return 0
-          const e = strainOfStack(stacks[i]!, at)
-          return arc / ((1 + e) ** 2 * slopeOfStack(stacks[i]!, e))
-        }),
+        widthsUnder(segments, ready.arcs, at).map((width, i) =>
+          width > 0 ? (width * width * giveOfStack(stackOfSegment(segments[i]!, width), at)) / ready.arcs[i]! : 0,
+        ),
       )
     tension = spare(0) >= 0 ? 0 : risingRoot(spare, slope, 0, tension, tension)
     governs = 'reduction'
@@ -229,18 +271,24 @@ function describe(
   const rigid = geometry.rigidFront + geometry.rigidBack
   const gap = gapFront + gapBack
   const length = surface - rigid - gap
-  const mean = stacksOf(geometry, 'mean')
-  const low = stacksOf(geometry, 'low')
-  const high = stacksOf(geometry, 'high')
+  const mean = stacksOf(geometry, widths, 'mean')
+  const low = stacksOf(geometry, widths, 'low')
+  const high = stacksOf(geometry, widths, 'high')
   const cloth = sumOf(widths)
   const taut = sumOf(widths.map((width, i) => width * (1 + mean[i]!.free)))
   const slack = Math.max(0, taut - length)
   const strains = mean.map((stack) => (stack.pulls ? strainOfStack(stack, tension) : stack.free))
-  const pressureUnder = (stacks: readonly Stack[], breath: number): number =>
-    ringPressure(newtonPerMetre(seriesTension(stacks, widths, length + breath)), mm(girth + breath))
+  const breathShort = Math.max(0, length + geometry.breath - greatestReach(mean, widths))
+  const pressureUnder = (stacks: readonly Stack[], breath: number): number => {
+    const under = seriesTension(stacks, widths, length + breath)
+    return ringPressure(newtonPerMetre(Number.isFinite(under) ? under : tensionAtStop(stacks, widths)), mm(girth + breath))
+  }
   const interval = (one: number, other: number): Interval => ({ low: Math.min(one, other), high: Math.max(one, other) })
-  const recut = (stacks: readonly Stack[]): number =>
-    rigid + sumOf(widths.map((width, i) => (width > 0 ? (width * (1 + strains[i]!)) / (1 + strainOfStack(stacks[i]!, tension)) : 0)))
+  const recut = (side: BandSide): number =>
+    rigid +
+    sumOf(
+      widths.map((width, i) => (width > 0 ? (widthUnder(geometry.segments[i]!, width * (1 + strains[i]!), tension, side) ?? width) : 0)),
+    )
   const pressureBand = interval(pressureUnder(low, 0), pressureUnder(high, 0))
   const peaks = ellipsePressures(newtonPerMetre(tension), mm(girth), geometry.aspect)
   const cut = cloth + rigid
@@ -268,16 +316,17 @@ function describe(
     negativeEase: 100 * (1 - (cut + gap) / girth),
     pressure: ringPressure(newtonPerMetre(tension), mm(girth)),
     pressureBand,
-    cutBand: interval(recut(low), recut(high)),
+    cutBand: interval(recut('low'), recut('high')),
     band: holdBand(pascal(pressureBand.high)),
     breathPressure: pascal(pressureUnder(mean, geometry.breath)),
     breathBand: interval(pressureUnder(low, geometry.breath), pressureUnder(high, geometry.breath)),
+    ...(breathShort > SHORT_TOLERANCE ? { breathShort: mm(breathShort) } : {}),
     sidePressure: peaks.side,
     frontPressure: peaks.front,
     governs: found.governs,
     hold: mode.solve === 'cut' ? mode.hold : null,
     assumed: geometry.segments.some((segment, i) => widths[i]! > 0 && isAssumed(segment.plan)),
-    extrapolated: geometry.segments.some((segment, i) => widths[i]! > 0 && isExtrapolated(segment.plan, strains[i]!)),
+    extrapolated: geometry.segments.some((segment, i) => widths[i]! > 0 && isSegmentExtrapolated(segment, widths[i]!, strains[i]!)),
     slack: mm(slack),
     aspect: geometry.aspect,
     aspectEstimated: geometry.aspectEstimated,
@@ -289,7 +338,8 @@ function describe(
  * `cut`: the widths by segment from a hold, held to the wear limits and the largest reduction. `tension`: T from widths as cut and gaps.
  * `gap`: the gap from widths as cut and the lacing tension. The three agree to 1e-9 of T where T > 0 and no limit governs.
  * Pressure by Laplace with the mean radius; bands by solving the ring at its cut with every curve at the ends of its spread.
- * Any number of segments and layers. Problems: nothing stretches, nothing pulls, the gap is larger than the ring, the edges meet.
+ * Any number of segments and layers. Problems: nothing stretches, nothing pulls, the gap is larger than the ring, the edges meet, rigid
+ * layers stop the ring too short, a rigid width fills the layer it is sewn to.
  */
 export function solveRing(geometry: RingGeometry, mode: RingMode, settings: TextileSettings): Result<RingSolution> {
   const slip = check(geometry)
@@ -298,15 +348,15 @@ export function solveRing(geometry: RingGeometry, mode: RingMode, settings: Text
   if (mode.solve === 'cut') {
     const ready = makeReady(geometry)
     if (!ready.arcs.some((arc) => arc > 0)) return withoutStretch(geometry, ready)
-    const idle = withoutPull(geometry, ready.arcs)
+    const idle = withoutPull(geometry, ready.arcs) ?? withoutGive(geometry, ready, ready.arcs, ready.arcs)
     if (idle) return idle
     if (!(mode.hold >= 0 && Number.isFinite(mode.hold)))
       return at(geometry, 'hold-impossible', 'the hold asked for is not a pressure.', 'Choose a hold from light to strong.')
-    const stacks = stacksOf(geometry, 'mean')
-    const { tension, governs } = cutTension(geometry, ready, stacks, mode.hold, settings.largestReduction)
-    return succeed(
-      describe(geometry, mode, ready, { tension, widths: widthsUnder(stacks, ready.arcs, tension), gapFront, gapBack, governs }),
-    )
+    const { tension, governs } = cutTension(geometry, ready, mode.hold, settings.largestReduction)
+    const widths = widthsUnder(geometry.segments, ready.arcs, tension)
+    const filled = filledLayer(geometry, widths)
+    if (filled) return filled
+    return succeed(describe(geometry, mode, ready, { tension, widths, gapFront, gapBack, governs }))
   }
   const widths = mode.widths
   if (widths.length !== geometry.segments.length) throw new RangeError('One width for each segment')
@@ -319,15 +369,16 @@ export function solveRing(geometry: RingGeometry, mode: RingMode, settings: Text
   const ready = makeReady(open)
   if (open.gapFront + open.gapBack >= ready.surface) return withoutStretch(open, ready)
   if (!(sumOf(widths) > 0)) return withoutStretch(open, ready)
-  const idle = withoutPull(geometry, widths)
+  const reaches = widths.map((width, i) => width * (1 + stackOf(geometry.segments[i]!.plan).free))
+  const idle = withoutPull(geometry, widths) ?? withoutGive(geometry, ready, widths, reaches) ?? filledLayer(geometry, widths)
   if (idle) return idle
-  const stacks = stacksOf(geometry, 'mean')
+  const stacks = stacksOf(geometry, widths, 'mean')
   const length = ready.surface - ready.fixed
   if (mode.solve === 'tension') {
     if (length <= 0) return withoutStretch(open, ready)
-    return succeed(
-      describe(geometry, mode, ready, { tension: seriesTension(stacks, widths, length), widths, gapFront, gapBack, governs: null }),
-    )
+    const tension = seriesTension(stacks, widths, length)
+    if (!Number.isFinite(tension)) return tooShort(geometry, length - greatestReach(stacks, widths))
+    return succeed(describe(geometry, mode, ready, { tension, widths, gapFront, gapBack, governs: null }))
   }
   if (!(mode.tension >= 0 && Number.isFinite(mode.tension)))
     return at(geometry, 'tension-impossible', 'the lacing tension is not a tension.', 'Type it in N/cm.')
@@ -345,9 +396,33 @@ export function solveRing(geometry: RingGeometry, mode: RingMode, settings: Text
   return succeed(describe(geometry, mode, ready, { tension: mode.tension, widths, ...gaps, governs: null }))
 }
 
-function withoutPull(geometry: RingGeometry, widths: readonly number[]): { readonly ok: false; readonly problem: Problem } | null {
-  const idle = geometry.segments.find((segment, i) => widths[i]! > 0 && !stackOf(segment.plan).pulls)
+type Refused = { readonly ok: false; readonly problem: Problem }
+
+function withoutPull(geometry: RingGeometry, widths: readonly number[]): Refused | null {
+  const idle = geometry.segments.find((segment, i) => {
+    const stack = stackOf(segment.plan)
+    return widths[i]! > 0 && !stack.pulls && stack.stop === Infinity
+  })
   return idle
     ? at(geometry, 'plan-without-pull', `no layer of the ${idle.plan.zone} pulls.`, 'Add a cloth with a stretch test to the layer plan.')
+    : null
+}
+
+/** Every segment in use is held by its rigid layers: nothing stretches. */
+function withoutGive(geometry: RingGeometry, ready: Ready, widths: readonly number[], reaches: readonly number[]): Refused | null {
+  const gives = geometry.segments.some((segment, i) => widths[i]! > 0 && stackStretches(stackOf(segment.plan)))
+  return gives ? null : withoutStretch(geometry, ready, sumOf(reaches))
+}
+
+/** A rigid width as wide as the layer it is sewn to, or as the arc it lies in. */
+function filledLayer(geometry: RingGeometry, widths: readonly number[]): Refused | null {
+  const found = geometry.segments.find((segment, i) => widths[i]! > 0 && hasSewn(segment) && !(widths[i]! > filledWidth(segment)))
+  return found
+    ? at(
+        geometry,
+        'sewn-width-fills',
+        `the rigid width sewn to one layer of the ${found.plan.zone} fills that layer; nothing of it is left to stretch.`,
+        `Keep it under ${millimetres(filledWidth(found))} of cloth, or use narrower channels.`,
+      )
     : null
 }

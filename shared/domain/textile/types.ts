@@ -101,12 +101,25 @@ export interface Layer {
   readonly count: number
   /** r: cut width over the reference cut width; 1 unless meant. */
   readonly cutRatio: number
+  /** A layer without stretch: it lies loose up to r - 1 and gives no further. Its load curve is not read. */
+  readonly rigid?: boolean
+  /** Typed direction, degrees from the lengthwise; the cloth's direction is the tested one nearest to it. */
+  readonly askedAngle?: number
 }
 
 /** Layers lying side by side in one zone; their tensions add. */
 export interface LayerPlan {
   readonly zone: string
   readonly layers: readonly Layer[]
+  /** The state that was asked for; a layer whose cloth was not tested in it is told. */
+  readonly state?: ClothState
+}
+
+/** Rigid width sewn to one layer alone, the others floating over it: a channel on the lining. Once round the body, within its segment. */
+export interface SewnRigid {
+  /** Id of the layer. */
+  readonly layer: string
+  readonly width: Mm
 }
 
 export interface RingSegment {
@@ -115,6 +128,7 @@ export interface RingSegment {
   readonly plan: LayerPlan
   /** Part of the half's free arc; the shares of one half sum to 1. */
   readonly share: number
+  readonly sewn?: readonly SewnRigid[]
 }
 
 /** Everything a ring needs besides the mode of its solve. Widths go once round the body (both halves of it). */
@@ -187,6 +201,8 @@ export interface RingSolution {
   readonly breathPressure: Pascal
   /** The same with every curve at the ends of its spread: a wearer's cap is held against its upper end. */
   readonly breathBand: Interval
+  /** Above 0 where rigid layers stop the ring by so many mm before the breath is full: the pressure there is a least one. */
+  readonly breathShort?: Mm
   readonly sidePressure: Pascal
   readonly frontPressure: Pascal
   /** Null unless the cut was solved from a hold. */

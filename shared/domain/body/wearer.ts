@@ -61,6 +61,8 @@ export interface WornRing {
   readonly name: string
   readonly upperAtRest: Pascal
   readonly upperInBreath: Pascal
+  /** By how much rigid layers stop the ring before a breath is full, mm; the hold then has no upper end. */
+  readonly breathShort?: Mm
   readonly rigid: Mm
 }
 
@@ -91,6 +93,9 @@ export function wearerCautions(flags: WearerFlags, rings: readonly WornRing[], m
       if (ring.upperInBreath > limits.cap * (1 + CAP_TOLERANCE)) {
         found.push(cautions.wearerCapInBreath(place, { ring: ring.name, pressure: ring.upperInBreath, limit: limits.cap, why }))
       }
+    }
+    if (limits.cap !== null && ring.breathShort) {
+      found.push(cautions.wearerBreathStopped(place, { ring: ring.name, short: ring.breathShort }))
     }
     if (!limits.rigidAllowed && ring.rigid > mm(0))
       found.push(cautions.wearerRigidOverBreast(place, { ring: ring.name, rigid: ring.rigid }))

@@ -43,6 +43,19 @@ export const wearerCapInBreath = defineCaution<CapFacts>('wearer-cap-in-breath',
   private: true,
 })
 
+/** Rigid layers stop the breath of a wearer with a cap: the hold then has no upper end. */
+export const wearerBreathStopped = defineCaution<{ readonly ring: string; readonly short: number }>('wearer-breath-stopped', {
+  severity: 'stop',
+  message: ({ ring, short }) => `${ring}: rigid layers stop this wearer’s breath ${short.toFixed(1)} mm before it is full.`,
+  maker: MAKER,
+  figure: ({ short }) => ({ value: short, unit: 'mm' }),
+  limit: () => ({ value: 0, unit: 'mm' }),
+  source: PRACTICE,
+  todo: 'Let that ring stretch, or cut its rigid layers larger; the limit stands whoever asks.',
+  clearable: false,
+  private: true,
+})
+
 /** The hold asked for was lowered to a wearer's cap before the cut was solved. */
 export const holdLowered = defineCaution<{ readonly ring: string; readonly hold: Pascal; readonly asked: Pascal }>('hold-lowered', {
   severity: 'note',

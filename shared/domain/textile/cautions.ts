@@ -5,6 +5,7 @@ import { mm, pascal } from '../units/brand'
 import { daysBetween } from '../units/days'
 import { BAND_LIMITS, BREATH_LIMITS, SIDE_LIMIT, holdBand } from './bands'
 import { ENOUGH_SPECIMENS, LARGEST_RESIDUAL } from './curve'
+import { DIRECTION_ANGLE, SAME_ANGLE } from './direction'
 import { layerStrainIn, segmentWearLimit } from './segment'
 import type { Layer, LayerCloth, LayerPlan, RingGeometry, RingSolution, TextileSettings } from './types'
 
@@ -74,6 +75,7 @@ export function ringCautions({ geometry, solution, asked }: JudgedRing): readonl
     const stops = breath > BREATH_LIMITS.stop
     found.push(cautions.breathHigh(place, { ring, pressure: breath, limit: stops ? BREATH_LIMITS.stop : BREATH_LIMITS.caution, stops }))
   }
+  if (solution.breathShort) found.push(cautions.breathStopped(place, { ring, short: solution.breathShort }))
   if (solution.sidePressure > SIDE_LIMIT) {
     found.push(cautions.sideHigh(place, { ring, pressure: solution.sidePressure, limit: SIDE_LIMIT, estimated: solution.aspectEstimated }))
   }
@@ -203,16 +205,29 @@ function testCautions(layer: Layer, zone: string, context: TextileContext, firm:
   return found
 }
 
-/** Cautions of the layer plans: what their cloths' tests do not know. A cloth is told once, at the first layer that uses it. */
+function directionCautions({ cloth, askedAngle, id }: Layer, zone: string): readonly Caution[] {
+  if (askedAngle === undefined) return []
+  const off = Math.abs(askedAngle - DIRECTION_ANGLE[cloth.direction])
+  if (off <= SAME_ANGLE) return []
+  const place = { kind: 'plan', zone, layer: id } as const
+  return [cautions.directionNearest(place, { cloth: cloth.name, asked: askedAngle, taken: cloth.direction, off })]
+}
+
+/**
+ * Cautions of the layer plans: what their cloths' tests do not know. A cloth is told once, at the first layer that uses it; a rigid layer
+ * needs no test.
+ */
 export function planCautions(context: TextileContext): readonly Caution[] {
   const firm = context.rings.some((one) => !['light', 'easy'].includes(holdBand(one.asked)))
   const told = new Set<string>()
   return context.plans.flatMap((plan) =>
     plan.layers.flatMap((layer) => {
       const key = `${layer.cloth.clothId}/${layer.cloth.direction}/${layer.cloth.state}`
-      if (!(layer.count > 0) || told.has(key)) return []
-      told.add(key)
-      return testCautions(layer, plan.zone, context, firm)
+      const asked = `${key}/${layer.askedAngle ?? ''}`
+      if (!(layer.count > 0) || layer.rigid || told.has(asked)) return []
+      const first = !told.has(key)
+      told.add(key).add(asked)
+      return [...directionCautions(layer, plan.zone), ...(first ? testCautions(layer, plan.zone, context, firm) : [])]
     }),
   )
 }

@@ -1,9 +1,9 @@
 import { mm, newtonPerMetre, type Mm, type NewtonPerMetre } from '../units/brand'
 import { fixedDecimal } from '../units/format'
 import type { Working, WorkingInput } from '../units/working'
-import { planPullOnLimit } from './plan'
 import { seriesTension } from './ring'
-import { stackOf, strainOfStack, tensionOfStack } from './stack'
+import { segmentPullOnLimit, stackOfSegment } from './segment'
+import { strainOfStack, tensionOfStack, type Stack } from './stack'
 import type { RingGeometry } from './types'
 
 /** Within this part of what it has to pass a level is tight. Source: setting, common practice. */
@@ -31,24 +31,27 @@ export interface LevelPass {
   readonly verdict: PassVerdict
 }
 
+const strainOf = (stack: Stack, tension: number): number => (stack.pulls ? strainOfStack(stack, tension) : stack.free)
+
 /**
  * Whether one level passes a girth on the way on or off, closures open. Reach = sum w (1 + e(T_in)) + rigid + opening, T_in the least
- * tension at which a plan meets its pull-on limit: one tension runs round. An opening takes the place of the lacing gap. No stitch limit is
+ * tension at which a plan meets its pull-on limit: one tension runs round. Rigid layers give up to their stop and no further. An opening takes the place of the lacing gap. No stitch limit is
  * applied: there is no stitch plan yet. Widths mm, one for each segment.
  */
 export function passLevel(geometry: RingGeometry, widths: readonly Mm[], opening: Opening, needs: Mm): LevelPass {
   const named = { level: geometry.level, name: geometry.name, needs }
-  const stacks = geometry.segments.map((segment) => stackOf(segment.plan))
-  const pulling = stacks.flatMap((stack, i) =>
-    widths[i]! > 0 && stack.pulls ? [tensionOfStack(stack, planPullOnLimit(geometry.segments[i]!.plan))] : [],
-  )
-  const limit = newtonPerMetre(pulling.length > 0 ? Math.min(...pulling) : 0)
+  const stacks = geometry.segments.map((segment, i) => stackOfSegment(segment, widths[i]!))
+  const pulling = stacks.flatMap((stack, i) => {
+    if (!(widths[i]! > 0) || !stack.pulls) return []
+    const strain = segmentPullOnLimit(geometry.segments[i]!, widths[i]!)
+    return [{ tension: tensionOfStack(stack, strain), atStop: tensionOfStack(stack, stack.stop) }]
+  })
+  const first = Math.min(...pulling.map((one) => one.tension))
+  const limit = newtonPerMetre(Number.isFinite(first) ? first : Math.max(0, ...pulling.map((one) => one.atStop)))
   if (opening.kind === 'whole') return { ...named, reach: mm(0), limit, tension: newtonPerMetre(0), pull: 0, verdict: 'open' }
   const open = opening.kind === 'by' ? opening.width : geometry.gapFront + geometry.gapBack
   const fixed = geometry.rigidFront + geometry.rigidBack + open
-  const reach = mm(
-    stacks.reduce((sum, stack, i) => sum + widths[i]! * (1 + (stack.pulls ? strainOfStack(stack, limit) : stack.free)), fixed),
-  )
+  const reach = mm(stacks.reduce((sum, stack, i) => sum + widths[i]! * (1 + strainOf(stack, limit)), fixed))
   if (reach < needs || pulling.length === 0) {
     const loose = reach >= needs
     return {

@@ -7,10 +7,11 @@ import type { RingGeometry, TextileSettings } from './types'
 const TOLERANCE = 1e-3
 const MOST_STEPS = 60
 
-/** Upper end of the pressure a ring puts on its wearer when cut for a hold: at rest or at a deep breath, whichever is more, Pa. Null where the ring has no solution. */
+/** Upper end of the pressure a ring puts on its wearer when cut for a hold: at rest or at a deep breath, whichever is more, Pa; infinite where rigid layers stop the breath. Null where the ring has no solution. */
 export function upperPressure(geometry: RingGeometry, hold: Pascal, settings: TextileSettings): Pascal | null {
   const solved = solveRing(geometry, { solve: 'cut', hold }, settings)
-  return solved.ok ? pascal(Math.max(solved.value.pressureBand.high, solved.value.breathBand.high)) : null
+  if (!solved.ok) return null
+  return pascal(solved.value.breathShort ? Infinity : Math.max(solved.value.pressureBand.high, solved.value.breathBand.high))
 }
 
 /**

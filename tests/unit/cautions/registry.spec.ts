@@ -20,6 +20,7 @@ describe('the registry of cautions', () => {
     const fixed = [...CAUTION_REGISTRY.values()].filter((entry) => !entry.clearable).map((entry) => entry.code)
     expect(fixed.sort()).toEqual([
       'cannot-leave-alone',
+      'wearer-breath-stopped',
       'wearer-cap-at-rest',
       'wearer-cap-in-breath',
       'wearer-not-agreed',
@@ -54,6 +55,7 @@ describe('the registry of cautions', () => {
     const found = [
       cautions.wearerCapAtRest(waist, facts),
       cautions.wearerCapInBreath(waist, facts),
+      cautions.wearerBreathStopped(waist, { ring: 'Bust', short: 400 }),
       cautions.wearerNotAgreed(garment, { why: facts.why }),
       cautions.wearerRigidOverBreast(waist, { ring: 'Bust', rigid: 12 }),
       cautions.wearerMeasuringOld(garment, { days: 20, limit: 14 }),

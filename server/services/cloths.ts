@@ -111,6 +111,7 @@ export async function clothsForGarment(room: Room, used: readonly string[]): Pro
     code: row.code,
     name: row.name,
     archived: row.archivedAt !== null,
+    thickness: mm(row.thickness),
     directions: directionsOf(row, tests, settings).flatMap((one) => (one.layer ? [one.layer] : [])),
   }))
 }

@@ -19,7 +19,7 @@ import { readableVersion } from './versions'
 
 /** What is printed beside the drawing. Worn strains are the wearer's and are not kept, so prints carry no stretch ticks. */
 function factsOf(kept: VersionKept, garmentCode: string, version: string, printedOn: string, unit: LengthUnit): PrintFacts {
-  const zones = ['front', 'back'] as const
+  const zones = ['front', 'side', 'back'] as const
   return {
     garmentCode,
     version,

@@ -40,13 +40,8 @@ export function ringsOf(body: ParsedBody<'solve.rings'>): RouteAnswer<'solve.rin
   const whole = solved(completeBody(body.measured))
   const rings = bodyLevels(whole).map((level) => {
     const choice = body.document.levels.find((one) => one.level === level.id) ?? freshLevel(level.id)
-    const geometry = ringGeometry(
-      level,
-      { ...choice, ...gapsOf(body.document, choice) },
-      body.plans,
-      body.measured,
-      body.document.use.exertion,
-    )
+    const { exertion } = body.document.use
+    const geometry = ringGeometry(level, { ...choice, ...gapsOf(body.document, choice) }, body.plans, body.measured, { exertion })
     const cut = solveRing(geometry, { solve: 'cut', hold: choice.hold }, settings)
     const mode = cut.ok ? modeOf(body.document, choice, cut.value) : null
     return answerOf(level.id, mode === null ? cut : solveRing(geometry, mode, settings))

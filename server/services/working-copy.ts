@@ -30,7 +30,7 @@ export async function garmentInputOf(
   const { db, workroom } = room
   const measuring = document.measuringId ? await findMeasuringById(db, workroom, document.measuringId) : undefined
   const own = measuring?.wearerId === row.wearerId ? measuring : undefined
-  const used = [...document.plans.front, ...document.plans.back].map((layer) => layer.clothId)
+  const used = Object.values(document.plans).flatMap((layers) => layers.map((layer) => layer.clothId))
   return {
     document,
     measured: own ? fromJson<MeasuredValues>(own.values) : {},

@@ -16,7 +16,11 @@ const layerChoice = z.object({
   direction,
   count: z.number().int().min(1, 'At least one.').max(12, 'Not over twelve.'),
   cutRatio: figure(0.5, 2),
+  angle: figure(0, 90).optional(),
+  rigid: z.boolean().optional(),
+  sewnTo: z.string().min(1).max(60).optional(),
 })
+const layerChoices = z.array(layerChoice).max(12)
 
 const levelChoice = z.object({
   level: levelId,
@@ -30,6 +34,10 @@ const levelChoice = z.object({
   gapBack: length(0, 2000),
   squeeze: length(0, 500),
   opening: length(0, 3000).nullable().default(null),
+  sewn: z
+    .array(z.object({ half: z.enum(['front', 'back']), layer: z.string().min(1).max(60), width: length(0, 2000) }))
+    .max(24)
+    .optional(),
 })
 
 /** What the bench edits and the working copy stores. */
@@ -47,7 +55,15 @@ export const garmentDocument = mirrors<GarmentDocument>()(
       frontRelease: z.boolean().default(false),
       dresser: z.string().trim().max(120).default(''),
     }),
-    plans: z.object({ front: z.array(layerChoice).max(12), back: z.array(layerChoice).max(12) }),
+    plans: z.object({
+      front: layerChoices,
+      back: layerChoices,
+      side: layerChoices.optional(),
+      cups: layerChoices.optional(),
+      yoke: layerChoices.optional(),
+      sleeve: layerChoices.optional(),
+      waistPanel: layerChoices.optional(),
+    }),
     levels: z
       .array(levelChoice)
       .max(5)
@@ -66,9 +82,15 @@ export const garmentDocument = mirrors<GarmentDocument>()(
       .max(200)
       .default([]),
     stiffness: z
-      .object({ factor: z.number().min(0.05).max(20), uncertainty: z.number().min(0).max(5), learntOn: isoDate })
+      .object({
+        factor: z.number().min(0.05).max(20),
+        uncertainty: z.number().min(0).max(5),
+        learntOn: isoDate,
+        plan: z.string().max(8000).optional(),
+      })
       .nullable()
       .default(null),
+    alteredIn: z.string().max(8000).optional(),
   }),
 )
 
@@ -98,7 +120,14 @@ export const caution = mirrors<Caution>()(
 )
 
 export const garmentCloth = mirrors<GarmentCloth>()(
-  z.object({ id, code: z.string(), name: z.string(), archived: z.boolean(), directions: z.array(layerCloth) }),
+  z.object({
+    id,
+    code: z.string(),
+    name: z.string(),
+    archived: z.boolean(),
+    directions: z.array(layerCloth),
+    thickness: length(0, 50).optional(),
+  }),
 )
 
 export const garmentInput = mirrors<GarmentInput>()(

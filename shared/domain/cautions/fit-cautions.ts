@@ -17,6 +17,17 @@ export const stiffnessLearnt = defineCaution<StiffnessFacts>('stiffness-learnt',
   todo: 'Drop it when the layers change.',
 })
 
+/** A stiffness was learnt in other layers than these, where it says nothing. */
+export const stiffnessElsewhere = defineCaution<StiffnessFacts>('stiffness-elsewhere', {
+  severity: 'note',
+  message: ({ factor, learntOn }) =>
+    `The fitting of ${learntOn} taught a factor of ${fixedDecimal(factor, 2)} in other layers; in these it is not used.`,
+  maker: 'A correction from a fitting is not used in these layers.',
+  figure: ({ factor }) => ({ value: factor, unit: 'ratio' }),
+  source: 'derived: one factor holds for one layer plan only',
+  todo: 'Drop it, or fit these layers and take a pull.',
+})
+
 /** So far from the test that something else is wrong. */
 export const stiffnessOdd = defineCaution<StiffnessFacts>('stiffness-odd', {
   severity: 'caution',

@@ -4,6 +4,7 @@ import type { Alteration, BodiceStyle, PointRole } from '../draft/types'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothState } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
+import { planKey } from './plan-key'
 import type { GarmentDocument, LayerChoice, LevelChoice } from './types'
 
 export type Zone = keyof GarmentDocument['plans']
@@ -45,7 +46,7 @@ export interface DocumentDiff {
 }
 
 export type DocumentChange = {
-  [Key in keyof GarmentDocument]: { readonly key: Key; readonly before: GarmentDocument[Key]; readonly after: GarmentDocument[Key] }
+  [Key in keyof GarmentDocument]-?: { readonly key: Key; readonly before: GarmentDocument[Key]; readonly after: GarmentDocument[Key] }
 }[keyof GarmentDocument]
 
 /** True when both name the same point or handle. */
@@ -73,6 +74,9 @@ export function applyCommand(
   return { document: next, diff: { label: commandWords(command), changes: differences(document, next) } }
 }
 
+/** A zone in the trade's words. */
+export const zoneWords = (zone: Zone): string => (zone === 'waistPanel' ? 'waist panel' : zone)
+
 /** The same difference the other way round. */
 export function invertDiff(diff: DocumentDiff): DocumentDiff {
   return {
@@ -95,11 +99,7 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
     case 'set-use':
       return { ...document, use: { ...document.use, ...command.use } }
     case 'set-layers':
-      return {
-        ...document,
-        plans:
-          command.zone === 'both' ? { front: command.layers, back: command.layers } : { ...document.plans, [command.zone]: command.layers },
-      }
+      return { ...document, plans: withLayers(document.plans, command.zone, command.layers) }
     case 'set-level':
       return {
         ...document,
@@ -120,7 +120,11 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
       return { ...document, stiffness: command.stiffness }
     case 'move-point':
     case 'set-move':
-      return { ...document, alterations: moved(document.alterations, command) }
+      return {
+        ...document,
+        alterations: moved(document.alterations, command),
+        ...(document.alterations.length === 0 ? { alteredIn: planKey(document.plans) } : {}),
+      }
     case 'change-alteration':
       return {
         ...document,
@@ -133,6 +137,14 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
     case 'take-over':
       return command.document
   }
+}
+
+/** A zone beside front and back is there while it has layers. */
+function withLayers(plans: GarmentDocument['plans'], zone: Zone | 'both', layers: readonly LayerChoice[]): GarmentDocument['plans'] {
+  if (zone === 'both') return { ...plans, front: layers, back: layers }
+  if (zone === 'front' || zone === 'back' || layers.length > 0) return { ...plans, [zone]: layers }
+  const { [zone]: _without, ...others } = plans
+  return others
 }
 
 type MoveCommand = Extract<Command, { kind: 'move-point' | 'set-move' }>
@@ -175,7 +187,7 @@ function commandWords(command: Command): string {
     case 'set-use':
       return 'use'
     case 'set-layers':
-      return command.zone === 'both' ? 'layers' : `layers, ${command.zone}`
+      return command.zone === 'both' ? 'layers' : `layers, ${zoneWords(command.zone)}`
     case 'set-level':
       return command.level === 'all' ? 'all levels' : command.level.replace('-', ' ')
     case 'set-style':

@@ -14,6 +14,19 @@ export interface LayerChoice {
   readonly direction: ClothDirection
   readonly count: number
   readonly cutRatio: number
+  /** Typed direction, degrees from the lengthwise, 0 to 90: the nearest tested one is taken in place of `direction`. */
+  readonly angle?: number
+  /** A layer without stretch: it gives up to its cut ratio and no further, and needs no stretch test. */
+  readonly rigid?: boolean
+  /** Id of the layer it is sewn to all over; absent: it floats between the seams. Said on the paper; nothing is computed from it. */
+  readonly sewnTo?: string
+}
+
+/** A rigid width sewn to one layer alone, the others floating over it: a channel on the lining. Once round the body, in one half. */
+export interface SewnChoice {
+  readonly half: 'front' | 'back'
+  readonly layer: string
+  readonly width: Mm
 }
 
 export interface LevelChoice {
@@ -31,6 +44,15 @@ export interface LevelChoice {
   readonly squeeze: Mm
   /** How far the closures open here while it is put on, mm; null: as far as it stands open when worn. */
   readonly opening: Mm | null
+  readonly sewn?: readonly SewnChoice[]
+}
+
+/** Zones that may have layers of their own, beside front and back. */
+export type ExtraZone = 'side' | 'cups' | 'yoke' | 'sleeve' | 'waistPanel'
+
+/** The layers of each zone. A zone that is absent has those of the half it lies in. */
+export type ZoneChoices = { readonly front: readonly LayerChoice[]; readonly back: readonly LayerChoice[] } & {
+  readonly [Zone in ExtraZone]?: readonly LayerChoice[]
 }
 
 /** How it is worn, put on and left. */
@@ -53,7 +75,7 @@ export interface GarmentDocument {
   readonly measuringId: string | null
   readonly state: ClothState
   readonly use: GarmentUse
-  readonly plans: { readonly front: readonly LayerChoice[]; readonly back: readonly LayerChoice[] }
+  readonly plans: ZoneChoices
   readonly levels: readonly LevelChoice[]
   readonly style: BodiceStyle
   readonly alterations: readonly Alteration[]
@@ -61,4 +83,6 @@ export interface GarmentDocument {
   readonly acknowledged: readonly Acknowledged[]
   /** What a fitting taught of the cloth; null until one did, or once it was dropped. */
   readonly stiffness: Stiffness | null
+  /** The layers that the first standing alteration was made in, as `planKey` writes them; absent in documents older than this. */
+  readonly alteredIn?: string
 }

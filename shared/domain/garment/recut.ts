@@ -1,5 +1,6 @@
 import { wearerLimits } from '../body/wearer'
 import { freshLevel, LEVEL_IDS } from '../document/fresh'
+import { planKey } from '../document/plan-key'
 import type { GarmentDocument } from '../document/types'
 import type { Alteration } from '../draft/types'
 import { cappedHold } from '../textile/hold'
@@ -7,6 +8,7 @@ import { solveRing } from '../textile/ring'
 import type { HoldBand, RingGeometry, RingSolution, TextileSettings } from '../textile/types'
 import { mm, pascal, type Mm, type Pascal } from '../units/brand'
 import { succeed, type Result } from '../units/result'
+import { widthsOnto } from './rings'
 import { solveGarment } from './solve'
 import type { GarmentInput, GarmentProblem, GarmentSolution } from './types'
 
@@ -124,6 +126,7 @@ function proposalOf(
     ...final.document,
     style: fittedInput.document.style,
     alterations,
+    alteredIn: planKey(final.document.plans),
     levels: final.document.levels.map((level) => {
       const wish = asked.get(level.level)
       return wish ? { ...level, solve: 'cut', hold: wish.hold } : level
@@ -174,9 +177,7 @@ export function recut(fittedInput: GarmentInput, final: GarmentInput): Result<Re
   if (!plain.ok) return plain
   const levels = fitted.value.rings.map((ring): RecutLevel => {
     const geometry = plain.value.ringInputs.find((one) => one.level === ring.level)
-    const copied = geometry
-      ? solveRing(geometry, { solve: 'tension', widths: ring.segments.map((one) => one.width) }, final.settings)
-      : null
+    const copied = geometry ? solveRing(geometry, { solve: 'tension', widths: widthsOnto(geometry, ring) }, final.settings) : null
     return {
       level: ring.level,
       name: ring.name,

@@ -1,8 +1,9 @@
 import type { BodyLevel, MeasuredValues } from '../body/types'
 import type { GarmentDocument, LevelChoice } from '../document/types'
 import { ASPECT_BY_LEVEL, breathAt, FRONT_SHARE_BY_LEVEL, type Exertion } from '../textile/defaults'
-import type { LayerPlan, RingGeometry, RingMode, RingSolution } from '../textile/types'
+import type { RingGeometry, RingMode, RingSegment, RingSolution, SewnRigid } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
+import { EVEN_SPLIT, zoneSegments, type BustSplit, type ZonePlans, type ZoneSegment } from './zones'
 
 /** Body breadth over depth at a level: as measured where both stand, else the default of the level, said to be estimated. */
 function aspectAt(level: BodyLevel, measured: MeasuredValues): { readonly aspect: number; readonly estimated: boolean } {
@@ -20,16 +21,26 @@ function aspectAt(level: BodyLevel, measured: MeasuredValues): { readonly aspect
   return { aspect: ASPECT_BY_LEVEL[level.id], estimated: true }
 }
 
+/** A segment of a ring with its plan and what is sewn to single layers of it. */
+function ringSegment(level: string, part: ZoneSegment, plans: ZonePlans, choice: LevelChoice): RingSegment {
+  const plan = plans[part.zone]!
+  const sewn: readonly SewnRigid[] = (choice.sewn ?? []).filter(
+    (one) => one.half === part.half && one.width > 0 && plan.layers.some((layer) => layer.id === one.layer),
+  )
+  const name = part.pieces.length > 1 ? part.half : part.pieces[0]
+  return { id: `${level}-${name}`, half: part.half, plan, share: part.share, ...(sewn.length > 0 ? { sewn } : {}) }
+}
+
 /**
- * The ring of one level of a garment with a plan for its front and one for its back: two segments, rigid widths and gaps
- * by half. Lengths mm, once round the body.
+ * The ring of one level of a garment: a segment for each half, or for each piece where the pieces of a half have different layers, divided
+ * as at the bust; rigid widths and gaps by half. Lengths mm, once round the body.
  */
 export function ringGeometry(
   level: BodyLevel,
   choice: LevelChoice,
-  plans: { readonly front: LayerPlan; readonly back: LayerPlan },
+  plans: ZonePlans,
   measured: MeasuredValues,
-  exertion: Exertion = 'calm',
+  more: { readonly split?: BustSplit; readonly exertion?: Exertion | undefined } = {},
 ): RingGeometry {
   const { aspect, estimated } = aspectAt(level, measured)
   const arc = level.id === 'bust' ? measured.frontBustArc?.value : undefined
@@ -38,10 +49,7 @@ export function ringGeometry(
     name: level.name,
     girth: level.girth,
     frontShare: arc ? arc / level.girth : FRONT_SHARE_BY_LEVEL[level.id],
-    segments: [
-      { id: `${level.id}-front`, half: 'front', plan: plans.front, share: 1 },
-      { id: `${level.id}-back`, half: 'back', plan: plans.back, share: 1 },
-    ],
+    segments: zoneSegments(plans, level.id, more.split ?? EVEN_SPLIT).map((part) => ringSegment(level.id, part, plans, choice)),
     rigidFront: choice.rigidFront,
     rigidBack: choice.rigidBack,
     gapFront: choice.gapFront,
@@ -49,7 +57,7 @@ export function ringGeometry(
     squeeze: choice.squeeze,
     aspect,
     aspectEstimated: estimated,
-    breath: breathAt(level.id, exertion),
+    breath: breathAt(level.id, more.exertion ?? 'calm'),
   }
 }
 
@@ -66,6 +74,14 @@ export function widthsForCut(solved: RingSolution, cut: Mm): readonly Mm[] {
   const cloth = solved.segments.reduce((sum, segment) => sum + segment.width, 0)
   const asked = cut - solved.rigidFront - solved.rigidBack
   return solved.segments.map((segment) => mm((segment.width * asked) / cloth))
+}
+
+/** The cloth of a solved ring laid on another ring of the same level: each half keeps its width, divided by the other's shares. */
+export function widthsOnto(geometry: RingGeometry, ring: RingSolution): readonly Mm[] {
+  const same = geometry.segments.length === ring.segments.length && geometry.segments.every((one, i) => one.half === ring.segments[i]!.half)
+  if (same) return ring.segments.map((one) => one.width)
+  const half = (side: 'front' | 'back') => ring.segments.filter((one) => one.half === side).reduce((sum, one) => sum + one.width, 0)
+  return geometry.segments.map((segment) => mm(half(segment.half) * segment.share))
 }
 
 /** Which mode the level asks for once its cut has been solved from the hold. Null when what it needs was not typed. */

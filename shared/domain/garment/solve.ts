@@ -1,6 +1,6 @@
 import { completeBody } from '../body/complete'
 import { bodyLevels } from '../body/levels'
-import type { BodyLevel } from '../body/types'
+import type { BodyLevel, DraftBody, LevelId } from '../body/types'
 import { wearerLimits } from '../body/wearer'
 import type { LevelChoice } from '../document/types'
 import { freshLevel } from '../document/fresh'
@@ -10,15 +10,17 @@ import { checkStyle } from '../draft/style'
 import type { Draft, LevelWidths } from '../draft/types'
 import { cappedHold } from '../textile/hold'
 import { solveRing } from '../textile/ring'
-import { planStrainAt } from '../textile/plan'
-import type { LayerPlan, RingGeometry, RingMode, RingSolution } from '../textile/types'
-import { mm } from '../units/brand'
+import { stackOfSegment } from '../textile/segment'
+import { strainOfStack } from '../textile/stack'
+import type { RingGeometry, RingSolution } from '../textile/types'
+import { mm, type Mm } from '../units/brand'
 import { fail, succeed, type Problem, type Result } from '../units/result'
 import { garmentCautions } from './cautions'
 import { passesOf } from './passes'
-import { planOf } from './plans'
+import { zonePlans } from './plans'
 import { gapsOf, modeOf, ringGeometry } from './rings'
 import type { GarmentInput, GarmentProblem, GarmentSolution } from './types'
+import { bustSplit, dividesHalves, EVEN_SPLIT, EXTRA_ZONES, zoneSegments, type BustSplit, type ZonePlans, type ZoneSegment } from './zones'
 
 /** Stored with every version, so that it is known which arithmetic made it. */
 export const ENGINE = 'tenterframe-1'
@@ -31,6 +33,8 @@ const MOST_ROUNDS = 8
 interface Level {
   readonly body: BodyLevel
   readonly choice: LevelChoice
+  /** The segments of the ring, each with the pieces it runs over. */
+  readonly parts: readonly ZoneSegment[]
   readonly geometry: RingGeometry
   readonly solved: RingSolution
 }
@@ -57,19 +61,19 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   const [styleProblem] = checkStyle(document.style, body.value)
   if (styleProblem) return atStep('draft', styleProblem)
 
-  const front = planOf('front', document.plans.front, input.cloths, document.state, document.stiffness)
-  if (!front.ok) return front
-  const back = planOf('back', document.plans.back, input.cloths, document.state, document.stiffness)
-  if (!back.ok) return back
-  const plans = { front: front.value, back: back.value }
+  const zones = zonePlans(document, input.cloths)
+  if (!zones.ok) return zones
+  const plans = zones.value
 
-  const levels: Level[] = []
-  for (const level of bodyLevels(body.value)) {
-    const choice = document.levels.find((one) => one.level === level.id) ?? freshLevel(level.id)
-    const geometry = ringGeometry(level, { ...choice, ...gapsOf(document, choice) }, plans, input.measured, document.use.exertion)
-    const solved = solveLevel(input, choice, geometry)
-    if (!solved.ok) return atStep('layers', { ...solved.problem, at: solved.problem.at ?? level.id })
-    levels.push({ body: level, choice, geometry: withGaps(geometry, solved.value), solved: solved.value })
+  const first = solveLevels(input, body.value, plans, EVEN_SPLIT)
+  if (!first.ok) return first
+  let levels = first.value
+  if (dividesHalves(plans)) {
+    const drafted = draftFrom(input, body.value, levels, new Map(levels.map((level) => [level.body.id, clothWidths(level.solved)])))
+    if (!drafted.ok) return atStep('draft', drafted.problem)
+    const again = solveLevels(input, body.value, plans, bustSplit(drafted.value))
+    if (!again.ok) return again
+    levels = again.value
   }
 
   const settled = settle(input, body.value, levels)
@@ -82,7 +86,7 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   for (const level of levels) {
     const widths = widthsRead(altered.draft, level)
     if (!widths) continue
-    const read = solveRing(level.geometry, tensionMode(widths), input.settings)
+    const read = solveRing(level.geometry, { solve: 'tension', widths }, input.settings)
     if (!read.ok) return atStep('layers', { ...read.problem, at: level.body.id })
     ringInputs.push(level.geometry)
     rings.push({ ...read.value, mode: level.solved.mode, governs: level.solved.governs, hold: level.solved.hold })
@@ -91,14 +95,14 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   const alterationGirth = levels.flatMap((level) => {
     const before = widthsRead(plain, level)
     const after = widthsRead(altered.draft, level)
-    return before && after ? [{ level: level.body.id, by: mm(2 * (after.front + after.back - before.front - before.back)) }] : []
+    return before && after ? [{ level: level.body.id, by: mm(sumOf(after) - sumOf(before)) }] : []
   })
 
   const solution: Omit<GarmentSolution, 'cautions'> = {
     engine: ENGINE,
     body: body.value,
     levels: levels.map((level) => level.body),
-    plans: [plans.front, plans.back],
+    plans: [plans.front, plans.back, ...EXTRA_ZONES.flatMap((zone) => plans[zone] ?? [])],
     ringInputs,
     rings,
     draft: altered.draft,
@@ -114,6 +118,22 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
     alterationGirth,
   }
   return succeed({ ...solution, cautions: garmentCautions(input, solution, altered.effects) })
+}
+
+/** The ring of every level of the body under the plans of its zones. */
+function solveLevels(input: GarmentInput, body: DraftBody, plans: ZonePlans, split: BustSplit): Result<readonly Level[], GarmentProblem> {
+  const { document } = input
+  const levels: Level[] = []
+  for (const level of bodyLevels(body)) {
+    const choice = document.levels.find((one) => one.level === level.id) ?? freshLevel(level.id)
+    const more = { split, exertion: document.use.exertion }
+    const geometry = ringGeometry(level, { ...choice, ...gapsOf(document, choice) }, plans, input.measured, more)
+    const solved = solveLevel(input, choice, geometry)
+    if (!solved.ok) return atStep('layers', { ...solved.problem, at: solved.problem.at ?? level.id })
+    const parts = zoneSegments(plans, level.id, split)
+    levels.push({ body: level, choice, parts, geometry: withGaps(geometry, solved.value), solved: solved.value })
+  }
+  return succeed(levels)
 }
 
 const isNotApplied = (state: string): boolean => state === 'parked' || state === 'refused'
@@ -134,19 +154,22 @@ const withGaps = (geometry: RingGeometry, solved: RingSolution): RingGeometry =>
   gapBack: solved.gapBack,
 })
 
+const draftFrom = (input: GarmentInput, body: DraftBody, levels: readonly Level[], cloth: ReadonlyMap<LevelId, ClothWidths>) =>
+  draftBodice({
+    body,
+    style: input.document.style,
+    widths: levels.map((level) => levelWidths(level, cloth.get(level.body.id)!)),
+  })
+
 /** Solve, draft, read, correct. */
 function settle(
   input: GarmentInput,
-  body: Parameters<typeof draftBodice>[0]['body'],
+  body: DraftBody,
   levels: readonly Level[],
 ): Result<{ readonly draft: Draft; readonly rounds: number; readonly done: boolean }> {
-  const cloth = new Map<string, ClothWidths>(levels.map((level) => [level.body.id, clothWidths(level.solved)]))
+  const cloth = new Map<LevelId, ClothWidths>(levels.map((level) => [level.body.id, clothWidths(level.solved)]))
   for (let round = 1; ; round++) {
-    const drafted = draftBodice({
-      body,
-      style: input.document.style,
-      widths: levels.map((level) => levelWidths(level, cloth.get(level.body.id)!)),
-    })
+    const drafted = draftFrom(input, body, levels, cloth)
     if (!drafted.ok) return drafted
     let done = true
     for (const level of levels) {
@@ -179,33 +202,39 @@ function levelWidths(level: Level, cloth: ClothWidths): LevelWidths {
   }
 }
 
-/** Cloth of one half of the body by zone as it lies on the pieces; null where the level does not cross them all. */
-function widthsRead(draft: Draft, level: Level): ClothWidths | null {
-  const widths = { front: -level.geometry.rigidFront / 2, back: -level.geometry.rigidBack / 2 }
+const sumOf = (widths: readonly Mm[]): number => widths.reduce((sum, width) => sum + width, 0)
+
+/**
+ * Cloth of each segment once round the body as it lies on the pieces, mm; the rigid width of a half is taken off its pieces in proportion,
+ * because nobody says yet on which of them it lies. Null where the level does not cross them all.
+ */
+function widthsRead(draft: Draft, level: Level): readonly Mm[] | null {
+  const onPieces = new Map<string, number>()
   for (const piece of draft.pieces) {
     const crossing = piece.levels.find((one) => one.level === level.body.id)
     if (!crossing) return null
-    widths[piece.zone] += crossing.width
+    onPieces.set(piece.id, crossing.width)
   }
-  return widths
+  const paper = level.parts.map((part) => 2 * part.pieces.reduce((sum, piece) => sum + (onPieces.get(piece) ?? 0), 0))
+  const half = (side: 'front' | 'back') => paper.reduce((sum, width, i) => (level.parts[i]!.half === side ? sum + width : sum), 0)
+  const cloth = {
+    front: 1 - level.geometry.rigidFront / half('front'),
+    back: 1 - level.geometry.rigidBack / half('back'),
+  }
+  return paper.map((width, i) => mm(width * cloth[level.parts[i]!.half]))
 }
 
-const tensionMode = (widths: ClothWidths): RingMode => ({ solve: 'tension', widths: [mm(2 * widths.front), mm(2 * widths.back)] })
-
 /** Factor on the cloth that brings the widths read, at the tension asked for, round the body once. */
-function correctionOf(level: Level, read: ClothWidths): number {
-  const { solved, geometry } = level
-  const reach = (['front', 'back'] as const).reduce((sum, half) => {
-    const plan = geometry.segments.find((segment) => segment.half === half)!.plan
-    return sum + 2 * read[half] * (1 + strainOf(plan, solved))
-  }, 0)
+function correctionOf({ solved, geometry }: Level, read: readonly Mm[]): number {
+  const reach = geometry.segments.reduce(
+    (sum, segment, i) => sum + read[i]! * (1 + strainOfStack(stackOfSegment(segment, read[i]!), solved.tension)),
+    0,
+  )
   return (solved.surface - geometry.rigidFront - geometry.rigidBack - geometry.gapFront - geometry.gapBack) / reach
 }
 
 /** How far the tension on the widths read is from the one asked for, as a part of it. */
-function tensionMiss(input: GarmentInput, level: Level, read: ClothWidths): number {
-  const solved = solveRing(level.geometry, tensionMode(read), input.settings)
+function tensionMiss(input: GarmentInput, level: Level, read: readonly Mm[]): number {
+  const solved = solveRing(level.geometry, { solve: 'tension', widths: read }, input.settings)
   return solved.ok && level.solved.tension > 0 ? Math.abs(solved.value.tension / level.solved.tension - 1) : 0
 }
-
-const strainOf = (plan: LayerPlan, solved: RingSolution): number => planStrainAt(plan, solved.tension)

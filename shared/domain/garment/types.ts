@@ -15,6 +15,8 @@ export interface GarmentCloth {
   readonly name: string
   readonly archived: boolean
   readonly directions: readonly LayerCloth[]
+  /** For a rigid layer of a cloth that nobody tested; absent: as its tests have it. */
+  readonly thickness?: Mm
 }
 
 export interface GarmentInput {

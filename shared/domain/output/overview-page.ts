@@ -4,7 +4,7 @@ import { formatLength } from '../units/format'
 import { mm } from '../units/brand'
 import { entry, fittingSize, paragraph, tableRow } from './flow'
 import type { Flow, TableColumn } from './flow'
-import { ACTUAL_SIZE, allowanceState, cutLines, SAFETY_LINE } from './print-words'
+import { ACTUAL_SIZE, allowanceState, cutLines, layersOf, SAFETY_LINE } from './print-words'
 import type { PrintedLines, PrintFacts } from './print-words'
 import { polygon, rectangle, stroke, words } from './sheet'
 import type { Sheet, SheetOperation } from './sheet'
@@ -130,8 +130,8 @@ type Part = (flow: Flow) => Flow
 function cuttingParts({ facts, pieces }: OverviewInput): Part[] {
   const columns: readonly TableColumn[] = [{ share: 0.16 }, { share: 0.34 }, { share: 0.5 }]
   const rows = pieces.map((piece): Part => (flow) => {
-    const cloths = facts.layers
-      .filter((layer) => layer.zone === piece.zone && layer.count > 0)
+    const cloths = layersOf(piece, facts)
+      .filter((layer) => layer.count > 0)
       .map((layer) => `${layer.label.toLowerCase()}: ${layer.cloth}`)
     return tableRow(flow, columns, [piece.name, cutLines(piece, facts).join(', '), cloths.join('; ')], BODY)
   })

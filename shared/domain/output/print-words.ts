@@ -16,14 +16,23 @@ export interface PrintFacts {
   /** The day of the print as the workroom writes it. */
   readonly printedOn: string
   readonly unit: 'cm' | 'in'
-  /** Layers as they are cut, front and back. */
-  readonly layers: readonly { readonly zone: 'front' | 'back'; readonly label: string; readonly cloth: string; readonly count: number }[]
+  /** Layers as they are cut, by zone. */
+  readonly layers: readonly { readonly zone: PrintZone; readonly label: string; readonly cloth: string; readonly count: number }[]
   /** Cut girths, cloth and rigid widths without the gap, with the word for the hold. */
   readonly rings: readonly { readonly name: string; readonly cut: Mm; readonly hold: HoldBand }[]
   /** Open cautions; only the maker's words are printed. */
   readonly cautions: readonly Pick<Caution, 'severity' | 'makerMessage'>[]
   /** Worn strain by zone and level; given, the pieces carry stretch ticks. */
   readonly strains?: Readonly<Record<'front' | 'back', Readonly<Partial<Record<LevelId, number>>>>>
+}
+
+/** Zones that have pieces of their own. */
+export type PrintZone = 'front' | 'side' | 'back'
+
+/** Layers of a piece: those of the side where the side has its own, else of its half. */
+export function layersOf(piece: Pick<DraftPiece, 'id' | 'zone'>, facts: Pick<PrintFacts, 'layers'>): PrintFacts['layers'] {
+  const side = piece.id === 'side-front' || piece.id === 'side-back' ? facts.layers.filter((layer) => layer.zone === 'side') : []
+  return side.length > 0 ? side : facts.layers.filter((layer) => layer.zone === piece.zone)
 }
 
 /** Which outlines a print shows. */
@@ -36,8 +45,8 @@ export const SAFETY_LINE =
 export const ACTUAL_SIZE = 'Print at actual size (100 %), without fitting to the page.'
 
 /** How many of a piece are cut from each layer: `cut 2 shell`, one line a layer, the fold said once. */
-export function cutLines(piece: Pick<DraftPiece, 'zone' | 'quantity' | 'onFold'>, facts: Pick<PrintFacts, 'layers'>): string[] {
-  const layers = facts.layers.filter((layer) => layer.zone === piece.zone && layer.count > 0)
+export function cutLines(piece: Pick<DraftPiece, 'id' | 'zone' | 'quantity' | 'onFold'>, facts: Pick<PrintFacts, 'layers'>): string[] {
+  const layers = layersOf(piece, facts).filter((layer) => layer.count > 0)
   const cut = layers.map((layer) => `cut ${layer.count * piece.quantity} ${layer.label.toLowerCase()}`)
   const how = piece.onFold ? 'on the fold' : piece.quantity === 2 ? 'in pairs' : ''
   const counted = cut.length > 0 ? cut : [`cut ${piece.quantity} of each layer`]

@@ -8,6 +8,8 @@ export interface Stiffness {
   readonly uncertainty: number
   /** Day of the fitting, ISO. */
   readonly learntOn: string
+  /** The layers it was learnt in, as the document writes them; it holds for these alone. Absent: learnt before this was kept. */
+  readonly plan?: string
 }
 
 /** A learnt factor outside is odd: the test, the pull or the plan is not what was thought. Source: setting. */

@@ -87,6 +87,7 @@ export const garmentDocument = mirrors<GarmentDocument>()(
         uncertainty: z.number().min(0).max(5),
         learntOn: isoDate,
         plan: z.string().max(8000).optional(),
+        levels: z.array(z.string().max(40)).max(12).optional(),
       })
       .nullable()
       .default(null),

@@ -34,5 +34,16 @@ export interface FittingReading {
   /** The level that is tightest against the others, when one is tight at all. */
   readonly tightest: LevelId | null
   /** Null where no pull was taken: the stiffness is unknown and stays as it was. */
-  readonly stiffness: { readonly factor: number; readonly uncertainty: number; readonly pulls: number; readonly isOdd: boolean } | null
+  readonly stiffness: LearntStiffness | null
+}
+
+export interface LearntStiffness {
+  readonly factor: number
+  readonly uncertainty: number
+  readonly pulls: number
+  readonly isOdd: boolean
+  /** Levels of the plan that was pulled, those without a pull among them: what the factor holds for. */
+  readonly levels: readonly LevelId[]
+  /** Pulls of another plan, which say nothing here. */
+  readonly left: number
 }

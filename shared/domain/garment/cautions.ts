@@ -28,7 +28,7 @@ function directionsUsed(input: GarmentInput, solution: Pick<GarmentSolution, 'pl
 }
 
 function stiffnessCautions(document: GarmentInput['document']): readonly Caution[] {
-  if (document.stiffness === null) return []
+  if (!document.stiffness) return []
   const { factor, learntOn } = document.stiffness
   const place = { kind: 'garment' } as const
   if (standingStiffness(document) === null) return [cautions.stiffnessElsewhere(place, { factor, learntOn })]

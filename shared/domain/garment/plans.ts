@@ -91,16 +91,20 @@ export function planOf(
 }
 
 /** The learnt stiffness while the layers are those it was learnt in; in others it says nothing. */
-export function standingStiffness({ stiffness, plans }: Pick<GarmentDocument, 'stiffness' | 'plans'>): Stiffness | null {
+export function standingStiffness({ stiffness = null, plans }: Pick<GarmentDocument, 'stiffness' | 'plans'>): Stiffness | null {
   return stiffness && (stiffness.plan === undefined || stiffness.plan === planKey(plans)) ? stiffness : null
 }
 
-/** The plans of all zones of a garment: front and back, and those beside them that have layers. */
-export function zonePlans(document: GarmentDocument, cloths: GarmentInput['cloths']): Result<ZonePlans, GarmentProblem> {
+/** The plans of all zones of a garment: front and back, and those beside them that have layers; cloths taken times a learnt stiffness. */
+export function zonePlans(
+  document: GarmentDocument,
+  cloths: GarmentInput['cloths'],
+  stiffness: Stiffness | null,
+): Result<ZonePlans, GarmentProblem> {
   const extra = EXTRA_ZONES.filter((zone) => (document.plans[zone]?.length ?? 0) > 0)
   const made: Partial<Record<Zone, LayerPlan>> = {}
   for (const zone of ['front', 'back', ...extra] as const) {
-    const plan = planOf(zone, document.plans[zone] ?? [], cloths, document.state, standingStiffness(document))
+    const plan = planOf(zone, document.plans[zone] ?? [], cloths, document.state, stiffness)
     if (!plan.ok) return plan
     made[zone] = plan.value
   }

@@ -17,7 +17,7 @@ import { mm, type Mm } from '../units/brand'
 import { fail, succeed, type Problem, type Result } from '../units/result'
 import { garmentCautions } from './cautions'
 import { passesOf } from './passes'
-import { zonePlans } from './plans'
+import { standingStiffness, zonePlans } from './plans'
 import { gapsOf, modeOf, ringGeometry } from './rings'
 import type { GarmentInput, GarmentProblem, GarmentSolution } from './types'
 import { bustSplit, dividesHalves, EVEN_SPLIT, EXTRA_ZONES, zoneSegments, type BustSplit, type ZonePlans, type ZoneSegment } from './zones'
@@ -61,17 +61,21 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   const [styleProblem] = checkStyle(document.style, body.value)
   if (styleProblem) return atStep('draft', styleProblem)
 
-  const zones = zonePlans(document, input.cloths)
-  if (!zones.ok) return zones
-  const plans = zones.value
+  const stiffness = standingStiffness(document)
+  const tested = zonePlans(document, input.cloths, null)
+  if (!tested.ok) return tested
+  const learnt = stiffness ? zonePlans(document, input.cloths, stiffness) : tested
+  if (!learnt.ok) return learnt
+  const plansAt = (level: LevelId) => (stiffness?.levels?.includes(level) === false ? tested.value : learnt.value)
+  const plans = learnt.value
 
-  const first = solveLevels(input, body.value, plans, EVEN_SPLIT)
+  const first = solveLevels(input, body.value, plansAt, EVEN_SPLIT)
   if (!first.ok) return first
   let levels = first.value
   if (dividesHalves(plans)) {
     const drafted = draftFrom(input, body.value, levels, new Map(levels.map((level) => [level.body.id, clothWidths(level.solved)])))
     if (!drafted.ok) return atStep('draft', drafted.problem)
-    const again = solveLevels(input, body.value, plans, bustSplit(drafted.value))
+    const again = solveLevels(input, body.value, plansAt, bustSplit(drafted.value))
     if (!again.ok) return again
     levels = again.value
   }
@@ -121,11 +125,17 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
 }
 
 /** The ring of every level of the body under the plans of its zones. */
-function solveLevels(input: GarmentInput, body: DraftBody, plans: ZonePlans, split: BustSplit): Result<readonly Level[], GarmentProblem> {
+function solveLevels(
+  input: GarmentInput,
+  body: DraftBody,
+  plansAt: (level: LevelId) => ZonePlans,
+  split: BustSplit,
+): Result<readonly Level[], GarmentProblem> {
   const { document } = input
   const levels: Level[] = []
   for (const level of bodyLevels(body)) {
     const choice = document.levels.find((one) => one.level === level.id) ?? freshLevel(level.id)
+    const plans = plansAt(level.id)
     const more = { split, exertion: document.use.exertion }
     const geometry = ringGeometry(level, { ...choice, ...gapsOf(document, choice) }, plans, input.measured, more)
     const solved = solveLevel(input, choice, geometry)

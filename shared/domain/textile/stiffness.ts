@@ -10,6 +10,8 @@ export interface Stiffness {
   readonly learntOn: string
   /** The layers it was learnt in, as the document writes them; it holds for these alone. Absent: learnt before this was kept. */
   readonly plan?: string
+  /** Levels that have those layers; absent: all. */
+  readonly levels?: readonly string[]
 }
 
 /** A learnt factor outside is odd: the test, the pull or the plan is not what was thought. Source: setting. */

@@ -5,7 +5,7 @@ import { solveGarment } from '../../../shared/domain/garment/solve'
 import { solveRing } from '../../../shared/domain/textile/ring'
 import { DEFAULT_TEXTILE_SETTINGS as settings } from '../../../shared/domain/textile/defaults'
 import { mm, newton } from '../../../shared/domain/units/brand'
-import { inventedDocument, inventedInput } from '../../fixtures/garment-inputs'
+import { inventedDocument, inventedInput, layers } from '../../fixtures/garment-inputs'
 
 const solve = (patch: Parameters<typeof inventedDocument>[0] = {}) => {
   const result = solveGarment(inventedInput({ document: inventedDocument(patch) }))
@@ -98,5 +98,49 @@ describe('what a fitting says', () => {
     const odd = solve({ stiffness: { factor: 2.4, uncertainty: 0.1, learntOn: '2026-11-20' } })
     expect(odd.cautions.map((one) => one.code)).toContain('stiffness-odd')
     expect(solve({ stiffness: null }).rings).toEqual(plainCut.rings)
+  })
+})
+
+describe('levels of one plan only', () => {
+  const panel = inventedDocument({ plans: { ...inventedDocument().plans, waistPanel: layers(['net', 3]) } })
+  const mixed = solve(panel)
+  const pulls = (factors: Readonly<Record<string, number>>): FittingLevel[] =>
+    mixed.rings.map((ring) => ({
+      level: ring.level as FittingLevel['level'],
+      gap: mm(ring.gapBack),
+      feel: null,
+      pull: factors[ring.level] === undefined ? null : { force: newton(ring.tension * factors[ring.level]! * 0.05), tab: mm(50) },
+    }))
+
+  it('learns from the plan with most pulls, and holds for its levels alone', () => {
+    const reading = readFitting(pulls({ bust: 1.2, underbust: 1.2, waist: 3 }), mixed.ringInputs, mixed.rings, settings)
+    expect(reading.stiffness).toMatchObject({ pulls: 2, left: 1 })
+    expect(reading.stiffness!.factor).toBeCloseTo(1.2, 6)
+    expect(reading.stiffness!.levels).not.toContain('waist')
+    const { factor, uncertainty, levels } = reading.stiffness!
+    const corrected = solve({ ...panel, stiffness: { factor, uncertainty, learntOn: '2026-11-20', levels } })
+    const cut = (solution: typeof mixed, level: string) => solution.rings.find((ring) => ring.level === level)!.cut
+    expect(cut(corrected, 'underbust')).toBeGreaterThan(cut(mixed, 'underbust') + 1)
+    expect(Math.abs(cut(corrected, 'waist') - cut(mixed, 'waist'))).toBeLessThan(0.2)
+  })
+
+  it('compares a gap with those of its own plan alone', () => {
+    const levels = pulls({}).map((one) => (one.level === 'waist' ? one : { ...one, gap: mm(one.gap! + 20) }))
+    const reading = readFitting(levels, mixed.ringInputs, mixed.rings, settings)
+    expect(reading.levels.find((one) => one.level === 'waist')!.share).toBeCloseTo(1, 9)
+    expect(reading.tightest).not.toBe('waist')
+  })
+
+  it('stays a factor on the test when the version was already solved with one', () => {
+    const stiffness = { factor: 1.5, uncertainty: 0.1, learntOn: '2026-11-20' }
+    const stiff = solve({ stiffness })
+    const seen = stiff.rings.map((ring) => ({
+      level: ring.level as FittingLevel['level'],
+      gap: mm(ring.gapBack),
+      feel: null,
+      pull: { force: newton(ring.tension * 0.05), tab: mm(50) },
+    }))
+    const reading = readFitting(seen, stiff.ringInputs, stiff.rings, settings, stiffness)
+    expect(reading.stiffness!.factor).toBeCloseTo(1.5, 2)
   })
 })

@@ -7,8 +7,11 @@ import { checkStyle, defaultStyle } from '../../shared/domain/draft/style'
 import type { Draft } from '../../shared/domain/draft/types'
 import { recut } from '../../shared/domain/garment/recut'
 import { gapsOf, modeOf, ringGeometry } from '../../shared/domain/garment/rings'
+import { levelCautions } from '../../shared/domain/garment/passes'
+import { whatIf } from '../../shared/domain/garment/what-if'
 import { fitLoadCurve } from '../../shared/domain/textile/curve'
 import { DEFAULT_TEXTILE_SETTINGS } from '../../shared/domain/textile/defaults'
+import { passLevel } from '../../shared/domain/textile/getting-in'
 import { solveRing } from '../../shared/domain/textile/ring'
 import { testFigures } from '../../shared/domain/textile/test'
 import type { RingSolution } from '../../shared/domain/textile/types'
@@ -49,12 +52,22 @@ export function ringsOf(body: ParsedBody<'solve.rings'>): RouteAnswer<'solve.rin
   return { rings }
 }
 
+export function gettingInOf({ levels }: ParsedBody<'solve.gettingIn'>): RouteAnswer<'solve.gettingIn'> {
+  const passes = levels.map(({ ring, opening, needs }) => passLevel(ring.geometry, ring.widths, opening, needs))
+  return { levels: passes, cautions: passes.flatMap((pass) => levelCautions({ ...pass, over: 'parts it passes' }, true)) }
+}
+
 export function recutOf({ fitted, final }: ParsedBody<'solve.recut'>): RouteAnswer<'solve.recut'> {
   return solved(recut(fitted, final))
 }
 
-export function fittingOf({ levels, geometries, rings, settings }: ParsedBody<'solve.fitting'>): RouteAnswer<'solve.fitting'> {
-  return readFitting(levels, geometries, rings, settings ?? DEFAULT_TEXTILE_SETTINGS)
+export function fittingOf({ levels, geometries, rings, settings, standing }: ParsedBody<'solve.fitting'>): RouteAnswer<'solve.fitting'> {
+  return readFitting(levels, geometries, rings, settings ?? DEFAULT_TEXTILE_SETTINGS, standing)
+}
+
+export function whatIfOf({ input, trials }: ParsedBody<'solve.whatIf'>): RouteAnswer<'solve.whatIf'> {
+  const { rings, comes, goes, document } = solved(whatIf(input, trials))
+  return { rings: [...rings], comes: [...comes], goes: [...goes], document }
 }
 
 export function piecesOf(given: ParsedBody<'solve.pieces'>): Draft {

@@ -9,7 +9,8 @@ import { clothState, direction, layerCloth, layerPlan, ringGeometry, ringSolutio
 import { wearerFlags } from './wearers'
 import { textileSettings } from './workroom'
 
-const layerChoice = z.object({
+/** A layer as it is chosen. */
+export const layerChoice = z.object({
   id: z.string().min(1).max(60),
   label: z.string().trim().min(1, 'Name the layer.').max(80),
   clothId: z.string().uuid('Choose a cloth.'),

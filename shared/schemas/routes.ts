@@ -13,12 +13,16 @@ import {
   solveCurveBody,
   solveFittingAnswer,
   solveFittingBody,
+  solveGettingInAnswer,
+  solveGettingInBody,
   solvePiecesBody,
   solveRecutAnswer,
   solveRecutBody,
   solveRingsAnswer,
   solveRingsBody,
   solveTilesBody,
+  solveWhatIfAnswer,
+  solveWhatIfBody,
 } from './solve'
 import { clearanceBody, restoreBody, versionBody, versionSummary, versionWhole } from './versions'
 import { flagsBody, wearer, wearerBody, wearerUpdate } from './wearers'
@@ -536,6 +540,16 @@ export const routes = {
     group: 'Solve',
     summary: 'Rings from a body, plans and a hold, a cut or a gap.',
   },
+  'solve.gettingIn': {
+    ...plain,
+    method: 'POST',
+    path: '/api/solve/getting-in',
+    access: 'signed-in',
+    body: solveGettingInBody,
+    response: solveGettingInAnswer,
+    group: 'Solve',
+    summary: 'Whether levels pass what they have to on the way on and off, with the pull it takes. No stitch limit is applied.',
+  },
   'solve.recut': {
     ...plain,
     method: 'POST',
@@ -555,6 +569,16 @@ export const routes = {
     response: solveFittingAnswer,
     group: 'Solve',
     summary: 'What a fitting says: which level is tight and by how much, and the stiffness where a pull was taken.',
+  },
+  'solve.whatIf': {
+    ...plain,
+    method: 'POST',
+    path: '/api/solve/what-if',
+    access: drafting,
+    body: solveWhatIfBody,
+    response: solveWhatIfAnswer,
+    group: 'Solve',
+    summary: 'Rings of a garment as it stands beside those of a change.',
   },
   'solve.pieces': {
     ...plain,

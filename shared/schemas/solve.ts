@@ -1,11 +1,15 @@
 import { z } from 'zod'
-import { figure, length, mirrors, pressure, tension } from './base'
+import { figure, length, mirrors, pressure, ratio, tension } from './base'
+import { MEASUREMENT_CATALOGUE } from '../domain/body/catalogue'
+import type { MeasurementKey } from '../domain/body/types'
 import type { FittingReading } from '../domain/fit/types'
 import type { Recut } from '../domain/garment/recut'
+import type { RingDifference, Trial } from '../domain/garment/what-if'
+import type { LevelPass, Opening } from '../domain/textile/getting-in'
 import type { Problem } from '../domain/units/result'
 import { bodiceStyle, draftBody, draftPiece, levelId, levelWidths } from './draft'
 import { fittingLevel } from './fittings'
-import { garmentDocument, garmentInput, garmentSolution } from './garments'
+import { caution, garmentDocument, garmentInput, garmentSolution, layerChoice } from './garments'
 import { measuredValues } from './measuring'
 import { paperId, tileOptions } from './print'
 import { layerPlan, loadCurve, ringGeometry, ringMode, ringSolution, stretchFigures, stretchTest } from './textile'
@@ -61,6 +65,42 @@ export const solveTilesBody = tileOptions.extend({
   spacing: figure(0, 500).default(20),
 })
 
+const opening = mirrors<Opening>()(
+  z.discriminatedUnion('kind', [
+    z.object({ kind: z.literal('closed') }),
+    z.object({ kind: z.literal('by'), width: length(0, 5000) }),
+    z.object({ kind: z.literal('whole') }),
+  ]),
+)
+const worn = z
+  .object({ geometry: ringGeometry, widths: z.array(length(0, 5000)).max(60) })
+  .refine(({ geometry, widths }) => widths.length === geometry.segments.length, {
+    path: ['widths'],
+    message: 'Give one width for each segment.',
+  })
+
+/** Each level as cut, how it opens, and the girth that it has to pass, mm. */
+export const solveGettingInBody = z.object({
+  levels: z
+    .array(z.object({ ring: worn, opening, needs: length(50, 5000) }))
+    .min(1)
+    .max(40),
+})
+const levelPass = mirrors<LevelPass>()(
+  z.object({
+    level: z.string(),
+    name: z.string(),
+    needs: length(),
+    reach: length(),
+    limit: tension(),
+    tension: tension().nullable(),
+    pull: figure().nullable(),
+    verdict: z.enum(['open', 'passes', 'tight', 'cannot']),
+  }),
+)
+/** `cautions` are those of the levels; who opens it and how it is left is asked of a whole garment. */
+export const solveGettingInAnswer = z.object({ levels: z.array(levelPass), cautions: z.array(caution) })
+
 const holdBand = z.enum(['light', 'easy', 'firm', 'strong', 'stop'])
 const recutProposal = z.object({
   document: garmentDocument,
@@ -103,6 +143,11 @@ export const solveFittingBody = z.object({
   levels: z.array(fittingLevel).min(1).max(5),
   geometries: z.array(ringGeometry).min(1).max(40),
   rings: z.array(ringSolution).min(1).max(40),
+  /** The stiffness that the version was already solved with. */
+  standing: z
+    .object({ factor: figure(0.05, 20), uncertainty: figure(0, 5), learntOn: z.string().max(40), levels: z.array(z.string()).optional() })
+    .nullable()
+    .default(null),
   settings: textileSettings.optional(),
 })
 export const solveFittingAnswer = mirrors<FittingReading>()(
@@ -119,6 +164,52 @@ export const solveFittingAnswer = mirrors<FittingReading>()(
       }),
     ),
     tightest: levelId.nullable(),
-    stiffness: z.object({ factor: figure(), uncertainty: figure(), pulls: z.number().int(), isOdd: z.boolean() }).nullable(),
+    stiffness: z
+      .object({
+        factor: figure(),
+        uncertainty: figure(),
+        pulls: z.number().int(),
+        isOdd: z.boolean(),
+        levels: z.array(levelId),
+        left: z.number().int(),
+      })
+      .nullable(),
   }),
 )
+
+const anyLevel = z.union([levelId, z.literal('all')])
+const zone = z.enum(['front', 'back', 'side', 'cups', 'yoke', 'sleeve', 'waistPanel', 'both'])
+const keys = MEASUREMENT_CATALOGUE.map((entry) => entry.key) as [MeasurementKey, ...MeasurementKey[]]
+const trial = mirrors<Trial>()(
+  z.discriminatedUnion('kind', [
+    z.object({ kind: z.literal('hold'), level: anyLevel, hold: pressure(0, 20_000) }),
+    z.object({ kind: z.literal('gap'), level: anyLevel, half: z.enum(['front', 'back']), gap: length(0, 2000) }),
+    z.object({ kind: z.literal('layers'), zone, layers: z.array(layerChoice).max(12) }),
+    z.object({ kind: z.literal('count'), zone, layer: z.string().max(60), count: z.number().int().min(0).max(12) }),
+    z.object({ kind: z.literal('measurement'), key: z.enum(keys), value: figure(0, 5000) }),
+  ]),
+)
+/** A garment as it stands, and what is tried on it, in that order. */
+export const solveWhatIfBody = z.object({ input: garmentInput, trials: z.array(trial).min(1).max(20) })
+export const solveWhatIfAnswer = z.object({
+  rings: z.array(
+    mirrors<RingDifference>()(
+      z.object({
+        level: z.string(),
+        name: z.string(),
+        before: ringSolution,
+        after: ringSolution,
+        cut: length(),
+        gap: length(),
+        pressure: pressure(-1e7),
+        breathPressure: pressure(-1e7),
+        negativeEase: figure(),
+        strain: ratio(),
+        governsChanged: z.boolean(),
+      }),
+    ),
+  ),
+  comes: z.array(caution),
+  goes: z.array(caution),
+  document: garmentDocument,
+})

@@ -2,11 +2,15 @@ import { beforeAll, describe, expect, it } from 'vitest'
 import { readFitting } from '../../shared/domain/fit/fitting'
 import type { FittingLevel } from '../../shared/domain/fit/types'
 import { recut } from '../../shared/domain/garment/recut'
+import type { GarmentInput } from '../../shared/domain/garment/types'
+import { inventedInput } from '../fixtures/garment-inputs'
 import { call, signIn } from './caller'
 
 let maker: string
+let drafter: string
 beforeAll(async () => {
   maker = await signIn('maker')
+  drafter = await signIn('drafter')
 })
 
 const strip = {
@@ -172,6 +176,58 @@ describe('stateless solving', () => {
   })
 })
 
+/** The invented garment as the service takes it: ids as it writes them. */
+const ids = { shell: 1, net: 2, lining: 3, label: 4, measuring: 5 } as const
+const asSent = (input: GarmentInput): GarmentInput =>
+  JSON.parse(JSON.stringify(input), (key, value: unknown) =>
+    ['id', 'clothId', 'measuringId'].includes(key) && typeof value === 'string' && value in ids
+      ? `0000000${ids[value as keyof typeof ids]}-0000-4000-8000-000000000000`
+      : value,
+  ) as GarmentInput
+
+describe('stateless solving of a fitted garment', () => {
+  const garment = asSent(inventedInput())
+
+  it('says what a level reaches on the way on, and the pull it takes', async () => {
+    const linear = { geometry: ring, widths: [300, 300] }
+    const asked = (needs: number, opening: object) => ({ ring: linear, opening, needs })
+    const { status, body } = await call(
+      'solve.gettingIn',
+      { body: { levels: [asked(800, { kind: 'closed' }), asked(1200, { kind: 'closed' }), asked(1200, { kind: 'by', width: 400 })] } },
+      maker,
+    )
+    expect(status).toBe(200)
+    // Derived: the pull-on limit is 60 % here, so 600 mm reach 960; 800 asks for 200 / 600 of strain at 400 N/m, 13.3 N on 100 mm.
+    expect(body.levels[0]).toMatchObject({ verdict: 'passes', reach: expect.closeTo(960, 6) })
+    expect(body.levels[0].pull).toBeCloseTo((400 * (200 / 600)) / 10, 6)
+    expect(body.levels[1]).toMatchObject({ verdict: 'cannot', pull: null })
+    expect(body.levels[2].verdict).toBe('passes')
+    expect(body.cautions.map((one: { code: string }) => one.code)).toEqual(['cannot-get-in'])
+  })
+
+  it('lays a change beside the present rings', async () => {
+    const { status, body } = await call(
+      'solve.whatIf',
+      { body: { input: garment, trials: [{ kind: 'count', zone: 'both', layer: 'net-1', count: 1 }] } },
+      drafter,
+    )
+    expect(status).toBe(200)
+    for (const one of body.rings) expect(one.cut).toBeLessThan(0)
+    expect(body.document.plans.front[1].count).toBe(1)
+  })
+
+  it('says in words why a change cannot be solved, and by its field what is not one', async () => {
+    const empty = await call('solve.whatIf', { body: { input: garment, trials: [{ kind: 'layers', zone: 'both', layers: [] }] } }, drafter)
+    expect(empty.body).toMatchObject({ type: '/problems/cannot-solve', problem: { code: 'no-layers' } })
+    const odd = await call(
+      'solve.gettingIn',
+      { body: { levels: [{ ring: { geometry: ring, widths: [1] }, opening: { kind: 'closed' }, needs: 800 }] } },
+      maker,
+    )
+    expect(odd.body.fields[0].path).toBe('levels.0.ring.widths')
+  })
+})
+
 describe('the API description', () => {
   it('has every route of the table, and no other', async () => {
     const { routes, routeIds } = await import('../../shared/schemas/routes')
@@ -188,7 +244,6 @@ describe('the API description', () => {
 
 describe('what follows a fitting', () => {
   it('recuts and reads a fitting as the domain does, and answers a garment that cannot be solved with the problem', async () => {
-    const drafter = await signIn('drafter')
     const items = (await call('garments.list', {}, drafter)).body.items as { id: string; code: string }[]
     const input = async (code: string) =>
       (await call('garments.workingCopy', { id: items.find((one) => one.code === code)!.id }, drafter)).body

@@ -3,7 +3,7 @@ import type { BodyLevel } from '../body/types'
 import { cautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
 import type { GarmentDocument } from '../document/types'
-import { MOST_PULL, passLevel, type Opening } from '../textile/getting-in'
+import { MOST_PULL, passLevel, type LevelPass, type Opening } from '../textile/getting-in'
 import type { RingGeometry, RingSolution } from '../textile/types'
 import type { GarmentInput, GarmentPass } from './types'
 
@@ -44,19 +44,22 @@ export function passesOf(
   })
 }
 
+/** What one level asks to be seen to on the way on and off; `said`: how it opens has been said, so that not passing is a stop. */
+export function levelCautions(pass: LevelPass & { readonly over: string }, said: boolean): readonly Caution[] {
+  const place = { kind: 'ring', level: pass.level } as const
+  const { name: ring, over, reach, needs, pull, verdict } = pass
+  return [
+    ...(verdict === 'cannot' ? [cautions.cannotGetIn(place, { ring, over, reach, needs, said })] : []),
+    ...(verdict === 'tight' ? [cautions.tightToGetIn(place, { ring, over, reach, needs })] : []),
+    ...(pull !== null && pull > MOST_PULL ? [cautions.hardToPullOn(place, { ring, pull, limit: MOST_PULL })] : []),
+  ]
+}
+
 /** What the way on and off asks to be seen to: levels that do not pass, are tight or take a hard pull; and who opens it. */
 export function entryCautions(input: GarmentInput, passes: readonly GarmentPass[]): readonly Caution[] {
   const { style, use } = input.document
   const found: Caution[] = []
-  for (const pass of passes) {
-    const place = { kind: 'ring', level: pass.level } as const
-    const { over, reach, needs } = pass
-    if (pass.verdict === 'cannot')
-      found.push(cautions.cannotGetIn(place, { ring: pass.name, over, reach, needs, said: use.opens !== 'unsaid' }))
-    if (pass.verdict === 'tight') found.push(cautions.tightToGetIn(place, { ring: pass.name, over, reach, needs }))
-    if (pass.pull !== null && pass.pull > MOST_PULL)
-      found.push(cautions.hardToPullOn(place, { ring: pass.name, pull: pass.pull, limit: MOST_PULL }))
-  }
+  for (const pass of passes) found.push(...levelCautions(pass, use.opens !== 'unsaid'))
   const place = { kind: 'garment' } as const
   const opensBehind = style.centreBack === 'lacing' || use.opens === 'part' || use.opens === 'whole'
   if (use.frontRelease || style.centreFront === 'lacing') return found

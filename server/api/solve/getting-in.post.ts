@@ -1,0 +1,4 @@
+import { gettingInOf } from '../../services/solve'
+import { handle } from '../../utils/handle'
+
+export default handle('solve.gettingIn', ({ body }) => gettingInOf(body))

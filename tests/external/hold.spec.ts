@@ -1,4 +1,5 @@
-import { evaluate } from 'mathjs'
+import fc from 'fast-check'
+import { evaluate, lusolve } from 'mathjs'
 import { describe, expect, it } from 'vitest'
 import { waistLimit } from '../../shared/domain/body/wearer'
 import { BAND_LIMITS, BREATH_LIMITS, holdBand } from '../../shared/domain/textile/bands'
@@ -111,6 +112,77 @@ describe('pressure of a ring', () => {
       }
       expect(ellipsePerimeter(aspect, 1) / sum).toBeCloseTo(1, 8)
     }
+  })
+})
+
+describe('the ring solver against independent methods', () => {
+  const between = (min: number, max: number) => fc.double({ min, max, noNaN: true })
+  const parts = fc.array(fc.record({ a: between(50, 2000), width: between(80, 300) }), { minLength: 1, maxLength: 5 })
+
+  // mathjs, LU decomposition: for straight load curves a ring is a linear system, a_j e_j = T for each segment and sum w_j e_j = length - sum w_j.
+  it('solves straight cloths in series as the linear system that mathjs solves', () => {
+    fc.assert(
+      fc.property(parts, between(1.02, 1.4), (segments, stretched) => {
+        const total = segments.reduce((sum, one) => sum + one.width, 0)
+        const girth = total * stretched
+        const geometry = ring(girth, plan(cloth(1)), {
+          segments: segments.map(({ a }, i) => ({ id: `${i}`, half: 'front', plan: plan(cloth(a)), share: 1 / segments.length })),
+          frontShare: 0.5,
+        })
+        const solved = solveRing(geometry, { solve: 'tension', widths: segments.map((one) => mm(one.width)) }, DEFAULT_TEXTILE_SETTINGS)
+        if (!solved.ok) throw new Error(solved.problem.message)
+        const n = segments.length
+        const rows = [
+          ...segments.map((one, i) => [...segments.map((_, j) => (i === j ? one.a : 0)), -1]),
+          [...segments.map((one) => one.width), 0],
+        ]
+        const right = [...segments.map(() => [0]), [girth - total]]
+        const found = lusolve(rows, right) as number[][]
+        expect(solved.value.tension / found[n]![0]!).toBeCloseTo(1, 9)
+        solved.value.segments.forEach((segment, i) => expect(segment.strain).toBeCloseTo(found[i]![0]!, 9))
+      }),
+    )
+  })
+
+  // Brute force: a scan of the tension in ten thousand steps over cubic cloths, strains by Cardano's formula (memory), nothing of the solver used.
+  it('solves stiffening cloths where a plain scan of tensions finds the sum of lengths', () => {
+    const cardano = (a: number, b: number, tension: number) => {
+      const p = a / b
+      const q = tension / b
+      const root = Math.sqrt((q / 2) ** 2 + (p / 3) ** 3)
+      return Math.cbrt(q / 2 + root) + Math.cbrt(q / 2 - root)
+    }
+    const stiffening = fc.array(fc.record({ a: between(50, 1000), b: between(50, 2000), width: between(80, 300) }), {
+      minLength: 1,
+      maxLength: 4,
+    })
+    fc.assert(
+      fc.property(stiffening, between(1.05, 1.3), (segments, stretched) => {
+        const total = segments.reduce((sum, one) => sum + one.width, 0)
+        const girth = total * stretched
+        const laid = segments.map(({ a, b }, i) => {
+          const of = cloth(a)
+          const curved = { ...of, curve: { ...of.curve, b: newtonPerMetre(b) } }
+          return { id: `${i}`, half: 'front' as const, plan: plan(curved), share: 1 / segments.length }
+        })
+        const solved = solveRing(
+          ring(girth, plan(cloth(1)), { segments: laid }),
+          { solve: 'tension', widths: segments.map((one) => mm(one.width)) },
+          DEFAULT_TEXTILE_SETTINGS,
+        )
+        if (!solved.ok) throw new Error(solved.problem.message)
+        const reach = (tension: number) => segments.reduce((sum, { a, b, width }) => sum + width * (1 + cardano(a, b, tension)), 0)
+        const most = 2 * solved.value.tension
+        let nearest = 0
+        for (let i = 0; i <= 10_000; i++) {
+          const tension = (most * i) / 10_000
+          if (Math.abs(reach(tension) - girth) < Math.abs(reach(nearest) - girth)) nearest = tension
+        }
+        expect(Math.abs(solved.value.tension - nearest)).toBeLessThanOrEqual(most / 10_000)
+        expect(reach(solved.value.tension)).toBeCloseTo(girth, 6)
+      }),
+      { numRuns: 20 },
+    )
   })
 })
 

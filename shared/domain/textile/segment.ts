@@ -25,12 +25,14 @@ export function filledWidth(segment: RingSegment): Mm {
 
 /** Part by which a width has to be more than what fills a layer. */
 const ABOVE_FILLED = 1e-9
-const HALVINGS = 100
+/** Part of its arc by which a width may miss it: what a double still tells. */
+const NEAR = 1e-15
+const MOST_STEPS = 200
 
 /**
  * Width of a segment that goes round its arc under a tension: w (1 + e(T, w)) = arc. Divided out where no rigid width is sewn to a single
- * layer; by bisection where one is, because the strain then hangs on the width. 0 for no arc; null where the arc is no longer than the
- * rigid width sewn into a layer. Lengths mm, tension N/m.
+ * layer; in a bracket that every step narrows where one is, because the strain then hangs on the width. 0 for no arc; null where the arc
+ * is no longer than the rigid width sewn into a layer. Lengths mm, tension N/m.
  */
 export function widthUnder(segment: RingSegment, arc: number, tension: number, side: BandSide = 'mean'): number | null {
   if (!(arc > 0)) return 0
@@ -39,14 +41,29 @@ export function widthUnder(segment: RingSegment, arc: number, tension: number, s
   const filled = filledWidth(segment)
   let low = filled * (1 + ABOVE_FILLED)
   let high = arc / (1 + stackOf(segment.plan, side).free)
-  if (!(low < high) || reach(low) >= arc) return null
-  for (let i = 0; i < HALVINGS; i++) {
-    const middle = (low + high) / 2
-    if (middle === low || middle === high) break
-    if (reach(middle) < arc) low = middle
-    else high = middle
+  if (!(low < high)) return null
+  let under = reach(low) - arc
+  if (under >= 0) return null
+  let over = Math.max(reach(high) - arc, 0)
+  let last = 0
+  for (let i = 0; i < MOST_STEPS && over > 0; i++) {
+    const chord = low - (under * (high - low)) / (over - under)
+    const next = chord > low && chord < high && i % 8 < 7 ? chord : (low + high) / 2
+    const miss = reach(next) - arc
+    if (Math.abs(miss) <= NEAR * arc || high - low <= NEAR * high) return next
+    if (miss < 0) {
+      low = next
+      under = miss
+      if (last < 0) over /= 2
+      last = -1
+    } else {
+      high = next
+      over = miss
+      if (last > 0) under /= 2
+      last = 1
+    }
   }
-  return (low + high) / 2
+  return high
 }
 
 /** Strain of one layer of a segment of this width when the garment's strain is e: ((1 + e) w - rho) / (r w - rho) - 1. Negative: slack. */

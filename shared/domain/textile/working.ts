@@ -2,6 +2,7 @@ import { mm } from '../units/brand'
 import { ASSUMED_TENSION, ASSUMED_TENSION_LOW } from './load-curve'
 import type { Working, WorkingInput } from '../units/working'
 import { ellipseAxes } from './pressure'
+import { hasSewn } from './segment'
 import type { LoadCurve, RingGeometry, RingSolution, StretchFigures, StretchTest } from './types'
 
 /** The figures of a ring that open their working. */
@@ -47,6 +48,17 @@ const tensionNotes = (solution: RingSolution): readonly string[] => [
   'The band holds the spread of the cloth only, not the errors of the model.',
 ]
 
+/** What layers without stretch and rigid widths of single layers do in the ring. */
+function layerNotes(geometry: RingGeometry): readonly string[] {
+  const stops = geometry.segments.some((segment) => segment.plan.layers.some((layer) => layer.rigid && layer.count > 0))
+  return [
+    ...(stops ? ['A rigid layer lies loose up to its cut ratio less 1 and gives no further; what it carries beyond is not known.'] : []),
+    ...(geometry.segments.some(hasSewn)
+      ? ['A rigid width sewn to one layer strains that layer more: e = ((1 + e) w - rho) / (r w - rho) - 1.']
+      : []),
+  ]
+}
+
 /** The working behind one figure of a solved ring: formula in plain symbols, inputs with unit and origin, source, limits, direction of error. */
 export function ringWorking(solution: RingSolution, geometry: RingGeometry, figure: RingFigure): Working {
   const girth = geometry.girth - geometry.squeeze
@@ -87,26 +99,29 @@ export function ringWorking(solution: RingSolution, geometry: RingGeometry, figu
         ],
         result: { value: solution.tension, unit: 'N/m' },
         source: 'derived: cloth in series carries one tension, layers side by side add theirs',
-        notes: tensionNotes(solution),
+        notes: [...layerNotes(geometry), ...tensionNotes(solution)],
       }
     case 'pressure':
       return {
         title: `Hold at rest, ${name.toLowerCase()}`,
         formula: 'P = 2 pi T / G',
         inputs: [tension, ...round],
-        result: { value: solution.pressure, unit: 'Pa' },
+        result: { value: solution.pressure, unit: 'Pa', band: solution.pressureBand },
         source: THOMAS,
-        notes: [...LAPLACE_NOTES, ...tensionNotes(solution)],
+        notes: [...layerNotes(geometry), ...LAPLACE_NOTES, ...tensionNotes(solution)],
       }
     case 'breath':
       return {
         title: `Hold at a deep breath, ${name.toLowerCase()}`,
         formula: 'sum w (1 + e(T)) + rigid + gap = G + b + pi t, solved for T; P = 2 pi T / (G + b)',
         inputs: [...round, input('b', 'Added to the girth by a deep breath', geometry.breath, 'mm', 'estimate'), ...widths, ...fixed],
-        result: { value: solution.breathPressure, unit: 'Pa' },
+        result: { value: solution.breathPressure, unit: 'Pa', band: solution.breathBand },
         source: `${THOMAS}; added girth from memory`,
         notes: [
-          'More is added in exertion.',
+          'In exertion the girth of a deep breath at rest is taken 1.25 to 1.5 times, by activity: an assumption without a source.',
+          ...(solution.breathShort
+            ? ['Rigid layers stop the ring before the breath is full: this is the least it presses there, and no upper end is known.']
+            : []),
           'A published series saw rib pressure go from 42 to 89 mmHg from rest to a deep breath (Dickinson 1911).',
           'The gap is taken not to give; lacing that slips gives less.',
           ...LAPLACE_NOTES,
@@ -140,7 +155,7 @@ export function ringWorking(solution: RingSolution, geometry: RingGeometry, figu
           ...widths,
           ...fixed,
         ],
-        result: { value: solution.cut, unit: 'mm' },
+        result: { value: solution.cut, unit: 'mm', band: solution.cutBand },
         source: 'derived',
         notes: ['Cloth and rigid widths on the pieces, without the gap and the seam allowances.', ...tensionNotes(solution)],
       }

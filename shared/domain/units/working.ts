@@ -4,7 +4,12 @@ export interface Working {
   /** In plain symbols, e.g. `P = T / r`. */
   readonly formula: string
   readonly inputs: readonly WorkingInput[]
-  readonly result: { readonly value: number; readonly unit: WorkingUnit }
+  readonly result: {
+    readonly value: number
+    readonly unit: WorkingUnit
+    /** Between which the cloth's spread, or a learnt factor's standard error, puts the result; absent where there is none. */
+    readonly band?: { readonly low: number; readonly high: number }
+  }
   /** Publication, standard or `common practice`; values from memory are marked so. */
   readonly source: string
   /** Limits and the direction of the error, one sentence each. */

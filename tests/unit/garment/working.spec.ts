@@ -40,7 +40,10 @@ describe('the working behind what a layer brings', () => {
         expect(pull.result.value).toBeCloseTo(evaluate('n * (a * x + b * x^3)', scope) as number, 6)
       }
       const cut = layerWorking(layer, shares[i]!, segment, width, e, 'width')
-      expect(cut.result.value).toBeCloseTo(evaluate('q * r * w', { q: given(cut, 'q'), r: given(cut, 'r'), w: given(cut, 'w') }) as number, 9)
+      expect(cut.result.value).toBeCloseTo(
+        evaluate('q * r * w', { q: given(cut, 'q'), r: given(cut, 'r'), w: given(cut, 'w') }) as number,
+        9,
+      )
     })
     const lining = segment.plan.layers.findIndex((layer) => layer.id === 'lining-2')
     const left = layerWorking(segment.plan.layers[lining]!, shares[lining]!, segment, width, e, 'stretchLeft')

@@ -7,7 +7,7 @@ export type EntryWay = 'overhead' | 'step-in'
 
 /** The greatest part of the body that a level has to pass on its way. Girth mm. */
 export interface Passing {
-  readonly over: 'shoulders' | 'bust' | 'high hip' | 'hip'
+  readonly over: 'shoulders' | 'bust' | 'high hip' | 'hip' | 'head'
   readonly girth: Mm
   readonly estimated: boolean
   /** How the girth came about, in words. */
@@ -28,6 +28,17 @@ export function shouldersGirth(measured: MeasuredValues, bust: Mm): Passing {
         from: `bust girth + ${SHOULDERS_OVER_BUST} mm, from memory`,
       }
     : { over: 'shoulders', girth: mm(own), estimated: false, from: 'shoulder girth as measured' }
+}
+
+/** Head girth where nobody measured it, mm. From memory, order of magnitude of an adult; an estimate, to be measured. */
+export const USUAL_HEAD_GIRTH = 560
+
+/** What the neck edge has to pass overhead: the head. */
+export function headGirth(measured: MeasuredValues): Passing {
+  const own = measuredValue(measured, 'headGirth')
+  return own === undefined
+    ? { over: 'head', girth: mm(USUAL_HEAD_GIRTH), estimated: true, from: `${USUAL_HEAD_GIRTH} mm, from memory` }
+    : { over: 'head', girth: mm(own), estimated: false, from: 'head girth as measured' }
 }
 
 /**

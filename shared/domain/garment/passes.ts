@@ -1,11 +1,12 @@
-import { passingOf } from '../body/passing'
-import type { BodyLevel } from '../body/types'
+import { headGirth, passingOf } from '../body/passing'
 import { cautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
 import type { GarmentDocument } from '../document/types'
 import { MOST_PULL, passLevel, type LevelPass, type Opening } from '../textile/getting-in'
-import type { RingGeometry, RingSolution } from '../textile/types'
-import type { GarmentInput, GarmentPass } from './types'
+import { pathLength } from '../geometry/path'
+import type { RingGeometry, RingSegment } from '../textile/types'
+import { mm, type Mm } from '../units/brand'
+import type { GarmentInput, GarmentPass, GarmentSolution } from './types'
 
 /** Codes of the cautions that speak of the way on and off. */
 export const ENTRY_CODES: ReadonlySet<string> = new Set(
@@ -26,22 +27,62 @@ export function openingAt(document: GarmentDocument, level: string): Opening {
   return document.use.opens === 'part' && opening !== null ? { kind: 'by', width: opening } : { kind: 'closed' }
 }
 
-/** The way on and off of a solved garment: each level that has something larger to pass. The way off is the way on. */
+/** Level of the neck edge on the way on and off; it is an edge of the pieces and no ring of the body. */
+export const NECK_EDGE = 'neck-edge'
+
+/**
+ * The neck edge as a ring of its own: the neckline edges of the pieces as they are cut, both sides, on the layers of the yoke where it has
+ * its own. It opens as the bust does, because closures run up to it. A binding or elastic along it holds it to its stitch, which is not
+ * planned yet; cloth along a curve stretches otherwise than round the body.
+ */
+export function neckEdge(solution: Pick<GarmentSolution, 'draft' | 'plans' | 'ringInputs'>): EdgeRing | null {
+  const bust = solution.ringInputs.find((one) => one.level === 'bust')
+  const length = (half: 'front' | 'back') =>
+    2 *
+    solution.draft.pieces
+      .filter((piece) => piece.zone === half)
+      .flatMap((piece) => piece.edges.filter((edge) => edge.id === 'neckline'))
+      .reduce((sum, edge) => sum + pathLength(edge.path), 0)
+  const yoke = solution.plans.find((plan) => plan.zone === 'yoke')
+  const segments = (['front', 'back'] as const).flatMap((half): RingSegment[] => {
+    const plan = yoke ?? solution.plans.find((one) => one.zone === half)
+    return plan && length(half) > 0 ? [{ id: `${NECK_EDGE}-${half}`, half, plan, share: 1 }] : []
+  })
+  if (!bust || segments.length === 0) return null
+  const none = mm(0)
+  return {
+    geometry: { ...bust, level: NECK_EDGE, name: 'Neck edge', segments, rigidFront: none, rigidBack: none },
+    widths: segments.map((segment) => mm(length(segment.half))),
+  }
+}
+
+interface EdgeRing {
+  readonly geometry: RingGeometry
+  readonly widths: readonly Mm[]
+}
+
+/** The way on and off of a solved garment: the neck edge over the head, and each level that has something larger to pass. The way off is the way on. */
 export function passesOf(
   input: GarmentInput,
-  levels: readonly BodyLevel[],
-  geometries: readonly RingGeometry[],
-  rings: readonly RingSolution[],
+  solution: Pick<GarmentSolution, 'levels' | 'ringInputs' | 'rings' | 'plans' | 'draft'>,
 ): readonly GarmentPass[] {
   const { document, measured } = input
-  return rings.flatMap((ring, i) => {
+  const { levels, ringInputs, rings } = solution
+  const neck = document.use.way === 'overhead' ? neckEdge(solution) : null
+  const head = headGirth(measured)
+  const opened = openingAt(document, 'bust')
+  const overHead = neck
+    ? [{ ...passLevel(neck.geometry, neck.widths, opened, head.girth), over: head.over, estimated: head.estimated, from: head.from }]
+    : []
+  const overBody = rings.flatMap((ring, i) => {
     const body = levels.find((level) => level.id === ring.level)
     const passing = body ? passingOf(document.use.way, body.id, levels, measured) : null
     if (!passing) return []
     const widths = ring.segments.map((segment) => segment.width)
-    const pass = passLevel(geometries[i]!, widths, openingAt(document, ring.level), passing.girth)
+    const pass = passLevel(ringInputs[i]!, widths, openingAt(document, ring.level), passing.girth)
     return [{ ...pass, over: passing.over, estimated: passing.estimated, from: passing.from }]
   })
+  return [...overHead, ...overBody]
 }
 
 /** What one level asks to be seen to on the way on and off; `said`: how it opens has been said, so that not passing is a stop. */

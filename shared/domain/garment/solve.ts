@@ -102,21 +102,19 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
     return before && after ? [{ level: level.body.id, by: mm(sumOf(after) - sumOf(before)) }] : []
   })
 
-  const solution: Omit<GarmentSolution, 'cautions'> = {
-    engine: ENGINE,
-    body: body.value,
+  const found = {
     levels: levels.map((level) => level.body),
     plans: [plans.front, plans.back, ...EXTRA_ZONES.flatMap((zone) => plans[zone] ?? [])],
     ringInputs,
     rings,
     draft: altered.draft,
+  }
+  const solution: Omit<GarmentSolution, 'cautions'> = {
+    engine: ENGINE,
+    body: body.value,
+    ...found,
     parked: document.alterations.filter((one) => altered.effects.some((effect) => effect.id === one.id && isNotApplied(effect.state))),
-    passes: passesOf(
-      input,
-      levels.map((level) => level.body),
-      ringInputs,
-      rings,
-    ),
+    passes: passesOf(input, found),
     rounds,
     settled: done,
     alterationGirth,

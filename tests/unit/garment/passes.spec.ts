@@ -2,6 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { passingOf, SHOULDERS_OVER_BUST } from '../../../shared/domain/body/passing'
 import type { GarmentDocument } from '../../../shared/domain/document/types'
+import { NECK_EDGE, neckEdge } from '../../../shared/domain/garment/passes'
 import { solveGarment } from '../../../shared/domain/garment/solve'
 import type { GarmentInput, GarmentSolution } from '../../../shared/domain/garment/types'
 import { passLevel } from '../../../shared/domain/textile/getting-in'
@@ -111,5 +112,44 @@ describe('getting in and out', () => {
     for (const pass of stiff.passes) {
       expect(codes(stiff).filter((one) => one === 'hard-to-pull-on caution').length > 0 || (pass.pull ?? 0) <= 100).toBe(true)
     }
+  })
+})
+
+describe('the neck edge', () => {
+  const neckOf = (solution: GarmentSolution) => solution.passes.find((pass) => pass.level === NECK_EDGE)
+
+  it('passes the head overhead, measured or from memory and said so, and is no level when stepped into', () => {
+    expect(neckOf(solved())).toMatchObject({ over: 'head', needs: 560, estimated: true })
+    expect(neckOf(solved({}, { measured: { ...inventedInput().measured, headGirth: { value: 580 } } }))).toMatchObject({
+      needs: 580,
+      estimated: false,
+    })
+    expect(neckOf(solved({ use: { ...use, way: 'step-in' } }))).toBeUndefined()
+  })
+
+  it('reaches its edges as cut, stretched to the first pull-on limit', () => {
+    const solution = solved()
+    const { geometry, widths } = neckEdge(solution)!
+    const cut = solution.draft.pieces.flatMap((piece) => piece.edges).filter((edge) => edge.id === 'neckline')
+    // Chords between the nodes are shorter than the edge, and close to it.
+    const chords = cut.reduce((sum, { nodes }) => {
+      const [from, to] = [nodes[0]!.at, nodes.at(-1)!.at]
+      return sum + 2 * Math.hypot(to.x - from.x, to.y - from.y)
+    }, 0)
+    const along = widths.reduce((sum, width) => sum + width, 0)
+    expect(along).toBeGreaterThanOrEqual(chords)
+    expect(along).toBeLessThan(1.3 * chords)
+    const e = planPullOnLimit(geometry.segments[0]!.plan)
+    expect(neckOf(solution)!.reach).toBeCloseTo(along * (1 + e) + geometry.gapBack, 6)
+  })
+
+  it('cannot go over a head that is too large for it, unless it opens', () => {
+    const large = { measured: { ...inventedInput().measured, headGirth: { value: 1900 } } }
+    const closed = solved({ use: { ...use, opens: 'closed' } }, large)
+    expect(neckOf(closed)!.verdict).toBe('cannot')
+    expect(
+      closed.cautions.some((one) => one.code === 'cannot-get-in' && one.severity === 'stop' && one.message.startsWith('Neck edge')),
+    ).toBe(true)
+    expect(neckOf(solved({ use: { ...use, opens: 'whole' } }, large))!.verdict).toBe('open')
   })
 })

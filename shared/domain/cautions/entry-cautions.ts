@@ -14,7 +14,7 @@ interface PassFacts {
 export const cannotGetIn = defineCaution<PassFacts & { readonly said: boolean }>('cannot-get-in', {
   severity: ({ said }) => (said ? 'stop' : 'caution'),
   message: ({ ring, over, reach, needs, said }) =>
-    `${ring} reaches ${formatLength(reach, 'cm')} ${said ? 'with its closures open' : 'closed'}; the ${over} ask for ${formatLength(needs, 'cm')}.`,
+    `${ring} reaches ${formatLength(reach, 'cm')} ${said ? 'with its closures open' : 'closed'}; it has to pass the ${over}, ${formatLength(needs, 'cm')}.`,
   maker: ({ ring }) => `${ring} may not go over the body.`,
   figure: ({ reach }) => ({ value: reach, unit: 'mm' }),
   limit: ({ needs }) => ({ value: needs, unit: 'mm' }),
@@ -28,7 +28,7 @@ export const cannotGetIn = defineCaution<PassFacts & { readonly said: boolean }>
 export const tightToGetIn = defineCaution<PassFacts>('tight-to-get-in', {
   severity: 'caution',
   message: ({ ring, over, reach, needs }) =>
-    `${ring} is tight on the way: it reaches ${formatLength(reach, 'cm')}, the ${over} ask for ${formatLength(needs, 'cm')}.`,
+    `${ring} is tight on the way: it reaches ${formatLength(reach, 'cm')} and has to pass the ${over}, ${formatLength(needs, 'cm')}.`,
   maker: ({ ring }) => `${ring} is tight on the way on and off.`,
   figure: ({ reach }) => ({ value: reach, unit: 'mm' }),
   limit: ({ needs }) => ({ value: needs, unit: 'mm' }),

@@ -187,6 +187,16 @@ export const closurePull = defineCaution<{ readonly ring: string; readonly tensi
   },
 )
 
+/** What has to keep the garment up is not known: only a stretch percentage of the cloth is. */
+export const heldUpUnknown = defineCaution<{ readonly where: string; readonly limit: Pascal }>('held-up-unknown', {
+  severity: 'caution',
+  message: ({ where, limit }) => `Hold unknown, pull a strip: ${where} is asked to hold ${formatPressure(limit)} to keep it up.`,
+  maker: 'Hold unknown, pull a strip.',
+  limit: ({ limit }) => pa(limit),
+  source: 'assumption: the stretch was read somewhere between 100 and 500 N/m; what keeps it up is a workroom setting',
+  todo: 'Hang known weights on a strip and enter the lengths.',
+})
+
 /** What has to keep the garment up is not there. */
 export const notHeldUp = defineCaution<{
   readonly where: string

@@ -147,7 +147,12 @@ export function heldUpCautions(rings: readonly JudgedRing[], strapless: boolean,
   const best = (some: readonly JudgedRing[]) =>
     some.reduce<JudgedRing | null>((most, one) => (most && most.solution.pressure >= one.solution.pressure ? most : one), null)
   const told = (ring: JudgedRing | null, limit: Pascal): readonly Caution[] => {
-    if (!ring || ring.solution.pressure >= limit / ABOVE) return []
+    if (!ring) return []
+    const { pressure, pressureBand, assumed } = ring.solution
+    if (assumed && pressureBand.low < limit && pressureBand.high >= limit / ABOVE) {
+      return [cautions.heldUpUnknown({ kind: 'ring', level: ring.geometry.level }, { where: ring.geometry.name, limit })]
+    }
+    if (pressure >= limit / ABOVE) return []
     const facts = { where: ring.geometry.name, pressure: ring.solution.pressure, limit, strapless, capped: flagged }
     return [cautions.notHeldUp({ kind: 'ring', level: ring.geometry.level }, facts)]
   }

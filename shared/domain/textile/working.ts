@@ -118,7 +118,7 @@ export function ringWorking(solution: RingSolution, geometry: RingGeometry, figu
         result: { value: solution.breathPressure, unit: 'Pa', band: solution.breathBand },
         source: `${THOMAS}; added girth from memory`,
         notes: [
-          'In exertion the girth of a deep breath at rest is taken 1.25 to 1.5 times, by activity: an assumption without a source.',
+          'Exertion adds up to 20 mm more, as chosen for the garment: an assumption without a source.',
           ...(solution.breathShort
             ? ['Rigid layers stop the ring before the breath is full: this is the least it presses there, and no upper end is known.']
             : []),

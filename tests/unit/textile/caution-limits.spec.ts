@@ -19,8 +19,13 @@ import {
   type TextileContext,
 } from '../../../shared/domain/textile/cautions'
 import { LARGEST_RESIDUAL } from '../../../shared/domain/textile/curve'
-import { DEFAULT_TEXTILE_SETTINGS } from '../../../shared/domain/textile/defaults'
-import { breathOf, EXERTION_FACTOR } from '../../../shared/domain/textile/exertion'
+import {
+  BREATH_BY_LEVEL,
+  breathAt,
+  DEFAULT_TEXTILE_SETTINGS,
+  EXERTION_BREATH,
+  type Exertion,
+} from '../../../shared/domain/textile/defaults'
 import { nearestDirection } from '../../../shared/domain/textile/direction'
 import { solveRing } from '../../../shared/domain/textile/ring'
 import type { Layer, LayerCloth, RingGeometry, RingSolution } from '../../../shared/domain/textile/types'
@@ -159,6 +164,23 @@ const LIMITS: readonly (readonly [string, Side, readonly string[], Side, readonl
     ['caution'],
   ],
   [
+    'held-up-unknown',
+    () =>
+      heldUpCautions(
+        [ringWith({ assumed: true, pressureBand: { low: 400, high: 2000 }, pressure: pascal(2000) }, { level: 'bust' })],
+        false,
+        false,
+      ),
+    [],
+    () =>
+      heldUpCautions(
+        [ringWith({ assumed: true, pressureBand: { low: 399, high: 1995 }, pressure: pascal(1995) }, { level: 'bust' })],
+        false,
+        false,
+      ),
+    ['caution'],
+  ],
+  [
     'recovery-low',
     () => planCautions(context(figures({ recovery: LEAST_RECOVERY }))),
     [],
@@ -294,11 +316,11 @@ describe('a typed direction', () => {
 })
 
 describe('breath in exertion', () => {
-  // From memory: 40 mm at bust and underbust, 20 at the waist at a deep breath; the factors are assumptions without a source.
+  // From memory: 40 mm at bust and underbust, 20 at the waist at a deep breath; what exertion adds is an assumption without a source.
   it('adds no less than a deep breath at rest, at any level', () => {
-    expect(breathOf('bust')).toBe(40)
-    expect(breathOf('waist')).toBe(20)
-    for (const factor of Object.values(EXERTION_FACTOR)) expect(factor).toBeGreaterThanOrEqual(1)
-    expect(breathOf('underbust', 'sport')).toBe(60)
+    for (const exertion of Object.keys(EXERTION_BREATH) as Exertion[])
+      for (const level of ['bust', 'underbust', 'waist', 'high-hip', 'hip'] as const)
+        expect(breathAt(level, exertion)).toBeGreaterThanOrEqual(BREATH_BY_LEVEL[level])
+    expect([breathAt('bust', 'calm'), breathAt('waist', 'calm')]).toEqual([40, 20])
   })
 })

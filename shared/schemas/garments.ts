@@ -168,7 +168,7 @@ export const garmentSolution = mirrors<GarmentSolution>()(
           tension: tension().nullable(),
           pull: z.number().nullable(),
           verdict: z.enum(['open', 'passes', 'tight', 'cannot']),
-          over: z.enum(['shoulders', 'bust', 'high hip', 'hip']),
+          over: z.enum(['shoulders', 'bust', 'high hip', 'hip', 'head']),
           estimated: z.boolean(),
           from: z.string(),
         }),

@@ -24,9 +24,9 @@ function aspectAt(level: BodyLevel, measured: MeasuredValues): { readonly aspect
 /** A segment of a ring with its plan and what is sewn to single layers of it. */
 function ringSegment(level: string, part: ZoneSegment, plans: ZonePlans, choice: LevelChoice): RingSegment {
   const plan = plans[part.zone]!
-  const sewn: readonly SewnRigid[] = (choice.sewn ?? []).filter(
-    (one) => one.half === part.half && one.width > 0 && plan.layers.some((layer) => layer.id === one.layer),
-  )
+  const sewn: readonly SewnRigid[] = (choice.sewn ?? [])
+    .filter((one) => one.half === part.half && one.width > 0 && plan.layers.some((layer) => layer.id === one.layer))
+    .map(({ layer, width }) => ({ layer, width }))
   const name = part.pieces.length > 1 ? part.half : part.pieces[0]
   return { id: `${level}-${name}`, half: part.half, plan, share: part.share, ...(sewn.length > 0 ? { sewn } : {}) }
 }

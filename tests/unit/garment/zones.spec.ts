@@ -9,7 +9,7 @@ import { bustSplit, zoneAt, zoneSegments } from '../../../shared/domain/garment/
 import { cutLines } from '../../../shared/domain/output/print-words'
 import { planTensionAt } from '../../../shared/domain/textile/plan'
 import { mm, strain } from '../../../shared/domain/units/brand'
-import { garmentDocument } from '../../../shared/schemas/garments'
+import { garmentDocument, garmentSolution } from '../../../shared/schemas/garments'
 import { CLOTHS, FOUR_LAYERS, inventedCloth, inventedDocument, inventedInput, layers, stripTest } from '../../fixtures/garment-inputs'
 
 const solved = (patch: Partial<GarmentDocument> = {}, more: Partial<GarmentInput> = {}): GarmentSolution => {
@@ -163,11 +163,24 @@ describe('layers that are rigid, laid at an angle or sewn alone', () => {
     const sewn = (['front', 'back'] as const).map((half) => ({ half, layer: lining, width: mm(60) }))
     const levels = inventedDocument().levels.map((level) => ({ ...level, sewn }))
     const { ring, geometry } = ringOf(solved({ levels }), 'waist')
-    expect(geometry.segments[0]!.sewn).toEqual([sewn[0]])
+    expect(geometry.segments[0]!.sewn).toEqual([{ layer: lining, width: 60 }])
     expect(ring.cut).toBeGreaterThan(ringOf(solved(), 'waist').ring.cut)
     expect(ring.pressure).toBeCloseTo(1200, -1)
     const wearer = { ...inventedInput().wearer, nursing: true, practitionerAgreed: true }
     expect(codes(solved({ levels }, { wearer }))).toContain('wearer-rigid-over-breast')
+  })
+})
+
+describe('an answer of the service', () => {
+  it('lets every figure of zones, sewn widths and rigid layers through as it is', () => {
+    const lining = FOUR_LAYERS.find((one) => one.clothId === 'lining')!.id
+    const sewn = [{ half: 'back' as const, layer: lining, width: mm(20) }]
+    const loose = FOUR_LAYERS.map((one) => (one.clothId === 'lining' ? { ...one, rigid: true, cutRatio: 1.06 } : one))
+    const solution = solved({
+      plans: { front: loose, back: FOUR_LAYERS, side: loose.map((one) => ({ ...one, angle: 80 })), cups: soft },
+      levels: inventedDocument().levels.map((level) => ({ ...level, sewn })),
+    })
+    expect(garmentSolution.parse(JSON.parse(JSON.stringify(solution)))).toEqual(JSON.parse(JSON.stringify(solution)))
   })
 })
 

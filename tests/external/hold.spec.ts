@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest'
 import { waistLimit } from '../../shared/domain/body/wearer'
 import { BAND_LIMITS, BREATH_LIMITS, holdBand } from '../../shared/domain/textile/bands'
 import { DEFAULT_TEXTILE_SETTINGS } from '../../shared/domain/textile/defaults'
-import { ellipsePerimeter, ellipsePressures, holdTension, ringPressure } from '../../shared/domain/textile/pressure'
+import { ellipsePerimeter, ellipsePressures, holdTension, pullOnClosure, ringPressure } from '../../shared/domain/textile/pressure'
 import { ringWorking } from '../../shared/domain/textile/working'
 import { LARGEST_SQUEEZE, solveRing } from '../../shared/domain/textile/ring'
 import type { LayerCloth, LayerPlan, RingGeometry } from '../../shared/domain/textile/types'
@@ -267,6 +267,12 @@ describe('layers and lacing', () => {
     const said = ringWorking(fresh, geometry, 'pressure').notes.find((note) => note.includes('In hours'))!
     expect(said).toContain('a quarter of the tension goes')
     expect(Math.abs(1 / 4 - 0.235)).toBeLessThan(0.02)
+  })
+
+  // Derived: 2.23 N/cm on a tape of 19 mm pitch (pitch from memory, common practice) is 4.24 N a hook.
+  it('a hook carries the tension times its distance to the next', () => {
+    near(pullOnClosure(newtonPerCm(2.23), mm(19)), 4.237)
+    near(pullOnClosure(newtonPerCm(1), mm(20)), 2)
   })
 
   it('a hanging weight gives the tension that the pressure is reckoned from', () => {

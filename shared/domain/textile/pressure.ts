@@ -1,5 +1,5 @@
-import type { Mm, NewtonPerMetre, Pascal } from '../units/brand'
-import { mm, newtonPerMetre, pascal } from '../units/brand'
+import type { Mm, Newton, NewtonPerMetre, Pascal } from '../units/brand'
+import { mm, newton, newtonPerMetre, pascal } from '../units/brand'
 
 /** Millimetres in a metre: tension is per metre of cloth, girths are in mm. */
 const MM_PER_METRE = 1000
@@ -47,3 +47,6 @@ export function ellipsePressures(tension: NewtonPerMetre, girth: Mm, aspect: num
 /** What a flat busk or hard edge of this width carries on each of its edges, N/m: T w / (2 r), r the mean radius. Derived. */
 export const hardEdgeLoad = (tension: NewtonPerMetre, width: Mm, girth: Mm): NewtonPerMetre =>
   newtonPerMetre((tension * width * Math.PI) / girth)
+
+/** What one hook or one pair of eyelets carries, N: the tension times the distance to the next, mm. Derived; the ends of a closure carry more. */
+export const pullOnClosure = (tension: NewtonPerMetre, pitch: Mm): Newton => newton((tension * pitch) / MM_PER_METRE)

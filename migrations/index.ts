@@ -2,12 +2,14 @@ import type { Migration } from 'kysely'
 import * as accounts from './2026-12-01T0600_accounts'
 import * as workroomRows from './2026-12-01T0601_workroom_rows'
 import * as fittings from './2026-12-01T1100_fittings'
+import * as unfinishedTests from './2026-12-01T1200_unfinished_tests'
 
 /** Every migration by its file name, in order. A test holds this list against the folder. */
 export const migrations: Readonly<Record<string, Migration>> = {
   '2026-12-01T0600_accounts': accounts,
   '2026-12-01T0601_workroom_rows': workroomRows,
   '2026-12-01T1100_fittings': fittings,
+  '2026-12-01T1200_unfinished_tests': unfinishedTests,
 }
 
 /** The newest migration: a server built with it refuses an older schema. */

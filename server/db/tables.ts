@@ -149,10 +149,15 @@ export interface StretchTest {
   clothId: string
   createdAt: Generated<Timestamp>
   cycles: number | null
+  draft: Json | null
   id: Generated<string>
   note: string | null
+  photo: string | null
+  photoAt: Timestamp | null
+  photoHeight: number | null
+  photoWidth: number | null
   revision: Generated<number>
-  test: Json
+  test: Json | null
   testedOn: string
   tester: string | null
   updatedAt: Generated<Timestamp>

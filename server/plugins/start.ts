@@ -1,4 +1,5 @@
 import { sessionHooks } from '#imports'
+import { filesProblem } from '../files/store'
 import { signOut } from '../services/session'
 import { closeDatabase, database, schemaState } from '../utils/database'
 
@@ -21,6 +22,8 @@ export default defineNitroPlugin(async (nitro) => {
   if ((config.session.password ?? '').length < PASSWORD_LENGTH)
     refuseToStart(`NUXT_SESSION_PASSWORD must have ${PASSWORD_LENGTH} characters or more.`)
   if (!config.databaseUrl) refuseToStart('NUXT_DATABASE_URL is not set.')
+  const noFiles = filesProblem(config.files)
+  if (noFiles) refuseToStart(noFiles)
   const state = await schemaState().catch((error: unknown) =>
     refuseToStart(`The database does not answer, or was never migrated: ${String(error)}`),
   )

@@ -1,8 +1,10 @@
 import type { GarmentCloth } from '../../shared/domain/garment/types'
 import { layerCloth } from '../../shared/domain/textile/cloth'
 import type { StretchTest, TextileSettings } from '../../shared/domain/textile/types'
+import { directionKey } from '../../shared/domain/textile/test-angle'
 import { mm } from '../../shared/domain/units/brand'
 import type { ParsedBody, ParsedQuery, RouteAnswer } from '../../shared/schemas/routes'
+import type { TestDraft } from '../../shared/schemas/test-draft'
 import { fromJson } from '../db/client'
 import {
   archiveTest,
@@ -39,19 +41,25 @@ const clothOf = (row: ClothRow): RouteAnswer<'cloths.create'> => ({
   updatedAt: row.updatedAt.toISOString(),
 })
 
-const testOf = (row: TestRow): RouteAnswer<'tests.create'> => ({
-  ...row,
-  test: fromJson<StretchTest>(row.test),
-  archivedAt: row.archivedAt?.toISOString() ?? null,
-})
+export function testOf({ photo, photoWidth, photoHeight, photoAt, ...row }: TestRow): RouteAnswer<'tests.create'> {
+  return {
+    ...row,
+    test: fromJson<StretchTest | null>(row.test),
+    draft: fromJson<TestDraft | null>(row.draft),
+    photo: photo === null ? null : { width: photoWidth!, height: photoHeight!, at: photoAt!.toISOString() },
+    archivedAt: row.archivedAt?.toISOString() ?? null,
+    updatedAt: row.updatedAt.toISOString(),
+  }
+}
 
-/** The newest test of each direction and state, read as a layer. Tests come newest first. */
+/** The newest finished test of each direction and state, read as a layer. Tests come newest first. */
 function directionsOf(cloth: ClothRow, tests: readonly TestRow[], settings: TextileSettings): Direction[] {
   const seen = new Map<string, Direction>()
   for (const row of tests) {
-    const test = fromJson<StretchTest>(row.test)
-    const key = `${test.direction} ${test.state}`
-    if (row.clothId !== cloth.id || row.archivedAt || seen.has(key)) continue
+    const test = fromJson<StretchTest | null>(row.test)
+    if (!test || row.clothId !== cloth.id || row.archivedAt) continue
+    const key = `${directionKey(test)} ${test.state}`
+    if (seen.has(key)) continue
     const identity = {
       clothId: cloth.id,
       name: cloth.name,
@@ -60,8 +68,15 @@ function directionsOf(cloth: ClothRow, tests: readonly TestRow[], settings: Text
       fewSpread: settings.fewSpecimensSpread,
     }
     const layer = layerCloth(identity, test)
-    const { direction, state } = test
-    seen.set(key, { testId: row.id, direction, state, layer: layer.ok ? layer.value : null, problem: layer.ok ? null : layer.problem })
+    const { direction, angle, state } = test
+    seen.set(key, {
+      testId: row.id,
+      direction,
+      ...(angle === undefined ? {} : { angle }),
+      state,
+      layer: layer.ok ? layer.value : null,
+      problem: layer.ok ? null : layer.problem,
+    })
   }
   return [...seen.values()]
 }
@@ -136,6 +151,7 @@ export async function archiveCloth({ db, workroom, account, now }: Room, id: str
 
 /** A test that gives no curve is refused at its field, so that what was typed can be mended. */
 function checkTest({ today }: Room, cloth: ClothRow, { test, testedOn }: TestFields): void {
+  if (!test) return
   if (testedOn > today) refuse('invalid-input', { fields: [{ path: 'testedOn', message: 'This date is still to come.' }] })
   const layer = layerCloth({ clothId: cloth.id, name: cloth.name, thickness: mm(cloth.thickness), testedOn }, test)
   if (!layer.ok)
@@ -157,6 +173,7 @@ export async function updateTest(room: Room, id: string, { base, ...fields }: Pa
   const { db, workroom, account, now } = room
   const stands = found(await findTestById(db, workroom, id))
   if (stands.archivedAt) refuse('archived', { detail: 'This test was put away.' })
+  if (stands.test && fields.draft) refuse('invalid-input', { detail: 'A finished test stays finished: correct it, or put it away.' })
   checkTest(room, found(await findClothById(db, workroom, stands.clothId)), fields)
   const saved = await updateTestAt(db, workroom, id, base, fields, account, now)
   return saved ? testOf(saved) : refuse('stale', { theirs: testOf(stands) })

@@ -9,9 +9,11 @@ import {
   type RouteAnswer,
   type RouteId,
   type Routes,
+  type UploadRouteId,
 } from '../../shared/schemas/routes'
 import type { Role } from '../../shared/schemas/session'
 import { inWorkroom, type Work } from '../db/client'
+import { receive } from '../files/receive'
 import { resourceExists } from '../db/queries/existence'
 import { Refusal, refuse } from '../services/refusal'
 import { dateIn, type Room } from '../services/room'
@@ -43,27 +45,57 @@ const checksAnswers = () => import.meta.dev || process.env.TENTERFRAME_CHECK_ANS
  */
 export function handle<K extends RouteId>(route: K, work: (asked: Asked<K>) => Promise<Answer<K>> | Answer<K>) {
   const entry: Route = routes[route]
-  return defineEventHandler(async (event) => {
-    try {
-      const now = new Date()
-      const who = await whoAsks(event, now)
-      if (entry.access !== 'public' && !who) refuse('not-signed-in')
-      const run = async (db: Work | null): Promise<unknown> => {
-        const id = entry.resource === null ? '' : await existingId(event, entry, db!, who!.workroomId)
-        if (typeof entry.access !== 'string' && !entry.access.includes(who!.role)) refuse('not-allowed')
-        const room = db && { db, workroom: who!.workroomId, account: who!.accountId, role: who!.role, now, today: dateIn(who!.zone, now) }
-        const query = entry.query ? parse(entry.query, getQuery(event)) : undefined
-        const body = entry.body ? parse(entry.body, await bodyOf(event)) : undefined
-        return work({ event, now, who, room, id, body, query } as Asked<K>)
-      }
-      const answer = typeof entry.access === 'string' ? await run(null) : await inWorkroom(database(), who!.workroomId, run)
-      if (entry.response && checksAnswers()) entry.response.parse(JSON.parse(JSON.stringify(answer)))
-      setResponseStatus(event, entry.status ?? 200)
-      return answer
-    } catch (error) {
-      return answerOf(event, error)
-    }
-  })
+  return defineEventHandler((event) =>
+    answered(event, entry, async (now, who) => {
+      const run = async (db: Work | null): Promise<unknown> =>
+        work((await admitted(event, entry, now, who, db, true)) as unknown as Asked<K>)
+      return typeof entry.access === 'string' ? run(null) : inWorkroom(database(), who!.workroomId, run)
+    }),
+  )
+}
+
+/**
+ * A handler of a route that takes a file. Who asks is looked at before a byte is read, the file is streamed to a temporary place and made
+ * into what is needed outside of any transaction, and only then the work is done, in a transaction of its own.
+ */
+export function handleUpload<K extends UploadRouteId, T>(
+  route: K,
+  make: (path: string, asked: Omit<Asked<K>, 'room'>) => Promise<T>,
+  work: (asked: Asked<K>, made: T) => Promise<Answer<K>> | Answer<K>,
+) {
+  const entry: Route = routes[route]
+  return defineEventHandler((event) =>
+    answered(event, entry, async (now, who) => {
+      const asIn = <R>(then: (db: Work | null) => Promise<R>) =>
+        typeof entry.access === 'string' ? then(null) : inWorkroom(database(), who!.workroomId, then)
+      const before = await asIn((db) => admitted(event, entry, now, who, db, false))
+      const made = await receive(event.node.req, entry.upload!, (path) => make(path, before as unknown as Asked<K>))
+      return asIn(async (db) => work((await admitted(event, entry, now, who, db, false)) as unknown as Asked<K>, made))
+    }),
+  )
+}
+
+async function answered(event: H3Event, entry: Route, run: (now: Date, who: Who | null) => Promise<unknown>): Promise<unknown> {
+  try {
+    const now = new Date()
+    const who = await whoAsks(event, now)
+    if (entry.access !== 'public' && !who) refuse('not-signed-in')
+    const answer = await run(now, who)
+    if (entry.response && checksAnswers()) entry.response.parse(JSON.parse(JSON.stringify(answer)))
+    setResponseStatus(event, entry.status ?? 200)
+    return answer
+  } catch (error) {
+    return answerOf(event, error)
+  }
+}
+
+async function admitted(event: H3Event, entry: Route, now: Date, who: Who | null, db: Work | null, readsBody: boolean) {
+  const id = entry.resource === null ? '' : await existingId(event, entry, db!, who!.workroomId)
+  if (typeof entry.access !== 'string' && !entry.access.includes(who!.role)) refuse('not-allowed')
+  const room = db && { db, workroom: who!.workroomId, account: who!.accountId, role: who!.role, now, today: dateIn(who!.zone, now) }
+  const query = entry.query ? parse(entry.query, getQuery(event)) : undefined
+  const body = readsBody && entry.body ? parse(entry.body, await bodyOf(event)) : undefined
+  return { event, now, who, room, id, body, query }
 }
 
 async function existingId(event: H3Event, entry: Route, db: Work, workroom: string): Promise<string> {

@@ -1,8 +1,9 @@
-import { routes, type RouteAnswer, type RouteBody, type RouteHasId, type RouteId, type RouteQuery } from './routes'
+import { routes, type RouteAnswer, type RouteBody, type RouteHasId, type RouteId, type RouteQuery, type UploadRouteId } from './routes'
 
 type Given<K extends RouteId> = (RouteHasId<K> extends true ? { readonly id: string } : { readonly id?: undefined }) &
   (RouteBody<K> extends undefined ? { readonly body?: undefined } : { readonly body: RouteBody<K> }) &
-  (RouteQuery<K> extends undefined ? { readonly query?: undefined } : { readonly query?: RouteQuery<K> })
+  (RouteQuery<K> extends undefined ? { readonly query?: undefined } : { readonly query?: RouteQuery<K> }) &
+  (K extends UploadRouteId ? { readonly file: Blob } : { readonly file?: undefined })
 
 /** What a route needs: its id, its body, its query; nothing where it needs nothing. */
 export type RouteGiven<K extends RouteId> = Given<K>
@@ -24,6 +25,7 @@ export function routeClient(fetcher: Fetcher) {
     const answer = await fetcher(routePath(route, given), {
       method: routes[route].method,
       ...(given?.body === undefined ? {} : { body: given.body }),
+      ...(given?.file === undefined ? {} : { body: given.file }),
     })
     return answer as RouteAnswer<K>
   }

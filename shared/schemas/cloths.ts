@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { figure, id, isoDate, length, line, name, optionalLine, optionalText, revision } from './base'
+import { testDraft } from './test-draft'
 import { clothState, direction, layerCloth, stretchTest } from './textile'
 
 export const clothBody = z.object({
@@ -17,15 +18,24 @@ export const clothBody = z.object({
 })
 export const clothUpdate = clothBody.extend({ base: revision })
 
-export const testBody = z.object({
+/** A photograph of a strip as it comes from a telephone. */
+export const photoUpload = { field: 'photo', limit: 25_000_000, media: ['image/jpeg', 'image/png', 'image/webp'] } as const
+
+const testFields = z.object({
   testedOn: isoDate,
   tester: optionalLine,
   /** Stretches before the first reading. */
   cycles: z.number().int().min(0).max(1000).nullable().default(null),
   note: optionalText,
-  test: stretchTest,
+  /** What was read; null while the test is unfinished. */
+  test: stretchTest.nullable().default(null),
+  /** An unfinished test as it was typed; null once it is finished. No garment uses it. */
+  draft: testDraft.nullable().default(null),
 })
-export const testUpdate = testBody.extend({ base: revision })
+const isEither = (body: { readonly test: unknown; readonly draft: unknown }) => (body.test === null) !== (body.draft === null)
+const either = { path: ['test'], message: 'Send either the test, or what is typed of an unfinished one.' }
+export const testBody = testFields.refine(isEither, either)
+export const testUpdate = testFields.extend({ base: revision }).refine(isEither, either)
 
 export const cloth = z.object({
   id,
@@ -51,9 +61,13 @@ export const clothTest = z.object({
   tester: z.string().nullable(),
   cycles: z.number().int().nullable(),
   note: z.string().nullable(),
-  test: stretchTest,
+  test: stretchTest.nullable(),
+  draft: testDraft.nullable(),
+  /** Photograph of the strip, pixels; null without one. */
+  photo: z.object({ width: z.number().int(), height: z.number().int(), at: z.string() }).nullable(),
   revision,
   archivedAt: z.string().nullable(),
+  updatedAt: z.string(),
 })
 export type ClothTest = z.output<typeof clothTest>
 
@@ -61,6 +75,8 @@ export type ClothTest = z.output<typeof clothTest>
 export const clothDirection = z.object({
   testId: id,
   direction,
+  /** Degrees from the lengthwise, where the strip was cut at a typed angle. */
+  angle: z.number().optional(),
   state: clothState,
   layer: layerCloth.nullable(),
   problem: z.object({ code: z.string(), message: z.string(), todo: z.string().optional(), at: z.string().optional() }).nullable(),

@@ -20,7 +20,8 @@ export function refusalsOf(route: Route): (keyof typeof problems)[] {
     ...(typeof route.access === 'string' ? [] : (['not-allowed'] as const)),
     ...(route.resource ? (['not-found'] as const) : []),
     ...(route.method === 'GET' ? [] : (['wrong-origin'] as const)),
-    ...(route.body || route.query ? (['invalid-input'] as const) : []),
+    ...(route.body || route.query || route.upload ? (['invalid-input'] as const) : []),
+    ...(route.upload ? (['too-large'] as const) : []),
   ]
 }
 
@@ -46,6 +47,14 @@ function operationOf(id: string, route: Route) {
         schema,
       })),
     ],
+    ...(route.upload
+      ? {
+          requestBody: {
+            required: true,
+            content: Object.fromEntries(route.upload.media.map((media) => [media, { schema: { type: 'string', format: 'binary' } }])),
+          },
+        }
+      : {}),
     ...(route.body ? { requestBody: { required: true, content: { 'application/json': { schema: schemaOf(route.body) } } } } : {}),
     responses: {
       [route.status ?? 200]: {

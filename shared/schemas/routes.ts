@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { done, idParams, list, page, pageQuery } from './base'
 import { client, clientBody, clientSummary, clientUpdate, clientWhole } from './clients'
-import { cloth, clothBody, clothSummary, clothTest, clothUpdate, clothWhole, testBody, testUpdate } from './cloths'
+import { cloth, clothBody, clothSummary, clothTest, clothUpdate, clothWhole, photoUpload, testBody, testUpdate } from './cloths'
 import { draft } from './draft'
 import { fitting, fittingBody } from './fittings'
 import { garmentBody, garmentSummary, garmentUpdate, garmentWhole, workingCopy, workingCopySave } from './garments'
@@ -47,6 +47,8 @@ export interface Route {
   /** Null where the answer is not JSON. */
   readonly response: z.ZodTypeAny | null
   readonly media?: string
+  /** A file as the whole body, streamed: the form's field, the most bytes, its media types. */
+  readonly upload?: { readonly field: string; readonly limit: number; readonly media: readonly string[] }
   readonly status?: number
   readonly group: string
   readonly summary: string
@@ -345,7 +347,7 @@ export const routes = {
     response: clothTest,
     status: 201,
     group: 'Cloths',
-    summary: 'Enter a stretch test.',
+    summary: 'Enter a stretch test, finished or as far as it goes. An unfinished one is used by no garment.',
   },
   'tests.update': {
     ...of('test'),
@@ -365,6 +367,35 @@ export const routes = {
     response: clothTest,
     group: 'Cloths',
     summary: 'Put a stretch test away.',
+  },
+  'tests.photo': {
+    ...of('test'),
+    method: 'GET',
+    path: '/api/tests/:id/photo',
+    access: everyone,
+    response: null,
+    media: 'image/webp',
+    group: 'Cloths',
+    summary: 'Photograph of the strip.',
+  },
+  'tests.attachPhoto': {
+    ...of('test'),
+    method: 'PUT',
+    path: '/api/tests/:id/photo',
+    access: everyone,
+    upload: photoUpload,
+    response: clothTest,
+    group: 'Cloths',
+    summary: 'Attach a photograph of the strip. It is drawn anew: upright, at most 2000 pixels long, without place, time or camera.',
+  },
+  'tests.removePhoto': {
+    ...of('test'),
+    method: 'DELETE',
+    path: '/api/tests/:id/photo',
+    access: everyone,
+    response: clothTest,
+    group: 'Cloths',
+    summary: 'Remove the photograph of the strip.',
   },
 
   'garments.list': {
@@ -623,6 +654,7 @@ export const routes = {
 
 export type Routes = typeof routes
 export type RouteId = keyof Routes
+export type UploadRouteId = { [K in RouteId]: Routes[K] extends { readonly upload: object } ? K : never }[RouteId]
 export const routeIds = Object.keys(routes) as RouteId[]
 
 type Input<S> = S extends z.ZodTypeAny ? z.input<S> : undefined

@@ -18,35 +18,48 @@ const half = z.enum(['front', 'back'])
 const label = z.string().max(120)
 
 const reading = z.object({ load: load(0, 2000), length: length(1, 5000), on: z.enum(['loading', 'return']) })
-const specimen = z.object({
+export const specimen = z.object({
   width: length(5, 500),
   gauge: length(10, 1000),
   readings: z.array(reading).min(1, 'Enter at least one load and its length.').max(200),
   restLength: length(1, 5000).nullable(),
 })
 
+export const testMethod = z.enum(['workroom strip', 'EN ISO 20932-1', 'ASTM D2594', 'ASTM D3107', 'ASTM D4964', 'other'])
+
+export const tensileRecord = z.object({
+  name: z.string().max(200),
+  rows: z.number().int().min(0),
+  cycles: z.number().int().min(0).max(10_000),
+  hasReturn: z.boolean(),
+  earlier: z.array(z.array(z.object({ strain: ratio(), tension: tension() })).max(64)).max(60),
+})
+
+const protocol = {
+  direction,
+  state: clothState,
+  method: testMethod.optional(),
+  methodNote: z.string().trim().max(200, 'Keep it under 200 letters.').optional(),
+  dwell: figure(0, 86_400).optional(),
+  rest: figure(0, 100_000).optional(),
+  angle: figure(0, 90).optional(),
+}
+
 export const stretchTest = mirrors<StretchTest>()(
   z.discriminatedUnion('kind', [
     z.object({
+      ...protocol,
       kind: z.literal('strip'),
-      direction,
-      state: clothState,
       specimens: z.array(specimen).min(1, 'Enter at least one specimen.').max(20),
-      method: z.enum(['workroom strip', 'EN ISO 20932-1', 'ASTM D2594', 'ASTM D3107', 'ASTM D4964', 'other']).optional(),
-      runs: z
-        .array(
-          z.object({
-            name: z.string().max(200),
-            rows: z.number().int().min(0),
-            cycles: z.number().int().min(0).max(10_000),
-            hasReturn: z.boolean(),
-            earlier: z.array(z.array(z.object({ strain: ratio(), tension: tension() })).max(64)).max(60),
-          }),
-        )
-        .max(20)
-        .optional(),
+      way: z.enum(['weights', 'one load', 'spring scale', 'machine']).optional(),
+      runs: z.array(tensileRecord).max(20).optional(),
     }),
-    z.object({ kind: z.literal('label'), direction, state: clothState, stretch: ratio(0.01, 4) }),
+    z.object({
+      ...protocol,
+      kind: z.literal('label'),
+      stretch: ratio(0.01, 6),
+      ruler: z.object({ rest: length(0, 5000), drawn: length(0, 30_000) }).optional(),
+    }),
   ]),
 )
 
@@ -73,6 +86,7 @@ export const layerCloth = mirrors<LayerCloth>()(
     clothId: z.string().max(60),
     name: label,
     direction,
+    angle: figure(0, 90).optional(),
     state: clothState,
     curve: loadCurve,
     figures: stretchFigures,

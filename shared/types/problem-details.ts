@@ -14,6 +14,7 @@ export const problems = {
   'method-not-allowed': { status: 405, title: 'This address does not take that method.' },
   stale: { status: 409, title: 'Somebody saved this meanwhile.' },
   'code-taken': { status: 409, title: 'This code is already in use.' },
+  'no-photo': { status: 409, title: 'There is no photograph on this test.' },
   archived: { status: 409, title: 'This is archived.' },
   'already-cleared': { status: 409, title: 'This version is cleared already.' },
   'stop-stands': { status: 409, title: 'A stop stands on this version.' },

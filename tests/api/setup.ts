@@ -20,7 +20,12 @@ export default async function setup(project: TestProject): Promise<() => Promise
   const { app, owner, seeded, drop } = await throwawayDatabase(new Date())
   try {
     const sessionPassword = randomBytes(24).toString('hex')
-    const server = await startServer({ NUXT_DATABASE_URL: app, NUXT_SESSION_PASSWORD: sessionPassword, NUXT_LOGIN_LIMIT: '10000' })
+    const server = await startServer({
+      NUXT_DATABASE_URL: app,
+      NUXT_SESSION_PASSWORD: sessionPassword,
+      NUXT_LOGIN_LIMIT: '10000',
+      NUXT_FILES_DRIVER: 'memory',
+    })
     project.provide('baseUrl', server.url)
     project.provide('appUrl', app)
     project.provide('ownerUrl', owner)

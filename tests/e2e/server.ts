@@ -11,6 +11,7 @@ try {
     NUXT_DEMO: '1',
     NUXT_LOGIN_LIMIT: '10000',
     TENTERFRAME_CHECK_ANSWERS: process.env.TENTERFRAME_CHECK_ANSWERS ?? '1',
+    NUXT_FILES_DRIVER: 'memory',
   }
   const server = await startServer(env, Number(process.argv[2]))
   console.log(server.url)

@@ -1,5 +1,6 @@
 import { sql } from 'kysely'
 import type { StretchTest } from '../../../shared/domain/textile/types'
+import type { TestDraft } from '../../../shared/schemas/test-draft'
 import { json, type Work } from '../client'
 
 export interface ClothFields {
@@ -19,7 +20,16 @@ export interface TestFields {
   readonly tester: string | null
   readonly cycles: number | null
   readonly note: string | null
-  readonly test: StretchTest
+  /** Null while the test is unfinished; then `draft` holds what is typed. */
+  readonly test: StretchTest | null
+  readonly draft?: TestDraft | null
+}
+
+export interface PhotoFields {
+  /** Its name in the file store. */
+  readonly name: string
+  readonly width: number
+  readonly height: number
 }
 
 const columns = [
@@ -37,7 +47,25 @@ const columns = [
   'archivedAt',
   'updatedAt',
 ] as const
-const testColumns = ['id', 'clothId', 'testedOn', 'tester', 'cycles', 'note', 'test', 'revision', 'archivedAt'] as const
+const testColumns = [
+  'id',
+  'clothId',
+  'testedOn',
+  'tester',
+  'cycles',
+  'note',
+  'test',
+  'draft',
+  'photo',
+  'photoWidth',
+  'photoHeight',
+  'photoAt',
+  'revision',
+  'archivedAt',
+  'updatedAt',
+] as const
+
+const read = ({ test, draft, ...fields }: TestFields) => ({ ...fields, test: test && json(test), draft: draft ? json(draft) : null })
 
 export function findClothById(db: Work, workroom: string, id: string) {
   return db.selectFrom('cloth').select(columns).where('workroomId', '=', workroom).where('id', '=', id).executeTakeFirst()
@@ -124,8 +152,7 @@ export function insertTest(db: Work, workroom: string, cloth: string, fields: Te
     .values({
       workroomId: workroom,
       clothId: cloth,
-      ...fields,
-      test: json(fields.test),
+      ...read(fields),
       createdAt: now,
       updatedAt: now,
       updatedBy: account,
@@ -137,7 +164,7 @@ export function insertTest(db: Work, workroom: string, cloth: string, fields: Te
 export function updateTestAt(db: Work, workroom: string, id: string, base: number, fields: TestFields, account: string, now: Date) {
   return db
     .updateTable('stretchTest')
-    .set({ ...fields, test: json(fields.test), revision: base + 1, updatedAt: now, updatedBy: account })
+    .set({ ...read(fields), revision: base + 1, updatedAt: now, updatedBy: account })
     .where('workroomId', '=', workroom)
     .where('id', '=', id)
     .where('revision', '=', base)
@@ -149,6 +176,18 @@ export function archiveTest(db: Work, workroom: string, id: string, account: str
   return db
     .updateTable('stretchTest')
     .set((eb) => ({ archivedAt: now, revision: eb('revision', '+', 1), updatedAt: now, updatedBy: account }))
+    .where('workroomId', '=', workroom)
+    .where('id', '=', id)
+    .returning(testColumns)
+    .executeTakeFirst()
+}
+
+/** Sets or takes away the photograph of a test. The revision stays: a photograph is no correction of what was read. */
+export function setTestPhoto(db: Work, workroom: string, id: string, photo: PhotoFields | null, account: string, now: Date) {
+  const { name = null, width = null, height = null } = photo ?? {}
+  return db
+    .updateTable('stretchTest')
+    .set({ photo: name, photoWidth: width, photoHeight: height, photoAt: photo && now, updatedAt: now, updatedBy: account })
     .where('workroomId', '=', workroom)
     .where('id', '=', id)
     .returning(testColumns)

@@ -18,7 +18,7 @@ function layerClothOf(cloth: GarmentCloth, choice: LayerChoice, state: ClothStat
     const inState = cloth.directions.filter((one) => one.state === state)
     return nearestDirection(choice.angle, inState.length > 0 ? inState : cloth.directions)?.cloth ?? null
   }
-  const inDirection = cloth.directions.filter((one) => one.direction === choice.direction)
+  const inDirection = cloth.directions.filter((one) => one.direction === choice.direction && one.angle === undefined)
   return inDirection.find((one) => one.state === state) ?? inDirection[0] ?? null
 }
 

@@ -87,7 +87,7 @@ export function inputOfVersion(kept: VersionKept, body: VersionBody, wearer: Wea
   const cloths = new Map<string, LayerCloth[]>()
   for (const { cloth } of kept.plans.flatMap((plan) => plan.layers)) {
     const known = cloths.get(cloth.clothId) ?? []
-    if (!known.some((one) => one.direction === cloth.direction && one.state === cloth.state)) known.push(cloth)
+    if (!known.some((one) => one.direction === cloth.direction && one.angle === cloth.angle && one.state === cloth.state)) known.push(cloth)
     cloths.set(cloth.clothId, known)
   }
   return {

@@ -42,6 +42,7 @@ export function layerCloth(identity: ClothIdentity, test: StretchTest): Result<L
     clothId: identity.clothId,
     name: identity.name,
     direction: test.direction,
+    ...(test.angle === undefined ? {} : { angle: test.angle }),
     state: test.state,
     curve: curve.value,
     figures,

@@ -2,10 +2,12 @@ import type { Strain } from '../units/brand'
 import { newtonPerMetre, strain } from '../units/brand'
 import type { Result } from '../units/result'
 import { fail, succeed } from '../units/result'
+import { LARGEST_STRAIN, checkStripTest } from './check-test'
 import { ASSUMED_TENSION, tensionAt } from './load-curve'
 import { monotoneCurve, monotoneTension, risingKnots } from './monotone'
+import { rulerStretch } from './ruler'
 import type { TestPoint } from './test'
-import { checkStripTest, curvePoints } from './test'
+import { curvePoints } from './test'
 import type { LoadCurve, StretchTest } from './types'
 
 export { ASSUMED_TENSION, ASSUMED_TENSION_LOW, bandFactors, scaleCurve, slopeAt, strainAt, tensionAt } from './load-curve'
@@ -124,6 +126,8 @@ function specimenSpread(groups: readonly (readonly TestPoint[])[], few: number):
  */
 export function fitLoadCurve(test: StretchTest, fewSpread = FEW_SPECIMENS_SPREAD): Result<LoadCurve> {
   if (test.kind === 'label') {
+    const ruler = test.ruler ? rulerStretch(test.ruler.rest, test.ruler.drawn) : null
+    if (ruler && !ruler.ok) return ruler
     if (!(test.stretch > 0)) {
       return fail({
         code: 'no-stretch',
@@ -132,7 +136,7 @@ export function fitLoadCurve(test: StretchTest, fewSpread = FEW_SPECIMENS_SPREAD
         at: 'stretch',
       })
     }
-    if (test.stretch > 6)
+    if (test.stretch > LARGEST_STRAIN)
       return fail({
         code: 'reading-impossible',
         message: 'No cloth stretches that far.',

@@ -32,24 +32,44 @@ export interface TensileRecord {
   readonly earlier: readonly (readonly { readonly strain: Strain; readonly tension: NewtonPerMetre }[])[]
 }
 
+/** What pulled the strip. */
+export type PullWay = 'weights' | 'one load' | 'spring scale' | 'machine'
+
+/** How a test was done, as far as it was noted. Nothing is computed from it but the angle. */
+export interface TestProtocol {
+  readonly method?: TestMethod
+  readonly methodNote?: string
+  /** Seconds each load was held before its length was read. */
+  readonly dwell?: number
+  /** Minutes from the release to the last reading. */
+  readonly rest?: number
+  /** Typed direction of the strip, degrees from the lengthwise, 0 to 90; `direction` is then the name nearest to it. */
+  readonly angle?: number
+}
+
 /** A stretch test of one cloth in one direction and state, as the workroom entered it. */
-export type StretchTest =
-  | {
-      readonly kind: 'strip'
-      readonly direction: ClothDirection
-      readonly state: ClothState
-      readonly specimens: readonly StretchSpecimen[]
-      readonly method?: TestMethod
-      /** One for each specimen where they were read from a tensile machine's files. */
-      readonly runs?: readonly TensileRecord[]
-    }
-  | {
-      /** Only a stretch percentage is known (label, hand pull): the assumed case. */
-      readonly kind: 'label'
-      readonly direction: ClothDirection
-      readonly state: ClothState
-      readonly stretch: Strain
-    }
+export type StretchTest = TestProtocol &
+  (
+    | {
+        readonly kind: 'strip'
+        readonly direction: ClothDirection
+        readonly state: ClothState
+        readonly specimens: readonly StretchSpecimen[]
+        /** Absent in tests older than the choice. */
+        readonly way?: PullWay
+        /** One for each specimen where they were read from a tensile machine's files. */
+        readonly runs?: readonly TensileRecord[]
+      }
+    | {
+        /** Only a stretch percentage is known (label, ruler pull): the assumed case. */
+        readonly kind: 'label'
+        readonly direction: ClothDirection
+        readonly state: ClothState
+        readonly stretch: Strain
+        /** Marks of a ruler pull, at rest and drawn by hand; the stretch follows from them. */
+        readonly ruler?: { readonly rest: Mm; readonly drawn: Mm }
+      }
+  )
 
 /**
  * Load curve T(e) of one cloth in one direction. `cubic`: a e + b e^3 with a, b >= 0. `monotone`: monotone cubic through
@@ -83,6 +103,8 @@ export interface LayerCloth {
   readonly clothId: string
   readonly name: string
   readonly direction: ClothDirection
+  /** Degrees from the lengthwise where the strip was cut at a typed angle; `direction` is then the name nearest to it. */
+  readonly angle?: number
   readonly state: ClothState
   readonly curve: LoadCurve
   readonly figures: StretchFigures

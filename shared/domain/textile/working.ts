@@ -3,7 +3,7 @@ import { ASSUMED_TENSION, ASSUMED_TENSION_LOW } from './load-curve'
 import type { Working, WorkingInput } from '../units/working'
 import { ellipseAxes } from './pressure'
 import { hasSewn } from './segment'
-import type { LoadCurve, RingGeometry, RingSolution, StretchFigures, StretchTest } from './types'
+import type { LoadCurve, RingGeometry, RingSolution } from './types'
 
 /** The figures of a ring that open their working. */
 export type RingFigure = 'tension' | 'pressure' | 'breath' | 'side' | 'cut' | 'negativeEase' | 'k'
@@ -220,52 +220,5 @@ export function curveWorking(curve: LoadCurve): Working {
     result: { value: curve.a, unit: 'N/m' },
     source: 'non-negative least squares through the origin over all readings (Lawson and Hanson 1974, memory)',
     notes: ['Read on the way back where that was done, because a garment holds on the return.', beyond],
-  }
-}
-
-/** The figures of a test that open their working. */
-export type TestFigure = 'stretch' | 'growth' | 'recovery' | 'testTension'
-
-const TEST_FORMULA: Readonly<Record<TestFigure, { readonly title: string; readonly formula: string; readonly unit: 'percent' | 'N/m' }>> = {
-  stretch: { title: 'Stretch at the test load', formula: '100 (L - L0) / L0', unit: 'percent' },
-  growth: { title: 'Growth after the rest', formula: '100 (Lrest - L0) / L0', unit: 'percent' },
-  recovery: { title: 'Recovery after the rest', formula: '100 (L - Lrest) / (L - L0)', unit: 'percent' },
-  testTension: { title: 'Tension at the test load', formula: 'load / width', unit: 'N/m' },
-}
-
-/** The working behind a figure of a stretch test; null where it was not read. Means over the specimens. */
-export function testWorking(test: StretchTest, figures: StretchFigures, figure: TestFigure): Working | null {
-  const value = figures[figure]
-  if (value === null) return null
-  const { title, formula, unit } = TEST_FORMULA[figure]
-  const inputs: readonly WorkingInput[] =
-    test.kind === 'label'
-      ? [input('stretch', 'Stretch as typed', test.stretch * 100, 'percent', 'assumed')]
-      : test.specimens.flatMap((specimen, i) => {
-          const top = specimen.readings.reduce<(typeof specimen.readings)[number] | null>(
-            (best, one) => (best && best.load >= one.load ? best : one),
-            null,
-          )
-          const n = i + 1
-          return [
-            input(`L0 ${n}`, `Gauge length, specimen ${n}`, specimen.gauge, 'mm', 'measured'),
-            ...(top ? [input(`L ${n}`, `Length under ${top.load.toFixed(2)} N`, top.length, 'mm', 'measured')] : []),
-            ...(figure === 'testTension' ? [input(`w ${n}`, `Width, specimen ${n}`, specimen.width, 'mm', 'measured')] : []),
-            ...(specimen.restLength !== null && (figure === 'growth' || figure === 'recovery')
-              ? [input(`Lrest ${n}`, `Length after the rest, specimen ${n}`, specimen.restLength, 'mm', 'measured')]
-              : []),
-          ]
-        })
-  return {
-    title,
-    formula,
-    inputs,
-    result: { value: unit === 'percent' ? value * 100 : value, unit },
-    source: 'formulas of the ASTM D3107 and EN 14704-1 kind (read)',
-    notes: [
-      'The mean over the specimens, each at its largest load.',
-      ...(figure === 'recovery' || figure === 'growth' ? ['Seconds of load stand here for hours of wear: in wear it grows more.'] : []),
-      ...(test.kind === 'label' ? ['The load it was read at is not known.'] : []),
-    ],
   }
 }

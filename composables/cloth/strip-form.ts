@@ -1,5 +1,5 @@
 import { rulerStretch } from '#shared/domain/textile/ruler'
-import { typedDirection } from '#shared/domain/textile/test-angle'
+import { typedDirection } from '#shared/domain/textile/direction'
 import type { PullWay, StretchReading, StretchTest, TensileRecord, TestProtocol } from '#shared/domain/textile/types'
 import { mm, newton, strain } from '#shared/domain/units/brand'
 import { GRAM_PER_POUND, STANDARD_GRAVITY } from '#shared/domain/units/convert'

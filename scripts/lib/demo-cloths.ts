@@ -1,5 +1,8 @@
+import { typedDirection } from '../../shared/domain/textile/direction'
+import { readTensile } from '../../shared/domain/textile/tensile'
 import type { ClothDirection, ClothState, StretchTest } from '../../shared/domain/textile/types'
 import { mm, newton, strain } from '../../shared/domain/units/brand'
+import type { TestDraft } from '../../shared/schemas/test-draft'
 import type { ClothFields } from '../../server/db/queries/cloths'
 
 /** Figures of the demo are invented: they are of the order that such cloths have, and were measured on none. */
@@ -15,10 +18,18 @@ interface DemoTest {
   readonly kept: number
 }
 
+/** A test of another kind, with what is noted of it. */
+interface OtherTest {
+  readonly cycles: number | null
+  readonly note: string
+  readonly test: StretchTest | null
+  readonly draft?: TestDraft
+}
+
 export interface DemoCloth {
   readonly fields: ClothFields
   readonly tests: readonly DemoTest[]
-  readonly label?: { readonly direction: ClothDirection; readonly stretch: number }
+  readonly others: readonly OtherTest[]
 }
 
 const WIDTH = 50
@@ -36,6 +47,10 @@ const hundredth = (value: number) => Math.round(value * 100) / 100
 export function stripTest({ direction, state, a, b, to, kept }: DemoTest): StretchTest {
   return {
     kind: 'strip',
+    way: 'weights',
+    method: 'workroom strip',
+    dwell: 60,
+    rest: 30,
     direction,
     state,
     specimens: SPECIMENS.map((factor) => {
@@ -55,12 +70,116 @@ export function stripTest({ direction, state, a, b, to, kept }: DemoTest): Stret
   }
 }
 
-export const labelTest = (direction: ClothDirection, stretch: number): StretchTest => ({
+/** A machine's run of five cycles, 400 rows each, drawn from T(e) = a e + b e³ with a return under it; read like a file. */
+function machineTest(direction: ClothDirection, a: number, b: number, to: number): StretchTest {
+  const cycles = 5
+  const rows = 400
+  const each = SPECIMENS.map((factor, index) => {
+    const loads: number[] = []
+    const extensions: number[] = []
+    for (let row = 0; row < cycles * rows; row++) {
+      const cycle = Math.floor(row / rows)
+      const part = (row % rows) / rows
+      const e = to * (1 - Math.abs(2 * part - 1)) + 0.003 * cycle
+      const softened = 1 - 0.02 * cycle
+      const tension = (a * e + b * e ** 3) * factor * softened * (part > 0.5 ? ON_RETURN : 1)
+      loads.push((tension * WIDTH) / 1000)
+      extensions.push(e * GAUGE)
+    }
+    const read = readTensile({ loads, extensions }, { width: mm(WIDTH), gauge: mm(GAUGE) })
+    if (!read.ok) throw new Error(read.problem.message)
+    const { specimen, earlier, ...said } = read.value
+    return {
+      specimen: { ...specimen, restLength: mm(tenth(GAUGE * (1 + to * 0.03))) },
+      run: { name: `run-${index + 1}.csv`, ...said, earlier },
+    }
+  })
+  return {
+    kind: 'strip',
+    way: 'machine',
+    method: 'EN ISO 20932-1',
+    methodNote: 'invented, no laboratory',
+    rest: 30,
+    direction,
+    state: 'dry',
+    specimens: each.map((one) => one.specimen),
+    runs: each.map((one) => one.run),
+  }
+}
+
+/** One load read on a strip cut at an angle. */
+const oneLoadTest = (angle: number, stretch: number): StretchTest => ({
+  ...typedDirection(angle),
+  kind: 'strip',
+  way: 'one load',
+  method: 'other',
+  methodNote: 'one weight of 1 kg',
+  dwell: 60,
+  rest: 30,
+  state: 'dry',
+  specimens: SPECIMENS.map((factor) => ({
+    width: mm(WIDTH),
+    gauge: mm(GAUGE),
+    readings: [{ load: newton(hundredth(9.81)), length: mm(tenth(GAUGE * (1 + stretch / factor))), on: 'loading' }],
+    restLength: mm(tenth(GAUGE * (1 + stretch * 0.04))),
+  })),
+})
+
+/** Marks drawn along a ruler by hand. */
+const rulerTest = (direction: ClothDirection, rest: number, drawn: number): StretchTest => ({
+  kind: 'label',
+  direction,
+  state: 'dry',
+  stretch: strain((drawn - rest) / rest),
+  ruler: { rest: mm(rest), drawn: mm(drawn) },
+})
+
+const labelTest = (direction: ClothDirection, stretch: number): StretchTest => ({
   kind: 'label',
   direction,
   state: 'dry',
   stretch: strain(stretch),
 })
+
+/** A wet test that was left off after its first weight. */
+const leftOff = (): TestDraft => {
+  const nothing = { value: null, typed: '' }
+  const three = (typed: string, value: number | null = null) => [0, 1, 2].map(() => ({ value, typed }))
+  const gram = 0.00980665
+  const step = (grams: number, on: 'loading' | 'return', lengths: readonly string[]) => ({
+    load: { value: grams * gram, typed: `${grams} g` },
+    on,
+    lengths: [0, 1, 2].map((one) => (lengths[one] ? { value: Number.parseFloat(lengths[one]), typed: lengths[one] } : nothing)),
+  })
+  return {
+    kind: 'strip',
+    method: 'workroom strip',
+    methodNote: '',
+    direction: 'crosswise',
+    angle: nothing,
+    state: 'wet',
+    testedOn: '2026-11-27',
+    tester: 'Dario Anselm',
+    cycles: '4',
+    dwell: '60',
+    rest: '30',
+    note: 'Weights wanted for the fitting; two more loads to hang.',
+    loadUnit: 'g',
+    hook: { value: 35 * gram, typed: '35 g' },
+    widths: three('50 mm', WIDTH),
+    gauges: three('100 mm', GAUGE),
+    rests: three(''),
+    rows: [
+      step(100, 'loading', ['109 mm', '108.5 mm', '109.5 mm']),
+      step(250, 'loading', ['121 mm']),
+      step(500, 'loading', []),
+      step(250, 'return', []),
+    ],
+    runs: [],
+    stretch: nothing,
+    ruler: { rest: nothing, drawn: nothing },
+  }
+}
 
 const cloth = (
   code: string,
@@ -70,9 +189,9 @@ const cloth = (
   thickness: number,
   width: number,
   tests: readonly DemoTest[],
-  extra: Partial<ClothFields> & { label?: DemoCloth['label'] } = {},
+  extra: Partial<ClothFields> & { others?: readonly OtherTest[] } = {},
 ): DemoCloth => {
-  const { label, ...fields } = extra
+  const { others = [], ...fields } = extra
   return {
     fields: {
       code,
@@ -87,7 +206,7 @@ const cloth = (
       ...fields,
     },
     tests,
-    ...(label ? { label } : {}),
+    others,
   }
 }
 
@@ -112,7 +231,10 @@ export const DEMO_CLOTHS: readonly DemoCloth[] = [
       ...both('dry', { a: 340, b: 420, to: 0.7, kept: 0.03 }, { a: 460, b: 700, to: 0.5, kept: 0.04 }),
       ...both('wet', { a: 300, b: 380, to: 0.72, kept: 0.05 }, { a: 410, b: 640, to: 0.52, kept: 0.06 }),
     ],
-    { lot: '2611-A' },
+    {
+      lot: '2611-A',
+      others: [{ cycles: 3, note: 'Cut for the slanting side piece. Invented for the demo.', test: oneLoadTest(30, 0.46) }],
+    },
   ),
   cloth(
     'SH-09',
@@ -122,7 +244,7 @@ export const DEMO_CLOTHS: readonly DemoCloth[] = [
     0.48,
     1520,
     [...both('dry', { a: 300, b: 350, to: 0.75, kept: 0.03 }, { a: 380, b: 560, to: 0.55, kept: 0.04 })],
-    { lot: '2609-C' },
+    { lot: '2609-C', others: [{ cycles: null, note: 'Invented for the demo.', test: null, draft: leftOff() }] },
   ),
   cloth(
     'PN-30',
@@ -145,7 +267,10 @@ export const DEMO_CLOTHS: readonly DemoCloth[] = [
     0.28,
     1480,
     [...both('dry', { a: 240, b: 380, to: 0.75, kept: 0.03 }, { a: 310, b: 520, to: 0.6, kept: 0.03 })],
-    { lot: '2602-B' },
+    {
+      lot: '2602-B',
+      others: [{ cycles: null, note: 'Files of a machine, invented for the demo.', test: machineTest('bias', 180, 260, 0.8) }],
+    },
   ),
   cloth(
     'LN-05',
@@ -160,11 +285,18 @@ export const DEMO_CLOTHS: readonly DemoCloth[] = [
     ],
     { lot: '2605-A' },
   ),
-  cloth('MU-02', 'Mock-up knit, unbleached', '92 % cotton, 8 % elastane', 170, 0.55, 1600, [
-    ...both('dry', { a: 110, b: 120, to: 0.8, kept: 0.09 }, { a: 160, b: 220, to: 0.6, kept: 0.1 }),
-  ]),
+  cloth(
+    'MU-02',
+    'Mock-up knit, unbleached',
+    '92 % cotton, 8 % elastane',
+    170,
+    0.55,
+    1600,
+    [...both('dry', { a: 110, b: 120, to: 0.8, kept: 0.09 }, { a: 160, b: 220, to: 0.6, kept: 0.1 })],
+    { others: [{ cycles: null, note: 'Pinched and drawn along a ruler. Invented for the demo.', test: rulerTest('bias', 101.6, 177.8) }] },
+  ),
   cloth('VL-21', 'Stretch velvet, plum', '93 % polyester, 7 % elastane', 290, 1.1, 1450, [], {
-    label: { direction: 'crosswise', stretch: 0.45 },
+    others: [{ cycles: null, note: 'From the label.', test: labelTest('crosswise', 0.45) }],
     supplier: 'Corder and Vale',
     note: 'Only the label is known: pull a strip before it is cut. Invented for the demo.',
   }),

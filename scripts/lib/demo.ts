@@ -15,7 +15,7 @@ import { dateIn, type Room } from '../../server/services/room'
 import { clearVersion, createVersion } from '../../server/services/versions'
 import { createWearer, noteFlags } from '../../server/services/wearers'
 import { getWorkingCopy, saveWorkingCopy } from '../../server/services/working-copy'
-import { DEMO_CLOTHS, labelTest, stripTest } from './demo-cloths'
+import { DEMO_CLOTHS, stripTest } from './demo-cloths'
 import { DEMO_CLIENTS, fromCm, type DemoClient } from './demo-people'
 import { hashPassword } from './hash-password'
 
@@ -48,7 +48,7 @@ async function found(owner: Work, name: string): Promise<DemoIds> {
 
 async function seedCloths(room: Room): Promise<Record<string, string>> {
   const ids: Record<string, string> = {}
-  for (const { fields, tests, label } of DEMO_CLOTHS) {
+  for (const { fields, tests, others } of DEMO_CLOTHS) {
     const { id } = await createCloth(room, fields)
     ids[fields.code] = id
     const noted = {
@@ -58,8 +58,7 @@ async function seedCloths(room: Room): Promise<Record<string, string>> {
       note: 'Strips with weights, 60 s at each load, rested 30 min. Figures invented for the demo.',
     }
     for (const test of tests) await createTest(room, id, { ...noted, test: stripTest(test) })
-    if (label)
-      await createTest(room, id, { ...noted, cycles: null, note: 'From the label.', test: labelTest(label.direction, label.stretch) })
+    for (const other of others) await createTest(room, id, { ...noted, ...other })
   }
   return ids
 }

@@ -1,7 +1,7 @@
 import type { GarmentCloth } from '../../shared/domain/garment/types'
 import { layerCloth } from '../../shared/domain/textile/cloth'
 import type { StretchTest, TextileSettings } from '../../shared/domain/textile/types'
-import { directionKey } from '../../shared/domain/textile/test-angle'
+import { directionKey } from '../../shared/domain/textile/direction'
 import { mm } from '../../shared/domain/units/brand'
 import type { ParsedBody, ParsedQuery, RouteAnswer } from '../../shared/schemas/routes'
 import type { TestDraft } from '../../shared/schemas/test-draft'

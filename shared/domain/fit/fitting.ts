@@ -1,3 +1,4 @@
+import { directionKey } from '../textile/direction'
 import type { LevelId } from '../body/types'
 import { ringPressure } from '../textile/pressure'
 import { solveRing } from '../textile/ring'
@@ -37,7 +38,9 @@ function planOfRing(geometry: RingGeometry): string {
   const plans = geometry.segments.map((segment) =>
     segment.plan.layers
       .filter((layer) => layer.count > 0)
-      .map(({ cloth, count, cutRatio, rigid }) => [cloth.clothId, cloth.direction, cloth.state, count, cutRatio, rigid ?? false].join(' '))
+      .map(({ cloth, count, cutRatio, rigid }) =>
+        [cloth.clothId, directionKey(cloth), cloth.state, count, cutRatio, rigid ?? false].join(' '),
+      )
       .join(', '),
   )
   return [...new Set(plans)].sort().join('; ')

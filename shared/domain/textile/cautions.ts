@@ -5,7 +5,7 @@ import { mm, pascal } from '../units/brand'
 import { daysBetween } from '../units/days'
 import { BAND_LIMITS, BREATH_LIMITS, SIDE_LIMIT, holdBand } from './bands'
 import { ENOUGH_SPECIMENS, LARGEST_RESIDUAL } from './curve'
-import { DIRECTION_ANGLE, SAME_ANGLE } from './direction'
+import { SAME_ANGLE, angleOf, directionKey, directionWords } from './direction'
 import { layerStrainIn, segmentWearLimit } from './segment'
 import type { Layer, LayerCloth, LayerPlan, RingGeometry, RingSolution, TextileSettings } from './types'
 
@@ -99,7 +99,7 @@ function stretchCautions(geometry: RingGeometry, solution: RingSolution): readon
     for (const layer of plan.layers) {
       const { cloth, count, rigid } = layer
       const strain = layerStrainIn(geometry.segments[i]!, layer, segment.width, segment.strain)
-      const key = `${cloth.clothId}/${cloth.direction}`
+      const key = `${cloth.clothId}/${directionKey(cloth)}`
       if (!(count > 0) || rigid || strain <= cloth.curve.testedTo * ABOVE || told.has(key)) continue
       told.add(key)
       found.push(cautions.testExtrapolated(place, { cloth: cloth.name, strain, testedTo: cloth.curve.testedTo }))
@@ -187,7 +187,7 @@ function testCautions(layer: Layer, zone: string, context: TextileContext, firm:
   }
   if (cloth.state === 'dry' && (context.use.water || context.state === 'wet')) {
     const wetToo = context.directions.some(
-      (one) => one.clothId === cloth.clothId && one.direction === cloth.direction && one.state === 'wet',
+      (one) => one.clothId === cloth.clothId && directionKey(one) === directionKey(cloth) && one.state === 'wet',
     )
     if (!wetToo || context.state === 'wet') found.push(cautions.testDryForWater(place, name))
   }
@@ -212,10 +212,10 @@ function testCautions(layer: Layer, zone: string, context: TextileContext, firm:
 
 function directionCautions({ cloth, askedAngle, id }: Layer, zone: string): readonly Caution[] {
   if (askedAngle === undefined) return []
-  const off = Math.abs(askedAngle - DIRECTION_ANGLE[cloth.direction])
+  const off = Math.abs(askedAngle - angleOf(cloth))
   if (off <= SAME_ANGLE) return []
   const place = { kind: 'plan', zone, layer: id } as const
-  return [cautions.directionNearest(place, { cloth: cloth.name, asked: askedAngle, taken: cloth.direction, off })]
+  return [cautions.directionNearest(place, { cloth: cloth.name, asked: askedAngle, taken: directionWords(cloth), off })]
 }
 
 /**
@@ -227,7 +227,7 @@ export function planCautions(context: TextileContext): readonly Caution[] {
   const told = new Set<string>()
   return context.plans.flatMap((plan) =>
     plan.layers.flatMap((layer) => {
-      const key = `${layer.cloth.clothId}/${layer.cloth.direction}/${layer.cloth.state}`
+      const key = `${layer.cloth.clothId}/${directionKey(layer.cloth)}/${layer.cloth.state}`
       const asked = `${key}/${layer.askedAngle ?? ''}`
       if (!(layer.count > 0) || layer.rigid || told.has(asked)) return []
       const first = !told.has(key)

@@ -118,7 +118,7 @@ async function testCloth(page: Page, hands: Hands, code: string): Promise<void> 
   await accessible(page)
   await hands.press(page.getByRole('button', { name: 'Save test' }))
   await expect(page.getByRole('heading', { name: 'Tests' })).toBeVisible()
-  await expect(page.getByText('strip, 1 specimen')).toBeVisible()
+  await expect(page.getByRole('cell', { name: /strip, 1 specimen/ })).toBeVisible()
   await accessible(page)
 }
 

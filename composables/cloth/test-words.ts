@@ -14,11 +14,11 @@ export function testKindWords(test: StretchTest): string {
   return `${WAYS[test.way ?? (test.runs ? 'machine' : 'weights')]}, ${length} ${length === 1 ? 'specimen' : 'specimens'}`
 }
 
-/** How it was done, as far as it was noted; empty where nothing was. */
+/** How it was done, as far as it was noted; empty where nothing was. Goes on a sentence. */
 export function protocolWords(test: StretchTest, cycles: number | null): string {
   const named = test.method === 'other' ? null : (test.method ?? null)
   const parts = [
-    test.kind === 'strip' && (named || test.methodNote) ? `Method: ${[named, test.methodNote].filter(Boolean).join('; ')}` : null,
+    test.kind === 'strip' && (named || test.methodNote) ? `method: ${[named, test.methodNote].filter(Boolean).join(', ')}` : null,
     cycles === null || test.kind === 'label' ? null : `${cycles} ${cycles === 1 ? 'stretch' : 'stretches'} before reading`,
     test.dwell === undefined ? null : `${test.dwell} s at each load`,
     test.rest === undefined ? null : `rested ${test.rest} min`,
@@ -26,5 +26,5 @@ export function protocolWords(test: StretchTest, cycles: number | null): string 
       ? `read from ${test.runs.map((run) => `${run.name} (${run.rows} rows, ${run.cycles} ${run.cycles === 1 ? 'cycle' : 'cycles'})`).join(', ')}`
       : null,
   ]
-  return parts.filter(Boolean).join('. ')
+  return parts.filter(Boolean).join('; ')
 }

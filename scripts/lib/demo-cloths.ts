@@ -22,6 +22,7 @@ interface DemoTest {
 interface OtherTest {
   readonly cycles: number | null
   readonly note: string
+  readonly testedOn?: string
   readonly test: StretchTest | null
   readonly draft?: TestDraft
 }
@@ -244,7 +245,7 @@ export const DEMO_CLOTHS: readonly DemoCloth[] = [
     0.48,
     1520,
     [...both('dry', { a: 300, b: 350, to: 0.75, kept: 0.03 }, { a: 380, b: 560, to: 0.55, kept: 0.04 })],
-    { lot: '2609-C', others: [{ cycles: null, note: 'Invented for the demo.', test: null, draft: leftOff() }] },
+    { lot: '2609-C', others: [{ cycles: null, note: 'Invented for the demo.', testedOn: '2026-11-27', test: null, draft: leftOff() }] },
   ),
   cloth(
     'PN-30',

@@ -51,7 +51,7 @@ test('a tensile run is read from its file, asked about where it must be, and ref
   await expect(page.getByText(/8 loadings before the last/)).toBeVisible()
   await accessible(page)
   await page.getByRole('button', { name: 'Save test' }).click()
-  await expect(page.getByText(/Method: EN ISO 20932-1/)).toBeVisible()
+  await expect(page.getByText(/method: EN ISO 20932-1/)).toBeVisible()
   await expect(page.getByText(/one.csv \(2005 rows, 5 cycles\)/)).toBeVisible()
 
   await page.getByLabel('Compare with').selectOption({ label: 'PN-12 Power net, light, crosswise, dry' })

@@ -1,4 +1,4 @@
-import { specimenFigures } from './test'
+import { eachFigures } from './test'
 import type { StretchFigures, StretchTest } from './types'
 
 /** One figure over the specimens of a test, in the figure's own unit. */
@@ -27,9 +27,9 @@ function repeatOf(values: readonly number[]): Repeat | null {
   }
 }
 
-/** Mean and spread of stretch, growth, recovery and tension over the specimens, each at its largest load. A label has none. */
+/** Mean and spread of stretch, growth, recovery and tension over the specimens, at the test load. A label has none. */
 export function testRepeats(test: StretchTest): Repeats {
-  const each = test.kind === 'label' ? [] : test.specimens.flatMap((specimen) => specimenFigures(specimen) ?? [])
+  const each = test.kind === 'label' ? [] : eachFigures(test.specimens).flatMap((one) => one ?? [])
   const of = (figure: keyof StretchFigures) => repeatOf(each.flatMap((one) => one[figure] ?? []))
   return { stretch: of('stretch'), growth: of('growth'), recovery: of('recovery'), testTension: of('testTension') }
 }

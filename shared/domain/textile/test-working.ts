@@ -3,8 +3,8 @@ import { PULL_ON_SHARE, WEAR_SHARE } from './cloth'
 import { ENOUGH_SPECIMENS, FEW_SPECIMENS_SPREAD, LARGEST_RESIDUAL } from './curve'
 import { ASSUMED_TENSION, ASSUMED_TENSION_LOW } from './load-curve'
 import { testRepeats, type Repeat } from './repeats'
-import { largestReading } from './test'
-import type { LayerCloth, LoadCurve, StretchFigures, StretchSpecimen, StretchTest } from './types'
+import { largestReading, testReadings } from './test'
+import type { LayerCloth, LoadCurve, StretchFigures, StretchReading, StretchSpecimen, StretchTest } from './types'
 
 /** The figures of a test that open their working. */
 export type TestFigure = 'stretch' | 'growth' | 'recovery' | 'testTension'
@@ -12,11 +12,13 @@ export type TestFigure = 'stretch' | 'growth' | 'recovery' | 'testTension'
 const SOURCE = 'formulas of the ASTM D3107 and EN 14704-1 kind (read)'
 const PERCENT = 100
 
+const TEST_LOAD = 'The test load is the largest that every specimen was read at; where they share none, each one’s own largest.'
+
 const FORMULA: Readonly<Record<TestFigure, { readonly title: string; readonly formula: string; readonly notes: readonly string[] }>> = {
   stretch: {
-    title: 'Stretch at the largest load',
+    title: 'Stretch at the test load',
     formula: 'stretch = 100 (L - L0) / L0',
-    notes: ['Read after the hold at each load: read at once it is less, because the cloth goes on giving.'],
+    notes: [TEST_LOAD, 'Read after the hold at each load: read at once it is less, because the cloth goes on giving.'],
   },
   growth: {
     title: 'Growth after the rest',
@@ -25,34 +27,38 @@ const FORMULA: Readonly<Record<TestFigure, { readonly title: string; readonly fo
   },
   recovery: {
     title: 'Recovery after the rest',
-    formula: 'recovery = 100 (L - Lr) / (L - L0)',
+    formula: 'recovery = 100 (Lmax - Lr) / (Lmax - L0)',
     notes: ['Minutes of load stand here for hours of wear: in wear it recovers less.'],
   },
   testTension: {
-    title: 'Tension at the largest load',
+    title: 'Tension at the test load',
     formula: 'T = F / w',
     notes: [
+      TEST_LOAD,
       'A free strip narrows as it is pulled and boned cloth cannot: in the garment the tension is 1.1 to 1.3 times higher.',
       'In hours a worn garment gives up about a quarter of its tension.',
     ],
   },
 }
 
-const NEEDS: Readonly<Record<TestFigure, readonly ('L0' | 'L' | 'Lr' | 'F' | 'w')[]>> = {
+type InputSymbol = 'L0' | 'L' | 'Lmax' | 'Lr' | 'F' | 'w'
+
+const NEEDS: Readonly<Record<TestFigure, readonly InputSymbol[]>> = {
   stretch: ['L0', 'L'],
   growth: ['L0', 'Lr'],
-  recovery: ['L0', 'L', 'Lr'],
+  recovery: ['L0', 'Lmax', 'Lr'],
   testTension: ['F', 'w'],
 }
 
-const READ = {
-  L0: { label: 'between the marks at rest', unit: 'mm', of: (one: StretchSpecimen) => one.gauge },
-  L: { label: 'at the largest load', unit: 'mm', of: (one: StretchSpecimen) => largestReading(one)?.length ?? null },
-  Lr: { label: 'after the rest', unit: 'mm', of: (one: StretchSpecimen) => one.restLength },
-  F: { label: 'largest load, hook and clamp counted', unit: 'N', of: (one: StretchSpecimen) => largestReading(one)?.load ?? null },
-  w: { label: 'width of the strip', unit: 'mm', of: (one: StretchSpecimen) => one.width },
-} as const
-
+type Read = (one: StretchSpecimen, at: StretchReading | null) => number | null
+const READ: Readonly<Record<InputSymbol, { readonly label: string; readonly unit: 'mm' | 'N'; readonly of: Read }>> = {
+  L0: { label: 'between the marks at rest', unit: 'mm', of: (one) => one.gauge },
+  L: { label: 'at the test load', unit: 'mm', of: (_, at) => at?.length ?? null },
+  Lmax: { label: 'at its largest load', unit: 'mm', of: (one) => largestReading(one)?.length ?? null },
+  Lr: { label: 'after the rest', unit: 'mm', of: (one) => one.restLength },
+  F: { label: 'test load, hook and clamp counted', unit: 'N', of: (_, at) => at?.load ?? null },
+  w: { label: 'width of the strip', unit: 'mm', of: (one) => one.width },
+}
 function spreadNotes(repeat: Repeat | null, scale: number, unit: string): readonly string[] {
   if (!repeat || repeat.deviation === null) return ['One specimen was read: how far the lot spreads is not known from it.']
   const said = (value: number) => `${(value * scale).toFixed(unit === '%' ? 1 : 2)} ${unit}`
@@ -87,9 +93,10 @@ export function testWorking(test: StretchTest, figures: StretchFigures, figure: 
   if (value === null) return null
   if (test.kind === 'label') return figure === 'stretch' ? labelWorking(test) : null
   const { title, formula, notes } = FORMULA[figure]
+  const at = testReadings(test.specimens)
   const inputs = NEEDS[figure].flatMap((symbol) =>
     test.specimens.flatMap((specimen, index): readonly WorkingInput[] => {
-      const read = READ[symbol].of(specimen)
+      const read = READ[symbol].of(specimen, at[index]!)
       const { label, unit } = READ[symbol]
       return read === null
         ? []

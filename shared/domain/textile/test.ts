@@ -16,17 +16,43 @@ export function largestReading(specimen: StretchSpecimen): StretchReading | null
   return specimen.readings.reduce<StretchReading | null>((best, reading) => (best && best.load >= reading.load ? best : reading), null)
 }
 
-/** Stretch, growth and recovery of one specimen at its largest load; null where it was not read. Source: the same formulas. */
-export function specimenFigures(specimen: StretchSpecimen): StretchFigures | null {
+/** Loads of several specimens so near to each other are one test load: weights and scales are read no truer. Common practice. */
+export const SAME_LOAD = 0.02
+
+/**
+ * The reading of each specimen that stands for the test load: at the largest load that every specimen was read at while it went on, so that
+ * their stretch can be compared; where they share none, each at its own largest. Null for a specimen without readings.
+ */
+export function testReadings(specimens: readonly StretchSpecimen[]): readonly (StretchReading | null)[] {
+  const loading = (specimen: StretchSpecimen) => specimen.readings.filter((one) => one.on === 'loading' && one.load > 0)
+  const near = (load: number) => (one: StretchReading) => Math.abs(one.load - load) <= SAME_LOAD * load
+  const [first, ...others] = specimens
+  const shared = (first ? loading(first) : [])
+    .filter(({ load }) => others.every((one) => loading(one).some(near(load))))
+    .reduce((most, { load }) => Math.max(most, load), 0)
+  return specimens.map((one) => (shared > 0 ? loading(one).findLast(near(shared))! : largestReading(one)))
+}
+
+/**
+ * Stretch and tension of one specimen at a reading, its largest unless told; growth and recovery after the rest, recovery of the stretch at
+ * its largest load. Null where it was not read. Source: the same formulas.
+ */
+export function specimenFigures(specimen: StretchSpecimen, at = largestReading(specimen)): StretchFigures | null {
   const top = largestReading(specimen)
-  if (!top) return null
+  if (!top || !at) return null
   const { gauge, restLength } = specimen
   return {
-    stretch: readingStrain(specimen, top),
+    stretch: readingStrain(specimen, at),
     growth: restLength === null ? null : strain((restLength - gauge) / gauge),
     recovery: restLength === null || top.length <= gauge ? null : (top.length - restLength) / (top.length - gauge),
-    testTension: readingTension(specimen, top),
+    testTension: readingTension(specimen, at),
   }
+}
+
+/** Figures of each specimen at the test load. */
+export function eachFigures(specimens: readonly StretchSpecimen[]): readonly (StretchFigures | null)[] {
+  const readings = testReadings(specimens)
+  return specimens.map((one, index) => specimenFigures(one, readings[index]))
 }
 
 const mean = (values: readonly number[]): number => values.reduce((sum, value) => sum + value, 0) / values.length
@@ -36,10 +62,10 @@ function meanOf(figures: readonly StretchFigures[], pick: (one: StretchFigures) 
   return values.length === 0 ? null : mean(values)
 }
 
-/** Figures of a whole test, means over its specimens. A label-only test has a stretch and nothing else. */
+/** Figures of a whole test, means over its specimens at the test load. A label-only test has a stretch and nothing else. */
 export function testFigures(test: StretchTest): StretchFigures {
   if (test.kind === 'label') return { stretch: test.stretch, growth: null, recovery: null, testTension: null }
-  const each = test.specimens.map(specimenFigures).filter((one): one is StretchFigures => one !== null)
+  const each = eachFigures(test.specimens).filter((one): one is StretchFigures => one !== null)
   const growth = meanOf(each, (one) => one.growth)
   const tension = meanOf(each, (one) => one.testTension)
   return {

@@ -1,5 +1,23 @@
+import { fileURLToPath } from 'node:url'
+import { build } from 'esbuild'
+
 const buildDir = process.env.TENTERFRAME_BUILD_DIR ?? '.nuxt'
 const outputDir = process.env.TENTERFRAME_OUTPUT_DIR ?? '.output'
+
+/** A thread of the server as text: a bundler of the server cannot follow `new Worker`, so the thread is bundled by itself. */
+async function bundledWorker(entry: string): Promise<string> {
+  const { outputFiles } = await build({
+    entryPoints: [fileURLToPath(new URL(entry, import.meta.url))],
+    bundle: true,
+    write: false,
+    platform: 'node',
+    format: 'cjs',
+    target: 'node20',
+    minify: true,
+  })
+  // As base64, because the server's own bundler replaces words in what it takes for code.
+  return `export default Buffer.from('${Buffer.from(outputFiles[0]!.contents).toString('base64')}', 'base64').toString()`
+}
 
 export default defineNuxtConfig({
   compatibilityDate: '2026-01-01',
@@ -64,9 +82,13 @@ export default defineNuxtConfig({
     xssValidator: false,
   },
   // What takes a file streams it and cuts it at its own limit.
-  routeRules: { '/api/tests/*/photo': { security: { requestSizeLimiter: false } } },
+  routeRules: {
+    '/api/tests/*/photo': { security: { requestSizeLimiter: false } },
+    '/api/solve/run': { security: { requestSizeLimiter: false } },
+  },
   nitro: {
     output: { dir: outputDir },
+    virtual: { '#machine-file-worker': () => bundledWorker('server/workers/machine-file.ts') },
     experimental: { asyncContext: true },
   },
   vite: {
@@ -74,5 +96,8 @@ export default defineNuxtConfig({
       include: ['vee-validate', '@vee-validate/zod', 'zod', 'konva', 'konva/lib/Core', 'papaparse', 'vue-konva', 'clipper2-ts', 'nnls'],
     },
   },
-  typescript: { strict: true, tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } } },
+  typescript: {
+    strict: true,
+    tsConfig: { compilerOptions: { noUncheckedIndexedAccess: true } },
+  },
 })

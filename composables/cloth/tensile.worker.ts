@@ -1,4 +1,4 @@
-import { readMachineFile, type TensileAsk } from './tensile-file'
+import { readMachineFile, type TensileAsk } from '../../shared/utils/machine-file'
 
 /** Reads a machine's file away from the screen's own thread. */
 self.addEventListener(

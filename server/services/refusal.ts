@@ -1,6 +1,6 @@
 import type { ProblemDetails, ProblemSlug } from '../../shared/types/problem-details'
 
-export type RefusalDetails = Pick<ProblemDetails, 'detail' | 'fields' | 'theirs' | 'problem' | 'retryAfterSeconds'>
+export type RefusalDetails = Pick<ProblemDetails, 'detail' | 'fields' | 'theirs' | 'problem' | 'ask' | 'retryAfterSeconds'>
 
 /** A use case says no. It leaves as problem details. */
 export class Refusal extends Error {

@@ -108,6 +108,7 @@ export function describeRoutes(): Record<string, unknown> {
             fields: { type: 'array', items: { type: 'object', properties: { path: { type: 'string' }, message: { type: 'string' } } } },
             theirs: { description: 'What was saved meanwhile.' },
             problem: { type: 'object', description: 'Why it cannot be computed, with its next step.' },
+            ask: { type: 'object', description: 'Which columns and units of a machine’s file have to be chosen.' },
             retryAfterSeconds: { type: 'integer' },
           },
         },

@@ -5,6 +5,7 @@ import { cloth, clothBody, clothSummary, clothTest, clothUpdate, clothWhole, pho
 import { draft } from './draft'
 import { fitting, fittingBody } from './fittings'
 import { garmentBody, garmentSummary, garmentUpdate, garmentWhole, workingCopy, workingCopySave } from './garments'
+import { runAnswer, runQuery, runUpload } from './machine-file'
 import { measuring, measuringBody, measuringUpdate } from './measuring'
 import { printQuery, tileMap, tilePlan } from './print'
 import { me, preferencesBody, signInBody, type Role } from './session'
@@ -560,6 +561,17 @@ export const routes = {
     response: solveCurveAnswer,
     group: 'Solve',
     summary: 'Load curve and figures of a stretch test.',
+  },
+  'solve.run': {
+    ...plain,
+    method: 'POST',
+    path: '/api/solve/run',
+    access: 'signed-in',
+    query: runQuery,
+    upload: runUpload,
+    response: runAnswer,
+    group: 'Solve',
+    summary: 'A tensile machine’s file as a specimen: the last loading and its return. What the file does not say is asked back.',
   },
   'solve.rings': {
     ...plain,

@@ -21,6 +21,7 @@ export const problems = {
   'stop-barred': { status: 409, title: 'A stop on this version cannot be cleared by anyone.' },
   'cannot-draft': { status: 422, title: 'The garment cannot be drafted as it stands.' },
   'cannot-solve': { status: 422, title: 'This cannot be computed as it stands.' },
+  'columns-unclear': { status: 422, title: 'This file does not say all of its columns.' },
   'too-large': { status: 413, title: 'This is more than one request may carry.' },
   'not-ready': { status: 503, title: 'The workroom is not ready yet.' },
   unexpected: { status: 500, title: 'Something went wrong on our side.' },
@@ -50,6 +51,16 @@ export interface ProblemDetails {
     readonly todo?: string
     readonly at?: string
     readonly step?: string
+  }
+  /** What has to be chosen before a machine's file can be read: its headings, and which columns and units were recognised. */
+  readonly ask?: {
+    readonly headings: readonly string[]
+    readonly columns: {
+      readonly load: number | null
+      readonly loadUnit: string | null
+      readonly extension: number | null
+      readonly lengthUnit: string | null
+    }
   }
   readonly retryAfterSeconds?: number
 }

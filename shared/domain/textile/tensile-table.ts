@@ -47,11 +47,15 @@ export function recogniseColumns(headings: readonly string[], below: readonly st
   return { load, loadUnit: unitOf(load, TENSILE_LOAD_UNITS), extension, lengthUnit: unitOf(extension, TENSILE_LENGTH_UNITS) }
 }
 
-/** A number as machines write it, with a decimal point or a decimal comma; NaN for anything else. */
+/** A number as machines write it, with a decimal point or a decimal comma, and the other one between thousands; NaN for anything else. */
 export function machineNumber(text: string): number {
   const plain = text.trim()
   if (plain === '') return Number.NaN
-  return Number(plain.includes(',') && !plain.includes('.') ? plain.replace(',', '.') : plain)
+  const comma = plain.lastIndexOf(',')
+  const point = plain.lastIndexOf('.')
+  if (comma < 0) return Number(plain)
+  if (point < 0) return Number(plain.replace(',', '.'))
+  return Number(comma > point ? plain.replaceAll('.', '').replace(',', '.') : plain.replaceAll(',', ''))
 }
 
 /** Load in N. */

@@ -81,6 +81,7 @@ describe('the table of a machine', () => {
   it('reads decimal points and commas, and converts by the exact factors', () => {
     expect(machineNumber(' 1,25 ')).toBe(1.25)
     expect(machineNumber('1.25e1')).toBe(12.5)
+    expect([machineNumber('1.234,5'), machineNumber('1,234.5'), machineNumber('-0,5')]).toEqual([1234.5, 1234.5, -0.5])
     expect(machineNumber('time')).toBeNaN()
     expect(machineNumber('')).toBeNaN()
     // Factors by definition: standard gravity 9.80665 m/s², pound .45359237 kg, inch 25.4 mm.

@@ -1,18 +1,14 @@
 import Papa from 'papaparse'
-import {
-  machineExtension,
-  machineLoad,
-  machineNumber,
-  recogniseColumns,
-  type TensileColumns,
-} from '../../shared/domain/textile/tensile-table'
-import { readTensile, type TensileReading } from '../../shared/domain/textile/tensile'
-import type { Mm } from '../../shared/domain/units/brand'
-import type { Problem } from '../../shared/domain/units/result'
+import { machineExtension, machineLoad, machineNumber, recogniseColumns, type TensileColumns } from '../domain/textile/tensile-table'
+import { readTensile, type TensileReading } from '../domain/textile/tensile'
+import type { Mm } from '../domain/units/brand'
+import type { Problem } from '../domain/units/result'
 
 export interface TensileAsk {
-  /** A file, or its text. */
-  readonly file: File | string
+  /** A file, its text, or a stream of it. */
+  readonly file: File | string | NodeJS.ReadableStream
+  /** Encoding of a stream; a file says its own. */
+  readonly encoding?: string
   readonly width: Mm
   readonly gauge: Mm
   /** What the person chose where it was not recognised. */
@@ -26,8 +22,16 @@ export type TensileAnswer =
 /** Rows looked through for the first that holds figures. */
 const HEAD = 60
 
+/** The encoding that the first bytes of a file name: machines write UTF-16 with its mark, or UTF-8. */
+export function encodingOf(head: Uint8Array): string {
+  if (head[0] === 0xff && head[1] === 0xfe) return 'utf-16le'
+  return head[0] === 0xfe && head[1] === 0xff ? 'utf-16be' : 'utf-8'
+}
+
 /** Reads a machine's file in chunks, so that it never stands in memory as a whole table. */
-export function readMachineFile({ file, width, gauge, chosen }: TensileAsk): Promise<TensileAnswer> {
+export async function readMachineFile({ file, encoding, width, gauge, chosen }: TensileAsk): Promise<TensileAnswer> {
+  const isFile = typeof file === 'object' && 'slice' in file
+  const read = isFile ? encodingOf(new Uint8Array(await file.slice(0, 2).arrayBuffer())) : encoding
   return new Promise((done) => {
     const head: string[][] = []
     const loads: number[] = []
@@ -74,6 +78,7 @@ export function readMachineFile({ file, width, gauge, chosen }: TensileAsk): Pro
 
     let asked = false
     Papa.parse<string[]>(file as File, {
+      ...(read === undefined ? {} : { encoding: read }),
       skipEmptyLines: 'greedy',
       chunk: (results, parser) => {
         for (const row of results.data) {

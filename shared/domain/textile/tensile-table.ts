@@ -34,7 +34,13 @@ function unitIn<U extends string>(heading: string, units: readonly U[]): U | nul
   return units.find((unit) => unit.toLowerCase() === (same[said] ?? said)) ?? null
 }
 
-/** Reads headings, and a row of units below them where there is one. What is not recognised is left to be asked. */
+/** A unit named twice counts when both names agree. */
+const agreed = <U extends string>(one: U | null, other: U | null): U | null => (one && other && one !== other ? null : (one ?? other))
+
+/**
+ * Reads headings, and a row of units below them where there is one. What is not recognised, or said in two
+ * ways, is left to be asked.
+ */
 export function recogniseColumns(headings: readonly string[], below: readonly string[] = []): TensileColumns {
   const find = (words: RegExp) => {
     const at = headings.findIndex((heading) => words.test(heading))
@@ -43,7 +49,7 @@ export function recogniseColumns(headings: readonly string[], below: readonly st
   const load = find(LOAD_WORDS)
   const extension = find(LENGTH_WORDS)
   const unitOf = <U extends string>(at: number | null, units: readonly U[]) =>
-    at === null ? null : (unitIn(headings[at]!, units) ?? unitIn(` ${below[at] ?? ''}`, units))
+    at === null ? null : agreed(unitIn(headings[at]!, units), unitIn(` ${below[at] ?? ''}`, units))
   return { load, loadUnit: unitOf(load, TENSILE_LOAD_UNITS), extension, lengthUnit: unitOf(extension, TENSILE_LENGTH_UNITS) }
 }
 

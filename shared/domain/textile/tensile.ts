@@ -1,5 +1,6 @@
 import { mm, newton, newtonPerMetre, strain, type Mm } from '../units/brand'
 import { fail, succeed, type Problem, type Result } from '../units/result'
+import { risingKnots } from './monotone'
 import type { StretchReading, StretchSpecimen, TensileRecord } from './types'
 
 /** A run of a tensile machine: load in N and extension in mm, row by row as they came. */
@@ -84,6 +85,21 @@ function thinned({ loads, extensions }: TensileRun, from: number, to: number, st
   return sums.filter((sum) => sum.count > 0).map((sum) => ({ load: sum.load / sum.count, extension: sum.extension / sum.count }))
 }
 
+/** A loading ends near its largest load; where much less is left at its end, the strip slipped or tore. Setting. */
+const LEAST_AT_TURN = 0.7
+
+function largestLoad({ loads }: TensileRun, { from, turn }: TensileCycle): number {
+  let most = -Infinity
+  for (let i = from; i <= turn; i++) most = Math.max(most, loads[i]!)
+  return most
+}
+
+/** Means that rise in both: where a machine's noise makes the load of neighbours fall, they are pooled, so that none is preferred. */
+function rising(points: readonly { readonly load: number; readonly extension: number }[], zero: number) {
+  const knots = risingKnots(points.map(({ load, extension }) => ({ strain: extension - zero, tension: load })))
+  return knots.slice(1).map(({ strain, tension }) => ({ load: tension, extension: strain + zero }))
+}
+
 const problem = (code: string, message: string, todo: string): { readonly ok: false; readonly problem: Problem } =>
   fail({ code, message, todo })
 
@@ -103,6 +119,12 @@ export function readTensile(run: TensileRun, strip: { readonly width: Mm; readon
   if (!(top.load > 0))
     return problem('run-without-load', 'No load stands at the largest extension.', 'Choose the column of the load, and its sign.')
   if (!(top.extension > 0)) return problem('run-without-extension', 'The strip does not get longer.', 'Choose the column of the extension.')
+  if (top.load < LEAST_AT_TURN * largestLoad(run, last))
+    return problem(
+      'load-falls',
+      'The load falls while the strip gets longer: it slipped in the clamps, tore, or the columns are exchanged.',
+      'Look at the clamps and run another strip, or choose the columns of load and extension.',
+    )
   const zero = run.extensions[0]!
   const readings: StretchReading[] = []
   const keep = (on: StretchReading['on'], points: readonly { load: number; extension: number }[]) => {
@@ -110,10 +132,11 @@ export function readTensile(run: TensileRun, strip: { readonly width: Mm; readon
       if (load > 0 && extension - zero > 0) readings.push({ load: newton(load), length: mm(strip.gauge + extension - zero), on })
     }
   }
-  keep('loading', thinned(run, last.from, last.turn + 1, KEPT.loading))
-  keep('loading', [{ load: run.loads[last.turn]!, extension: run.extensions[last.turn]! }])
+  const turn = { load: run.loads[last.turn]!, extension: run.extensions[last.turn]! }
+  const below = thinned(run, last.from, last.turn + 1, KEPT.loading).filter(({ load }) => load < turn.load)
+  keep('loading', [...rising(below, zero), turn])
   const hasReturn = last.to > last.turn + 1
-  if (hasReturn) keep('return', thinned(run, last.turn, last.to, KEPT.return))
+  if (hasReturn) keep('return', rising(thinned(run, last.turn, last.to, KEPT.return), zero).toReversed())
   const earlier = cycles.slice(0, -1).map((cycle) =>
     thinned(run, cycle.from, cycle.turn + 1, KEPT_OF_EARLIER).map(({ load, extension }) => ({
       strain: strain((extension - zero) / strip.gauge),

@@ -39,6 +39,23 @@ describe('a tensile run', () => {
     expect(tensionAt(curve.value, 0.3) / (0.9 * 300 * 0.3)).toBeCloseTo(1, 1)
   })
 
+  it('is read whatever noise lies in its slack beginning', () => {
+    const { loads, extensions } = run(3, 400, 0)
+    const noisy = loads.map((load, i) => (extensions[i]! < 25 ? 0.02 : load) + 0.05 * Math.sin(i * 78.233) * Math.cos(i * 3.7))
+    const read = readTensile({ loads: noisy, extensions }, strip)
+    if (!read.ok) throw new Error(read.problem.message)
+    const curve = fitLoadCurve({ kind: 'strip', direction: 'crosswise', state: 'dry', specimens: [read.value.specimen] })
+    expect(curve).toMatchObject({ ok: true, value: { specimens: 1 } })
+    const loading = read.value.specimen.readings.filter((one) => one.on === 'loading').map((one) => one.load)
+    expect(loading).toEqual(loading.toSorted((a, b) => a - b))
+  })
+
+  it('that tore or slipped is told from one that held', () => {
+    const extensions = Array.from({ length: 200 }, (_, i) => i)
+    const tore = extensions.map((e) => (e < 150 ? e / 10 : 1))
+    expect(readTensile({ loads: tore, extensions }, strip)).toMatchObject({ ok: false, problem: { code: 'load-falls' } })
+  })
+
   it('takes a run that only rises as one cycle without return', () => {
     const rising = { loads: [0, 1, 2, 3, 4], extensions: [0, 10, 20, 30, 40] }
     const read = readTensile(rising, strip)
@@ -74,6 +91,7 @@ describe('the table of a machine', () => {
     expect(recogniseColumns(['Time (s)', 'Extension (mm)', 'Load (N)'])).toEqual({ load: 2, loadUnit: 'N', extension: 1, lengthUnit: 'mm' })
     expect(recogniseColumns(['Force', 'Elongation'], ['[lbf]', '[%]'])).toEqual({ load: 0, loadUnit: 'lbf', extension: 1, lengthUnit: '%' })
     expect(recogniseColumns(['Force kgf', 'Displacement / inch'])).toEqual({ load: 0, loadUnit: 'kgf', extension: 1, lengthUnit: 'in' })
+    expect(recogniseColumns(['Load (N)', 'Extension (mm)'], ['[kgf]', '[mm]'])).toMatchObject({ loadUnit: null, lengthUnit: 'mm' })
     expect(recogniseColumns(['a', 'b'])).toEqual({ load: null, loadUnit: null, extension: null, lengthUnit: null })
     expect(recogniseColumns(['Load', 'Strain'])).toEqual({ load: 0, loadUnit: null, extension: 1, lengthUnit: null })
   })

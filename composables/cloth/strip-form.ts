@@ -53,6 +53,7 @@ export function freshStripForm(today: string, inches = false): StripForm {
     cycles: '4',
     dwell: '60',
     rest: '30',
+    acceptable: empty(),
     note: '',
     loadUnit: inches ? 'lb' : 'kg',
     hook: entry(0, '0'),
@@ -93,6 +94,7 @@ export function stripFormOf({
     cycles: noted(about.cycles),
     dwell: noted(test.dwell),
     rest: noted(test.rest),
+    acceptable: test.acceptableStrain === undefined ? empty() : known(test.acceptableStrain),
     note: about.note ?? '',
   }
   if (test.kind === 'label') {
@@ -105,7 +107,7 @@ export function stripFormOf({
     const { width, gauge } = test.specimens[0]!
     const runs = test.runs.map((run, i): RunEntry => {
       const specimen = test.specimens[i]!
-      return structuredClone({ ...run, specimen, rested: specimen.restLength === null ? empty() : known(specimen.restLength) }) as RunEntry
+      return { ...run, specimen, rested: specimen.restLength === null ? empty() : known(specimen.restLength) } as unknown as RunEntry
     })
     return { ...common, kind: 'run', runs, widths: form.widths.map(() => known(width)), gauges: form.gauges.map(() => known(gauge)) }
   }
@@ -174,6 +176,7 @@ function protocolOf(form: StripForm): Direction | null {
     ...(form.methodNote.trim() ? { methodNote: form.methodNote.trim() } : {}),
     ...(dwell === null ? {} : { dwell }),
     ...(rest === null ? {} : { rest }),
+    ...(form.acceptable.value === null ? {} : { acceptableStrain: strain(form.acceptable.value) }),
   }
 }
 

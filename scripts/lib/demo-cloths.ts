@@ -164,6 +164,7 @@ const leftOff = (): TestDraft => {
     cycles: '4',
     dwell: '60',
     rest: '30',
+    acceptable: nothing,
     note: 'Weights wanted for the fitting; two more loads to hang.',
     loadUnit: 'g',
     hook: { value: 35 * gram, typed: '35 g' },

@@ -22,6 +22,8 @@ export const testDraft = z.object({
   cycles: short,
   dwell: short,
   rest: short,
+  /** Strain up to which the recovery was found acceptable. */
+  acceptable: entry,
   note: z.string().max(4000),
   loadUnit: z.enum(['N', 'g', 'kg', 'lb']),
   /** Hook and lower clamp, added to every weight. */

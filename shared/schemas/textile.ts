@@ -43,6 +43,7 @@ const protocol = {
   dwell: figure(0, 86_400).optional(),
   rest: figure(0, 100_000).optional(),
   angle: figure(0, 90).optional(),
+  acceptableStrain: ratio(0.01, 6).optional(),
 }
 
 export const stretchTest = mirrors<StretchTest>()(

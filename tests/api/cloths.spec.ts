@@ -32,6 +32,7 @@ const draft: TestDraft = {
   cycles: 'four or so',
   dwell: '60',
   rest: '',
+  acceptable: entry(null),
   note: '',
   loadUnit: 'g',
   hook: entry(0.2, '20 g'),

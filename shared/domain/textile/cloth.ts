@@ -17,7 +17,7 @@ export interface ClothIdentity {
   readonly name: string
   readonly thickness: Mm
   readonly testedOn: string | null
-  /** The strain at which the workroom still found the recovery acceptable; null takes half the tested stretch. */
+  /** The strain at which the workroom still found the recovery acceptable; null takes the test's own, else half the tested stretch. */
   readonly acceptableStrain?: Strain | null
   /** Spread taken with fewer than three specimens; the workroom's setting. */
   readonly fewSpread?: number
@@ -37,7 +37,7 @@ export function layerCloth(identity: ClothIdentity, test: StretchTest): Result<L
   const curve = fitLoadCurve(test, identity.fewSpread)
   if (!curve.ok) return curve
   const figures = testFigures(test)
-  const acceptable = identity.acceptableStrain ?? null
+  const acceptable = identity.acceptableStrain ?? test.acceptableStrain ?? null
   return succeed({
     clothId: identity.clothId,
     name: identity.name,

@@ -154,6 +154,9 @@ function spreadWorking(curve: LoadCurve): Working {
   }
 }
 
+/** Strains nearer than this are the same. */
+const SAME = 1e-9
+
 /** The working behind the residual, the spread, the tested range and the two strain limits of a tested cloth. */
 export function curveFigureWorking(
   cloth: Pick<LayerCloth, 'curve' | 'figures' | 'wearLimit' | 'pullOnLimit'>,
@@ -184,15 +187,17 @@ export function curveFigureWorking(
         source: SOURCE,
         notes: [range],
       }
-    case 'wearLimit':
+    case 'wearLimit': {
+      const found = Math.abs(cloth.wearLimit - WEAR_SHARE * figures.stretch) > SAME
       return {
         title: 'Wear limit',
-        formula: `u = ${WEAR_SHARE} e, unless the workroom found the strain up to which its recovery is acceptable`,
-        inputs: [stretch],
+        formula: found ? 'u = min(strain up to which recovery is acceptable, e max)' : `u = ${WEAR_SHARE} e`,
+        inputs: found ? [ratioInput('u', 'recovery acceptable up to', cloth.wearLimit, 'measured'), tested] : [stretch],
         result: { value: cloth.wearLimit * PERCENT, unit: 'percent' },
-        source: 'a setting without a source; common practice',
+        source: found ? 'the workroom’s own test' : 'a setting without a source; common practice',
         notes: ['A cut is never solved beyond it, whatever hold is asked for.'],
       }
+    }
     case 'pullOnLimit':
       return {
         title: 'Pull-on limit',

@@ -35,7 +35,7 @@ export interface TensileRecord {
 /** What pulled the strip. */
 export type PullWay = 'weights' | 'one load' | 'spring scale' | 'machine'
 
-/** How a test was done, as far as it was noted. Nothing is computed from it but the angle. */
+/** How a test was done, as far as it was noted. Of it only the angle and the acceptable strain are computed with. */
 export interface TestProtocol {
   readonly method?: TestMethod
   readonly methodNote?: string
@@ -45,6 +45,8 @@ export interface TestProtocol {
   readonly rest?: number
   /** Typed direction of the strip, degrees from the lengthwise, 0 to 90; `direction` is then the name nearest to it. */
   readonly angle?: number
+  /** The strain up to which the workroom still found the recovery acceptable, by letting strips go from further and further. */
+  readonly acceptableStrain?: Strain
 }
 
 /** A stretch test of one cloth in one direction and state, as the workroom entered it. */

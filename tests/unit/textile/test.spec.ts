@@ -221,6 +221,18 @@ describe('the working of a test and its curve', () => {
     expect(working.notes.join(' ')).toContain('mean of 3 specimens')
   })
 
+  it('opens a wear limit that the workroom found itself', () => {
+    const found = must(
+      layerCloth({ clothId: 'c', name: 'Invented', thickness: mm(0.5), testedOn: null }, { ...three, acceptableStrain: strain(0.4) }),
+    )
+    expect(found.wearLimit).toBeCloseTo(0.4, 12)
+    expect(curveFigureWorking(found, 'wearLimit')).toMatchObject({ source: 'the workroom’s own test' })
+    const beyond = must(
+      layerCloth({ clothId: 'c', name: 'Invented', thickness: mm(0.5), testedOn: null }, { ...three, acceptableStrain: strain(0.9) }),
+    )
+    expect(beyond.wearLimit).toBeCloseTo(0.5, 12)
+  })
+
   it.each(['residual', 'spread', 'testedTo', 'wearLimit', 'pullOnLimit'] as const)('opens %s', (figure) => {
     const working = curveFigureWorking(cloth, figure)
     const value = { residual: cloth.curve.residual, spread: cloth.curve.spread, testedTo: 0.5, wearLimit: 0.25, pullOnLimit: 0.45 }[figure]

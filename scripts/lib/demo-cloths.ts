@@ -38,14 +38,32 @@ const GAUGE = 100
 const STEPS = 5
 /** Specimens of one cloth differ by a few parts in a hundred. */
 const SPECIMENS = [0.97, 1.04, 1]
+/** Specimens keep a little more or less of their stretch. */
+const KEPT = [1, 1.2, 0.85]
 /** What a return curve lies under the loading one. */
 const ON_RETURN = 0.88
 
 const tenth = (value: number) => Math.round(value * 10) / 10
 const hundredth = (value: number) => Math.round(value * 100) / 100
 
-/** Three strips as a workroom would note them: loads at even steps of length, lengths to half a millimetre, read on the way back too. */
+/** The strain at which a e + b e³ reaches a tension, by halving. */
+function strainUnder(a: number, b: number, tension: number): number {
+  let [low, high] = [0, 5]
+  for (let i = 0; i < 60; i++) {
+    const e = (low + high) / 2
+    if (a * e + b * e ** 3 < tension) low = e
+    else high = e
+  }
+  return low
+}
+
+/** Three strips as a workroom would note them: the same weights on each, lengths to half a millimetre, read on the way back too. */
 export function stripTest({ direction, state, a, b, to, kept }: DemoTest): StretchTest {
+  const half = (length: number) => Math.round(2 * length) / 2
+  const loads = Array.from({ length: STEPS }, (_, i) => {
+    const e = (to * (i + 1)) / STEPS
+    return hundredth(((a * e + b * e ** 3) * WIDTH) / 1000)
+  })
   return {
     kind: 'strip',
     way: 'weights',
@@ -54,18 +72,17 @@ export function stripTest({ direction, state, a, b, to, kept }: DemoTest): Stret
     rest: 30,
     direction,
     state,
-    specimens: SPECIMENS.map((factor) => {
-      const reading = (step: number, on: 'loading' | 'return') => {
-        const e = (to * step) / STEPS
-        const tension = (a * e + b * e ** 3) * factor * (on === 'return' && step < STEPS ? ON_RETURN : 1)
-        return { load: newton(hundredth((tension * WIDTH) / 1000)), length: mm(Math.round(2 * GAUGE * (1 + e)) / 2), on }
+    specimens: SPECIMENS.map((factor, index) => {
+      const reading = (load: number, on: 'loading' | 'return') => {
+        const share = factor * (on === 'return' && load < loads.at(-1)! ? ON_RETURN : 1)
+        return { load: newton(load), length: mm(half(GAUGE * (1 + strainUnder(a * share, b * share, (load * 1000) / WIDTH)))), on }
       }
-      const steps = Array.from({ length: STEPS }, (_, i) => i + 1)
+      const top = strainUnder(a * factor, b * factor, (loads.at(-1)! * 1000) / WIDTH)
       return {
         width: mm(WIDTH),
         gauge: mm(GAUGE),
-        readings: [...steps.map((step) => reading(step, 'loading')), ...steps.toReversed().map((step) => reading(step, 'return'))],
-        restLength: mm(tenth(GAUGE * (1 + to * kept))),
+        readings: [...loads.map((load) => reading(load, 'loading')), ...loads.toReversed().map((load) => reading(load, 'return'))],
+        restLength: mm(half(GAUGE * (1 + top * kept * KEPT[index]!))),
       }
     }),
   }

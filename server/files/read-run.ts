@@ -7,8 +7,26 @@ import type { MachineFileWork } from '../workers/machine-file'
 const LONGEST_MS = 60_000
 const MEMORY = { maxOldGenerationSizeMb: 192 }
 
+/** Threads that read at once; whoever comes then waits for a turn. */
+let free = 2
+const waiting: (() => void)[] = []
+
+async function inTurn<T>(work: () => Promise<T>): Promise<T> {
+  if (free > 0) free--
+  else await new Promise<void>((turn) => waiting.push(turn))
+  try {
+    return await work()
+  } finally {
+    const next = waiting.shift()
+    if (next) next()
+    else free++
+  }
+}
+
 /** Reads a machine's file in a thread of its own, so that no request waits for it. A file that is too much for it is a problem, no crash. */
-export function readRun(work: MachineFileWork): Promise<TensileAnswer> {
+export const readRun = (work: MachineFileWork): Promise<TensileAnswer> => inTurn(() => readInThread(work))
+
+function readInThread(work: MachineFileWork): Promise<TensileAnswer> {
   return new Promise((done) => {
     const worker = new Worker(source, { eval: true, workerData: work, resourceLimits: MEMORY })
     const end = (answer: TensileAnswer) => {

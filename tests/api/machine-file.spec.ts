@@ -90,6 +90,11 @@ describe('a machine’s file', () => {
     expect(await said(flat)).toEqual([422, 'file', expect.stringContaining('does not get longer')])
   })
 
+  it('is read in turn when many come at once', async () => {
+    const answers = await Promise.all(Array.from({ length: 6 }, (_, i) => send(plain(1000 + 100 * i))))
+    expect(answers.map(({ status, body }) => [status, body.rows])).toEqual(Array.from({ length: 6 }, (_, i) => [200, 1000 + 100 * i]))
+  })
+
   it('leaves the server answering while it reads a large one', async () => {
     const large = plain(600_000)
     const base = inject('baseUrl')

@@ -119,7 +119,7 @@ const recutProposal = z.object({
       factor: figure(),
     }),
   ),
-  alterations: z.array(z.object({ id: z.string(), name: z.string(), before: length(), after: length() })),
+  alterations: z.array(z.object({ id: z.string(), name: z.string(), before: length(), after: length(), factor: z.number() })),
 })
 
 /** Equal-hold recut: the garment that fitted and the one with the final layers, each as an input of its solve. */

@@ -15,6 +15,8 @@ export type Command =
   | { readonly kind: 'set-state'; readonly state: ClothState }
   | { readonly kind: 'set-use'; readonly use: Partial<GarmentDocument['use']> }
   | { readonly kind: 'set-layers'; readonly zone: Zone | 'both'; readonly layers: readonly LayerChoice[] }
+  /** The layers of all zones at once: a preset. */
+  | { readonly kind: 'set-plans'; readonly plans: GarmentDocument['plans']; readonly label: string }
   | { readonly kind: 'set-level'; readonly level: LevelId | 'all'; readonly patch: Partial<Omit<LevelChoice, 'level'>> }
   | { readonly kind: 'set-style'; readonly patch: Partial<BodiceStyle> }
   | { readonly kind: 'set-stiffness'; readonly stiffness: Stiffness | null }
@@ -100,6 +102,8 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
       return { ...document, use: { ...document.use, ...command.use } }
     case 'set-layers':
       return { ...document, plans: withLayers(document.plans, command.zone, command.layers) }
+    case 'set-plans':
+      return { ...document, plans: command.plans }
     case 'set-level':
       return {
         ...document,
@@ -206,6 +210,7 @@ function commandWords(command: Command): string {
       return 'alteration removed'
     case 'order-alteration':
       return 'order of alterations'
+    case 'set-plans':
     case 'take-over':
       return command.label
   }

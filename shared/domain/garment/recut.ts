@@ -46,6 +46,8 @@ export interface RecutAlteration {
   readonly name: string
   readonly before: Mm
   readonly after: Mm
+  /** Cloth that the same share of hold takes, final over fitted. */
+  readonly factor: number
 }
 
 export interface RecutProposal {
@@ -119,7 +121,7 @@ function proposalOf(
     const level = levelOfNode(one.role.node, fittedInput.document)
     const factor = level === null ? 1 : (asked.get(level)?.factor ?? 1)
     const after = mm(Math.round(one.dx * factor * 10) / 10)
-    if (after !== one.dx) changed.push({ id: one.id, name: one.name, before: one.dx, after })
+    if (after !== one.dx) changed.push({ id: one.id, name: one.name, before: one.dx, after, factor })
     return { ...one, dx: after }
   })
   const document: GarmentDocument = {

@@ -45,13 +45,13 @@ export function recutWorking({ levels, targets }: Recut, target: RecutTarget, st
 }
 
 /** The working behind an alteration taken over in hold: how many millimetres it becomes. */
-export function recutAlterationWorking(alteration: RecutAlteration, factor: number): Working {
+export function recutAlterationWorking(alteration: RecutAlteration): Working {
   return {
     title: `${alteration.name}, in the final layers`,
     formula: 'after = before × give of the final plan / give of the fitted plan',
     inputs: [
       input('before', 'On the fitted version', alteration.before, 'mm', 'chosen'),
-      input('factor', 'Cloth that the same share of hold takes, final over fitted', factor, 'ratio', 'computed'),
+      input('factor', 'Cloth that the same share of hold takes, final over fitted', alteration.factor, 'ratio', 'computed'),
     ],
     result: { value: alteration.after, unit: 'mm' },
     source: 'derived: give is the cloth that 5 % more hold takes away, limits left out',

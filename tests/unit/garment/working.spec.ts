@@ -114,7 +114,7 @@ describe('the working behind a recut', () => {
   })
 
   it('gives an alteration in the final layers again', () => {
-    const working = recutAlterationWorking({ id: 'a', name: 'side seam', before: mm(4), after: mm(2.6) }, 0.65)
+    const working = recutAlterationWorking({ id: 'a', name: 'side seam', before: mm(4), after: mm(2.6), factor: 0.65 })
     whole(working)
     expect(working.result.value).toBeCloseTo(given(working, 'before') * given(working, 'factor'), 9)
   })

@@ -1,4 +1,4 @@
-import type { Alteration, PointRole } from '#shared/domain/draft/types'
+import type { Alteration, MoveAlteration, PointRole } from '#shared/domain/draft/types'
 import { sameRole } from '#shared/domain/document/commands'
 import type { Mm } from '#shared/domain/units/brand'
 import { mm } from '#shared/domain/units/brand'
@@ -23,6 +23,9 @@ export const moveText = (value: number, unit: BoardUnit): string => formatLength
 /** What the alterations that are on move a point by, mm in the piece's frame; with `carry` given only those of that way of carrying. */
 export function moveOf(alterations: readonly Alteration[], role: PointRole, carry?: boolean): { readonly dx: number; readonly dy: number } {
   return alterations
-    .filter((alteration) => alteration.on && sameRole(alteration.role, role) && (carry === undefined || alteration.carry === carry))
+    .filter(
+      (one): one is MoveAlteration =>
+        one.kind === 'move' && one.on && sameRole(one.role, role) && (carry === undefined || one.carry === carry),
+    )
     .reduce((sum, { dx, dy }) => ({ dx: sum.dx + dx, dy: sum.dy + dy }), { dx: 0, dy: 0 })
 }

@@ -1,11 +1,9 @@
-import type { DraftPiece, EdgeId, EdgeNode, PieceEdge, PieceId, PointRole, SeamComparison } from '#shared/domain/draft/types'
+import type { Alteration, DraftPiece, EdgeId, EdgeNode, PieceEdge, PieceId, PointRole, SeamComparison } from '#shared/domain/draft/types'
+import { TRUE_WITHIN } from '#shared/domain/draft/truing'
 import type { Mm } from '#shared/domain/units/brand'
 import { formatLength } from '#shared/domain/units/format'
 
 export type BoardUnit = 'cm' | 'in'
-
-/** Mates count as true up to this difference, mm. */
-export const SEAM_TRUE = 0.5
 
 const PIECE_NAMES: Readonly<Record<PieceId, string>> = {
   'front-centre': 'front centre',
@@ -40,11 +38,11 @@ export const EDGE_KIND_WORDS: Readonly<Record<PieceEdge['kind'], string>> = {
 export const fineLength = (length: number, unit: BoardUnit): string =>
   formatLength(length as Mm, unit === 'in' ? 'in' : 'mm', unit === 'in' ? 3 : 1)
 
-export const isTrue = (seam: Pick<SeamComparison, 'difference'>): boolean => Math.abs(seam.difference) <= SEAM_TRUE
+export const isTrue = (seam: Pick<SeamComparison, 'difference'>): boolean => Math.abs(seam.difference) <= TRUE_WITHIN
 
 /** `true`, or `off by 1.2 mm`. */
 export const seamState = (difference: number, unit: BoardUnit): string =>
-  Math.abs(difference) <= SEAM_TRUE ? 'true' : `off by ${fineLength(Math.abs(difference), unit)}`
+  Math.abs(difference) <= TRUE_WITHIN ? 'true' : `off by ${fineLength(Math.abs(difference), unit)}`
 
 /** `out 4.0 mm, up 1.5 mm`: a displacement in the piece's frame. */
 export function moveWords(dx: number, dy: number, unit: BoardUnit): string {
@@ -64,4 +62,16 @@ export function edgePoints(edge: PieceEdge): { readonly node: EdgeNode; readonly
       edge.path[index]?.kind === 'cubic' ? ('after' as const) : null,
     ].filter((handle) => handle !== null),
   }))
+}
+
+/** What an alteration does, with its amount. */
+export function alterationWords(alteration: Alteration, unit: BoardUnit): string {
+  switch (alteration.kind) {
+    case 'move':
+      return `${moveWords(alteration.dx, alteration.dy, unit)}${alteration.carry ? ', carried to the mate' : ''}`
+    case 'girth':
+      return `${alteration.amount < 0 ? 'taken in' : 'let out'} ${fineLength(Math.abs(alteration.amount), unit)} in all`
+    case 'length':
+      return `${fineLength(Math.abs(alteration.by), unit)} ${alteration.by < 0 ? 'shorter' : 'longer'}`
+  }
 }

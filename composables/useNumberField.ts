@@ -16,8 +16,8 @@ import type { Result } from '#shared/domain/units/result'
 /** Largest difference at which typed text still stands for a stored value: below what any tape or scale shows. */
 const SAME = 1e-6
 
-/** What a number field holds. Values are in the domain's unit: mm, N, kg, a ratio, degrees, a count, years, Pa, N/m; `plain` any number. */
-export type NumberKind = 'length' | 'load' | 'mass' | 'percent' | 'degree' | 'count' | 'year' | 'pressure' | 'tension' | 'plain'
+/** What a number field holds. Values are in the domain's unit: mm (`signed` takes amounts below 0), N, kg, a ratio, degrees, a count, years, Pa, N/m; `plain` any number. */
+export type NumberKind = 'length' | 'signed' | 'load' | 'mass' | 'percent' | 'degree' | 'count' | 'year' | 'pressure' | 'tension' | 'plain'
 export type LengthUnit = 'cm' | 'in' | 'mm'
 export type LoadUnit = 'N' | 'g' | 'kg' | 'lb'
 
@@ -31,6 +31,8 @@ export function readNumber(text: string, kind: NumberKind, units: NumberFieldUni
   switch (kind) {
     case 'length':
       return parseLength(text, units.length)
+    case 'signed':
+      return parseLength(text, units.length, { signed: true })
     case 'load':
       return parseLoad(text, units.load)
     case 'mass':
@@ -62,6 +64,7 @@ function writeLength(value: Mm, unit: LengthUnit): string {
 export function writeNumber(value: number, kind: NumberKind, units: NumberFieldUnits): string {
   switch (kind) {
     case 'length':
+    case 'signed':
       return writeLength(value as Mm, units.length)
     case 'load':
       if (units.load === 'N') return `${plainDecimal(value, 3)} N`

@@ -95,17 +95,33 @@ export const levelWidths = mirrors<LevelWidths>()(
   z.object({ level: levelId, front: length(0, 2500), back: length(0, 2500), gapFront: length(0, 1000), gapBack: length(0, 1000) }),
 )
 
+const named = {
+  id: z.string().min(1).max(60),
+  name: z.string().trim().min(1, 'Give the alteration a name.').max(120),
+  on: z.boolean(),
+}
 export const alteration = mirrors<Alteration>()(
-  z.object({
-    id: z.string().min(1).max(60),
-    kind: z.literal('move'),
-    name: z.string().trim().min(1, 'Give the alteration a name.').max(120),
-    role: z.object({ piece: pieceId, edge: edgeId, node: role, handle: z.enum(['before', 'after']).optional() }),
-    dx: length(-500, 500),
-    dy: length(-500, 500),
-    carry: z.boolean(),
-    on: z.boolean(),
-  }),
+  z.discriminatedUnion('kind', [
+    z.object({
+      ...named,
+      kind: z.literal('move'),
+      role: z.object({ piece: pieceId, edge: edgeId, node: role, handle: z.enum(['before', 'after']).optional() }),
+      dx: length(-500, 500),
+      dy: length(-500, 500),
+      carry: z.boolean(),
+    }),
+    z.object({
+      ...named,
+      kind: z.literal('girth'),
+      level: levelId,
+      amount: length(-500, 500),
+      seams: z
+        .array(z.object({ piece: pieceId, edge: edgeId }))
+        .min(1, 'Choose a seam.')
+        .max(40),
+    }),
+    z.object({ ...named, kind: z.literal('length'), below: levelId, by: length(-300, 300) }),
+  ]),
 )
 
 const segment = mirrors<Segment>()(

@@ -1,5 +1,6 @@
 /** From a mock-up that fitted to the final layers, and what-if: on the demo's own garments, in a real browser. */
 import { expect, test, type Page } from '@playwright/test'
+import type { MoveAlteration } from '../../shared/domain/draft/types'
 import type { RouteAnswer } from '../../shared/schemas/routes'
 import { accessible, garmentOf, signedIn } from './screen'
 
@@ -37,7 +38,7 @@ test('the two-layer mock-up that fits is strong at the waist when copied into fo
     const fitted = mockUp.solution!.rings.find((one) => one.level === ring.level)!
     expect(Math.abs(ring.pressure / fitted.pressure - 1)).toBeLessThan(0.02)
   }
-  expect(after.document.alterations[0]!.dx).toBeGreaterThan(-3)
+  expect((after.document.alterations[0] as MoveAlteration).dx).toBeGreaterThan(-3)
   await page.getByRole('button', { name: 'Undo' }).click()
   await expect.poll(async () => (await copyOf(page, id)).document.alterations).toEqual(before.document.alterations)
 })
@@ -150,4 +151,49 @@ test('a plan is started from, a zone gets layers of its own, and each figure of 
   const undo = page.getByRole('button', { name: 'Undo' })
   while (await undo.isEnabled()) await undo.click()
   await expect.poll(async () => (await copyOf(page, id)).document.plans).toEqual(before.document.plans)
+})
+
+test('typed alterations change the rings at once; what is no longer true is said with one action that mends it', async ({
+  page,
+  baseURL,
+}) => {
+  const id = await openBench(page, baseURL!, 'LS-040', 'draft')
+  const before = await copyOf(page, id)
+  const cutOf = async () => (await copyOf(page, id)).solution!.rings.find((ring) => ring.level === 'waist')!.cut
+  const cut = await cutOf()
+
+  await page.getByRole('button', { name: 'Let out or take in' }).click()
+  await page.getByLabel('Whole girth').fill('-12 mm')
+  await page.getByRole('checkbox', { name: /^Front princess seam/ }).check()
+  await accessible(page)
+  await page.getByRole('button', { name: 'Add the alteration' }).click()
+  const list = page.getByRole('region', { name: 'Alterations' })
+  await expect(list.getByRole('listitem')).toContainText('taken in 12.0 mm in all')
+  await expect.poll(cutOf).toBeCloseTo(cut - 12, 0)
+
+  await page.getByRole('button', { name: 'Lengthen or shorten' }).click()
+  await page.getByRole('textbox', { name: 'By' }).fill('-400 mm')
+  await expect(page.getByText('At most 300 mm; below 0 shortens.')).toBeVisible()
+  await page.getByRole('textbox', { name: 'By' }).fill('8 mm')
+  await page.getByRole('button', { name: 'Add the alteration' }).click()
+  await expect(list.getByRole('listitem')).toHaveCount(2)
+  await list.getByRole('button', { name: /^Apply length.* earlier/ }).click()
+  await expect(list.getByRole('listitem').first()).toContainText('8.0 mm longer')
+
+  const truing = page.getByRole('region', { name: 'To be made true' })
+  await expect(truing).toBeHidden()
+  const parts = page.getByRole('region', { name: 'Pieces and points' })
+  await parts.getByRole('button', { name: /^Side front/ }).click()
+  await parts.getByRole('button', { name: /^side seam/ }).click()
+  await parts.getByRole('button', { name: 'waist', exact: true }).click()
+  await page.getByRole('switch', { name: 'Carry to the mate' }).click()
+  await page.getByRole('textbox', { name: 'Out' }).fill('30')
+  await page.getByRole('textbox', { name: 'Out' }).press('Enter')
+  await expect(truing).toContainText(/Side seam: .* longer on side front|Side seam: .* shorter on side front/)
+  await accessible(page)
+  await truing.getByRole('button', { name: /^Carry .* to the mate$/ }).click()
+  await expect(truing).toBeHidden()
+  const undo = page.getByRole('button', { name: 'Undo' })
+  while (await undo.isEnabled()) await undo.click()
+  await expect.poll(async () => (await copyOf(page, id)).document.alterations).toEqual(before.document.alterations)
 })

@@ -95,6 +95,21 @@ export const seamsDiffer = finding(
   'True the seam, or carry the alteration to its mate.',
 )
 
+export const edgeCorner = finding(
+  'edge-corner',
+  'caution',
+  'An edge has a corner where a seam crosses it.',
+  DESIGN,
+  'Run the edge on, or leave the corner if it is meant.',
+)
+export const foldBent = finding(
+  'fold-bent',
+  'caution',
+  'A fold is no longer straight.',
+  'derived',
+  'Bring the point back to the fold, or make the fold a seam.',
+)
+
 /** Solve, draft and read back did not settle. */
 export const notSettled = defineCaution<{ readonly rounds: number }>('not-settled', {
   severity: 'caution',

@@ -1,6 +1,6 @@
 import type { LevelId } from '../body/types'
 import type { Acknowledged } from '../cautions/acknowledge'
-import type { Alteration, BodiceStyle, PointRole } from '../draft/types'
+import type { Alteration, BodiceStyle, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from '../draft/types'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothState } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
@@ -31,15 +31,18 @@ export type Command =
       readonly id: string
     }
   | { readonly kind: 'set-move'; readonly role: PointRole; readonly dx: Mm; readonly dy: Mm; readonly carry: boolean; readonly id: string }
-  | {
-      readonly kind: 'change-alteration'
-      readonly id: string
-      readonly patch: Partial<Pick<Alteration, 'name' | 'dx' | 'dy' | 'carry' | 'on'>>
-    }
+  /** Further alterations after those that stand: a let-out, a lengthening, what trues a seam. One step, however many. */
+  | { readonly kind: 'add-alterations'; readonly alterations: readonly Alteration[]; readonly label: string }
+  | { readonly kind: 'change-alteration'; readonly id: string; readonly patch: AlterationPatch }
   | { readonly kind: 'remove-alteration'; readonly id: string }
   | { readonly kind: 'order-alteration'; readonly id: string; readonly to: number }
   /** A whole document in place of this one: a recut, a trial. */
   | { readonly kind: 'take-over'; readonly document: GarmentDocument; readonly label: string }
+
+/** What may be changed of an alteration that stands; what its kind does not have is left out. */
+export type AlterationPatch = Partial<
+  Pick<MoveAlteration, 'name' | 'on' | 'dx' | 'dy' | 'carry'> & Pick<GirthAlteration, 'amount' | 'seams'> & Pick<LengthAlteration, 'by'>
+>
 
 /** What a command changed, key by key, so that it can be undone and redone without the command. */
 export interface DocumentDiff {
@@ -129,10 +132,16 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
         alterations: moved(document.alterations, command),
         ...(document.alterations.length === 0 ? { alteredIn: planKey(document.plans) } : {}),
       }
+    case 'add-alterations':
+      return {
+        ...document,
+        alterations: [...document.alterations, ...command.alterations],
+        ...(document.alterations.length === 0 ? { alteredIn: planKey(document.plans) } : {}),
+      }
     case 'change-alteration':
       return {
         ...document,
-        alterations: document.alterations.map((one) => (one.id === command.id ? { ...one, ...command.patch } : one)),
+        alterations: document.alterations.map((one) => (one.id === command.id ? patched(one, command.patch) : one)),
       }
     case 'remove-alteration':
       return { ...document, alterations: document.alterations.filter((one) => one.id !== command.id) }
@@ -151,11 +160,18 @@ function withLayers(plans: GarmentDocument['plans'], zone: Zone | 'both', layers
   return others
 }
 
+function patched(alteration: Alteration, patch: AlterationPatch): Alteration {
+  const own = Object.entries(patch).filter(([key]) => key in alteration)
+  return { ...alteration, ...Object.fromEntries(own) }
+}
+
 type MoveCommand = Extract<Command, { kind: 'move-point' | 'set-move' }>
 
 /** One alteration a point and way of carrying: a further move of the same point adds to it, an exact one replaces it. */
 function moved(alterations: readonly Alteration[], command: MoveCommand): readonly Alteration[] {
-  const standing = alterations.find((one) => one.on && one.carry === command.carry && sameRole(one.role, command.role))
+  const standing = alterations.find(
+    (one): one is MoveAlteration => one.kind === 'move' && one.on && one.carry === command.carry && sameRole(one.role, command.role),
+  )
   if (standing) {
     const base = command.kind === 'set-move' ? { dx: 0, dy: 0 } : standing
     const dx = mm(base.dx + command.dx)
@@ -211,6 +227,7 @@ function commandWords(command: Command): string {
     case 'order-alteration':
       return 'order of alterations'
     case 'set-plans':
+    case 'add-alterations':
     case 'take-over':
       return command.label
   }

@@ -1,13 +1,15 @@
 import { pathEndTangent, pathStartTangent } from '../geometry/path'
 import { pointAdd, vectorDot, vectorRight, vectorUnit } from '../geometry/point'
-import { lineSegment } from '../geometry/segment'
-import type { Path, Point, Segment } from '../geometry/types'
+import type { Path, Point } from '../geometry/types'
 import { mm } from '../units/brand'
 import type { Problem } from '../units/result'
-import { armholeLength, levelHeightsOf, readFindings } from './bodice'
-import { outlineIsSound, readPiece } from './piece'
+import { girthMoves, withMoves } from './alter-girth'
+import { heightsAfter, LEAST_BETWEEN, lengthened, mostShortened, stretchBelow } from './alter-length'
+import { armholeLength, levelHeightsOf, readFindings, withLevelHeights } from './bodice'
+import { moveIn, placeOf, withEdges, type Place } from './edge-moves'
+import { outlineIsSound, readPiece, type LevelHeight } from './piece'
 import { compareSeams, matesTravelAlike, withNotches } from './seams'
-import type { Alteration, Draft, DraftPiece, PieceEdge, PieceId, PointRole } from './types'
+import type { Alteration, Draft, DraftPiece, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from './types'
 
 /** What became of one alteration. */
 export interface AlterationEffect {
@@ -28,76 +30,6 @@ export interface AlteredDraft {
   readonly parked: readonly Alteration[]
   /** One for each alteration, in order. */
   readonly effects: readonly AlterationEffect[]
-}
-
-interface Place {
-  readonly piece: DraftPiece
-  readonly edge: PieceEdge
-  /** Index of the node along the edge. */
-  readonly index: number
-}
-
-function placeOf(pieces: readonly DraftPiece[], role: PointRole): Place | null {
-  const piece = pieces.find(({ id }) => id === role.piece)
-  const edge = piece?.edges.find(({ id }) => id === role.edge)
-  const index = edge?.nodes.findIndex(({ name }) => name === role.node) ?? -1
-  if (piece === undefined || edge === undefined || index < 0) return null
-  if (role.handle === undefined) return { piece, edge, index }
-  const segment = edge.path[role.handle === 'before' ? index - 1 : index]
-  return segment?.kind === 'cubic' ? { piece, edge, index } : null
-}
-
-function shifted(segment: Segment, by: Point, end: 'from' | 'to'): Segment {
-  if (segment.kind === 'line') {
-    return end === 'from' ? lineSegment(pointAdd(segment.from, by), segment.to) : lineSegment(segment.from, pointAdd(segment.to, by))
-  }
-  return end === 'from'
-    ? { ...segment, from: pointAdd(segment.from, by), c1: pointAdd(segment.c1, by) }
-    : { ...segment, to: pointAdd(segment.to, by), c2: pointAdd(segment.c2, by) }
-}
-
-/** An edge with one node moved; the handles on both sides of it go along. */
-function moveNode(edge: PieceEdge, index: number, by: Point): PieceEdge {
-  return {
-    ...edge,
-    nodes: edge.nodes.map((node, own) => (own === index ? { ...node, at: pointAdd(node.at, by) } : node)),
-    path: edge.path.map((segment, own) => {
-      if (own === index) return shifted(segment, by, 'from')
-      return own === index - 1 ? shifted(segment, by, 'to') : segment
-    }),
-  }
-}
-
-function moveHandle(edge: PieceEdge, index: number, handle: 'before' | 'after', by: Point): PieceEdge {
-  const place = handle === 'before' ? index - 1 : index
-  return {
-    ...edge,
-    path: edge.path.map((segment, own) => {
-      if (own !== place || segment.kind === 'line') return segment
-      return handle === 'before' ? { ...segment, c2: pointAdd(segment.c2, by) } : { ...segment, c1: pointAdd(segment.c1, by) }
-    }),
-  }
-}
-
-/** The edges of a piece with one point moved; a corner is the last node of one edge and the first of the next, and both follow. */
-function moveIn({ piece, edge, index }: Place, handle: PointRole['handle'], by: Point): readonly PieceEdge[] {
-  const edges = [...piece.edges]
-  const place = edges.indexOf(edge)
-  if (handle !== undefined) {
-    edges[place] = moveHandle(edge, index, handle, by)
-    return edges
-  }
-  edges[place] = moveNode(edge, index, by)
-  if (index === 0) {
-    const before = (place + edges.length - 1) % edges.length
-    const own = edges[before] as PieceEdge
-    edges[before] = moveNode(own, own.nodes.length - 1, by)
-  }
-  if (index === edge.nodes.length - 1) {
-    const after = (place + 1) % edges.length
-    edges[after] = moveNode(edges[after] as PieceEdge, 0, by)
-  }
-  return edges
 }
 
 /** Direction of travel along an edge at a node; between two segments the mean of both. */
@@ -133,9 +65,6 @@ function carried(
   return { role: mateRole, by: { x: there.x * along + normal.x * outwards, y: there.y * along + normal.y * outwards } }
 }
 
-const replaced = (pieces: readonly DraftPiece[], id: PieceId, edges: readonly PieceEdge[]): readonly DraftPiece[] =>
-  pieces.map((piece) => (piece.id === id ? { ...piece, edges } : piece))
-
 const effect = (id: string, state: AlterationEffect['state'], rest: Partial<AlterationEffect> = {}): AlterationEffect => ({
   id,
   state,
@@ -145,56 +74,103 @@ const effect = (id: string, state: AlterationEffect['state'], rest: Partial<Alte
   ...rest,
 })
 
-function applyOne(
-  pieces: readonly DraftPiece[],
-  alteration: Alteration,
-): { readonly pieces: readonly DraftPiece[]; readonly effect: AlterationEffect } {
+/** What alterations work on: the pieces, and where the levels lie on them. */
+interface Altered {
+  readonly pieces: readonly DraftPiece[]
+  readonly heights: readonly LevelHeight[]
+}
+
+interface Step extends Altered {
+  readonly effect: AlterationEffect
+}
+
+const refused = (now: Altered, { id }: Alteration, problem: Problem): Step => ({ ...now, effect: effect(id, 'refused', { problem }) })
+
+/** The step, unless it makes an outline cross itself: then the pieces stay and the piece is named. */
+function unlessCrossed(now: Altered, next: Altered, alteration: Alteration, done: AlterationEffect): Step {
+  const crossed = next.pieces.find((piece, index) => piece.edges !== now.pieces[index]?.edges && !outlineIsSound(piece.edges))
+  if (crossed === undefined) return { ...next, effect: done }
+  return refused(now, alteration, {
+    code: 'alteration-crosses',
+    message: `“${alteration.name}” would make the outline of ${crossed.name.toLowerCase()} cross itself.`,
+    todo:
+      alteration.kind === 'move' ? 'Move the point less far, or switch the alteration off.' : 'Take a smaller amount, or switch it off.',
+    at: crossed.id,
+  })
+}
+
+function applyMove(now: Altered, alteration: MoveAlteration): Step {
   const { id, role } = alteration
-  if (!alteration.on) return { pieces, effect: effect(id, 'off') }
+  const { pieces } = now
   const place = placeOf(pieces, role)
-  if (place === null) return { pieces, effect: effect(id, 'parked') }
+  if (place === null) return { ...now, effect: effect(id, 'parked') }
   const by = { x: alteration.dx, y: alteration.dy }
   const mate = alteration.carry ? carried(pieces, place, role, by) : null
-  let next = replaced(pieces, role.piece, moveIn(place, role.handle, by))
-  if (mate !== null) next = replaced(next, mate.role.piece, moveIn(placeOf(next, mate.role) as Place, mate.role.handle, mate.by))
-  const touched = [role.piece, ...(mate === null ? [] : [mate.role.piece])]
-  const crossed = next.find((piece) => touched.includes(piece.id) && !outlineIsSound(piece.edges))
-  if (crossed !== undefined || !Number.isFinite(by.x) || !Number.isFinite(by.y)) {
-    const piece = crossed ?? place.piece
-    const problem: Problem = {
-      code: 'alteration-crosses',
-      message: `“${alteration.name}” would make the outline of ${piece.name.toLowerCase()} cross itself.`,
-      todo: 'Move the point less far, or switch the alteration off.',
-      at: piece.id,
-    }
-    return { pieces, effect: effect(id, 'refused', { problem }) }
-  }
+  let next = withEdges(pieces, role.piece, moveIn(place, role.handle, by))
+  if (mate !== null) next = withEdges(next, mate.role.piece, moveIn(placeOf(next, mate.role) as Place, mate.role.handle, mate.by))
   const seam = place.edge.mate !== null && place.edge.mate.piece !== role.piece
-  return {
-    pieces: next,
-    effect: effect(id, 'applied', {
-      moved: mate === null ? [role] : [role, mate.role],
-      notCarried: alteration.carry && seam && mate === null,
-    }),
+  const done = effect(id, 'applied', {
+    moved: mate === null ? [role] : [role, mate.role],
+    notCarried: alteration.carry && seam && mate === null,
+  })
+  return unlessCrossed(now, { ...now, pieces: next }, alteration, done)
+}
+
+function applyGirth(now: Altered, alteration: GirthAlteration): Step {
+  const moves = girthMoves(now.pieces, alteration)
+  if (moves === null) return { ...now, effect: effect(alteration.id, 'parked') }
+  const done = effect(alteration.id, 'applied', { moved: moves.map(({ role }) => role) })
+  return unlessCrossed(now, { ...now, pieces: withMoves(now.pieces, moves) }, alteration, done)
+}
+
+function applyLength(now: Altered, alteration: LengthAlteration): Step {
+  const stretch = stretchBelow(now.heights, alteration)
+  if (stretch === null) return { ...now, effect: effect(alteration.id, 'parked') }
+  const most = mostShortened(stretch)
+  if (alteration.by < most) {
+    return refused(now, alteration, {
+      code: 'alteration-too-short',
+      message: `“${alteration.name}” would bring two levels nearer than ${LEAST_BETWEEN} mm.`,
+      todo: `Shorten it by ${Math.floor(-most)} mm at most.`,
+      at: alteration.below,
+    })
+  }
+  const next = {
+    pieces: lengthened(now.pieces, stretch, alteration.by),
+    heights: heightsAfter(now.heights, stretch, alteration.by),
+  }
+  return unlessCrossed(now, next, alteration, effect(alteration.id, 'applied'))
+}
+
+function applyOne(now: Altered, alteration: Alteration): Step {
+  if (!alteration.on) return { ...now, effect: effect(alteration.id, 'off') }
+  switch (alteration.kind) {
+    case 'move':
+      return applyMove(now, alteration)
+    case 'girth':
+      return applyGirth(now, alteration)
+    case 'length':
+      return applyLength(now, alteration)
   }
 }
 
 /**
- * A draft with named moves of points and handles, in order. A role that the draft no longer has parks its alteration; a
- * move that would make an outline cross itself is refused and says which piece. Seams, levels, notches, cutting lines,
- * the armhole and what is said of it are read again; levels keep their heights. The draft given stays as it is.
+ * A draft with named operations on its roles, in order. One whose role the draft no longer has is parked, never moved to a neighbour; one
+ * that would make an outline cross itself is refused and says which piece. Seams, levels, notches, cutting lines, the armhole and what is
+ * said of it are read again. Levels keep their heights but for what is lengthened. The draft given stays as it is.
  */
 export function applyAlterations(draft: Draft, alterations: readonly Alteration[]): AlteredDraft {
-  let pieces = draft.pieces
+  const before = levelHeightsOf(draft)
+  let now: Altered = { pieces: draft.pieces, heights: before }
   const effects: AlterationEffect[] = []
   for (const alteration of alterations) {
-    const step = applyOne(pieces, alteration)
-    pieces = step.pieces
-    effects.push(step.effect)
+    const { effect: done, ...next } = applyOne(now, alteration)
+    now = next
+    effects.push(done)
   }
   const parked = alterations.filter((_, index) => effects[index]?.state === 'parked')
+  const { pieces, heights } = now
   if (pieces === draft.pieces) return { draft, parked, effects }
-  const heights = levelHeightsOf(draft)
   const read = withNotches(pieces.map((piece, index) => (piece === draft.pieces[index] ? piece : readPiece(piece, heights))))
   const stays = draft.findings.filter(({ code }) => code !== 'armhole-aim-off' && code !== 'piece-narrow')
   return {
@@ -204,6 +180,7 @@ export function applyAlterations(draft: Draft, alterations: readonly Alteration[
       seams: compareSeams(read),
       findings: [...stays, ...readFindings(read, draft.armhole.aim)],
       armhole: { length: mm(armholeLength(read)), aim: draft.armhole.aim },
+      frame: heights === before ? draft.frame : withLevelHeights(draft.frame, heights),
     },
     parked,
     effects,

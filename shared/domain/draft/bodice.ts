@@ -154,6 +154,12 @@ export function levelHeightsOf(draft: Draft): readonly LevelHeight[] {
   })
 }
 
+/** A draft's frame with its levels at other heights. */
+export const withLevelHeights = (frame: Draft['frame'], heights: readonly LevelHeight[]): Draft['frame'] => ({
+  ...frame,
+  ...Object.fromEntries(heights.map(({ level, y }) => [levelName(level), { x: 0, y }])),
+})
+
 /** Length of the armhole of both sides together, mm. */
 export function armholeLength(pieces: readonly DraftPiece[]): number {
   return pathLength(edgeOf(pieces, 'side-front', 'armhole').path) + pathLength(edgeOf(pieces, 'side-back', 'armhole').path)

@@ -147,15 +147,4 @@ export interface PointRole {
   readonly handle?: 'before' | 'after'
 }
 
-/** A named move of one point or handle, which survives a redraft. Displacement in mm in the piece's frame. */
-export interface Alteration {
-  readonly id: string
-  readonly kind: 'move'
-  readonly name: string
-  readonly role: PointRole
-  readonly dx: Mm
-  readonly dy: Mm
-  /** Carry to the mate: the same amount outwards and along the seam there. */
-  readonly carry: boolean
-  readonly on: boolean
-}
+export type { Alteration, GirthAlteration, LengthAlteration, MoveAlteration, SeamRole } from './alteration'

@@ -1,10 +1,8 @@
 import { cautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
 import type { AlterationEffect } from '../draft/alterations'
+import { bentFolds, CORNER_WITHIN, edgeCorners, TRUE_WITHIN } from '../draft/truing'
 import type { Alteration, Draft, DraftFinding } from '../draft/types'
-
-/** Mates may differ by this much and still be true, mm. Invariant of the draft. */
-const TRUE_WITHIN = 0.5
 
 const BY_CODE = new Map(
   [
@@ -47,6 +45,32 @@ export function draftCautions(facts: {
       cautions.seamsDiffer(
         { kind: 'piece', piece, edge },
         { message: `${seam.name}: its two edges differ by ${by} mm.`, value: seam.difference, unit: 'mm', limit: TRUE_WITHIN },
+      ),
+    )
+  }
+  for (const corner of edgeCorners(draft.pieces, draft.seams)) {
+    if (Math.abs(corner.angle) <= CORNER_WITHIN) continue
+    found.push(
+      cautions.edgeCorner(
+        { kind: 'piece', piece: corner.a.piece, edge: corner.a.edge },
+        {
+          message: `${corner.seam.name}: the ${corner.a.edge} has a corner of ${Math.abs(corner.angle).toFixed(1)}° where it crosses.`,
+          value: corner.angle,
+          unit: 'degree',
+          limit: CORNER_WITHIN,
+        },
+      ),
+    )
+  }
+  for (const { role, off } of bentFolds(draft.pieces)) {
+    found.push(
+      cautions.foldBent(
+        { kind: 'piece', piece: role.piece, edge: role.edge, node: role.node },
+        {
+          message: `A point of the fold stands ${Math.abs(off).toFixed(1)} mm off it: it can no longer be cut on the fold.`,
+          value: off,
+          unit: 'mm',
+        },
       ),
     )
   }

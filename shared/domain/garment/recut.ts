@@ -118,11 +118,13 @@ function proposalOf(
 
   const changed: RecutAlteration[] = []
   const alterations: Alteration[] = fittedInput.document.alterations.map((one) => {
-    const level = levelOfNode(one.role.node, fittedInput.document)
+    if (one.kind === 'length') return one
+    const level = one.kind === 'girth' ? one.level : levelOfNode(one.role.node, fittedInput.document)
     const factor = level === null ? 1 : (asked.get(level)?.factor ?? 1)
-    const after = mm(Math.round(one.dx * factor * 10) / 10)
-    if (after !== one.dx) changed.push({ id: one.id, name: one.name, before: one.dx, after, factor })
-    return { ...one, dx: after }
+    const before = one.kind === 'girth' ? one.amount : one.dx
+    const after = mm(Math.round(before * factor * 10) / 10)
+    if (after !== before) changed.push({ id: one.id, name: one.name, before, after, factor })
+    return one.kind === 'girth' ? { ...one, amount: after } : { ...one, dx: after }
   })
   const document: GarmentDocument = {
     ...final.document,

@@ -92,7 +92,7 @@ describe('list beside the board', () => {
 describe('seams and alterations', () => {
   it('says of every seam whether it is true, by how much it is off, and the lengths', async () => {
     const wrapper = await mountSuspended(SeamTable, {
-      props: { seams: draft.seams, unit: 'cm', selection: front },
+      props: { seams: draft.seams, pieces: draft.pieces, unit: 'cm', selection: front },
       attachTo: document.body,
     })
     mounted.push(wrapper)

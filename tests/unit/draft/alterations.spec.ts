@@ -1,14 +1,14 @@
 import { describe, expect, it } from 'vitest'
 import { applyAlterations } from '../../../shared/domain/draft/alterations'
 import { baseStyle } from '../../../shared/domain/draft/style'
-import type { Alteration, Draft, PointRole } from '../../../shared/domain/draft/types'
+import type { Draft, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from '../../../shared/domain/draft/types'
 import { mm } from '../../../shared/domain/units/brand'
 import { bodyOf, draftOf, widthsOf } from '../../fixtures/draft-inputs'
 
 const body = bodyOf()
 const draft = draftOf({ body, style: baseStyle(), widths: widthsOf(body, { front: 0.1, back: 0.14 }) })
 
-const move = (role: PointRole, dx: number, dy: number, rest: Partial<Alteration> = {}): Alteration => ({
+const move = (role: PointRole, dx: number, dy: number, rest: Partial<MoveAlteration> = {}): MoveAlteration => ({
   id: `${role.piece}-${role.edge}-${role.node}`,
   kind: 'move',
   name: 'Let out at the waist',
@@ -106,5 +106,90 @@ describe('alterations', () => {
     const altered = applyAlterations(redraft, [move({ piece: 'side-front', edge: 'side', node: 'waist' }, 6, 0, { carry: true })])
     expect(altered.effects[0]!.state).toBe('applied')
     expect(widthAt(altered.draft, 'waist') - widthAt(redraft, 'waist')).toBeCloseTo(12, 1)
+  })
+})
+
+const girth = (rest: Partial<GirthAlteration> = {}): GirthAlteration => ({
+  id: 'girth',
+  kind: 'girth',
+  name: 'Let out at the waist',
+  on: true,
+  level: 'waist',
+  amount: mm(12),
+  seams: [
+    { piece: 'side-front', edge: 'side' },
+    { piece: 'front-centre', edge: 'princess' },
+    { piece: 'side-back', edge: 'princess' },
+  ],
+  ...rest,
+})
+const length = (rest: Partial<LengthAlteration> = {}): LengthAlteration => ({
+  id: 'length',
+  kind: 'length',
+  name: 'Longer below the underbust',
+  on: true,
+  below: 'underbust',
+  by: mm(15),
+  ...rest,
+})
+
+describe('letting out and taking in over seams', () => {
+  it('adds up to the whole girth asked for, at that level alone, and leaves every seam true', () => {
+    for (const amount of [12, -18]) {
+      const { draft: altered, effects } = applyAlterations(draft, [girth({ amount: mm(amount) })])
+      expect(effects[0]).toMatchObject({ state: 'applied' })
+      expect(effects[0]!.moved).toHaveLength(6)
+      expect(2 * (widthAt(altered, 'waist') - widthAt(draft, 'waist'))).toBeCloseTo(amount, 6)
+      for (const level of ['bust', 'underbust', 'hip']) expect(widthAt(altered, level)).toBeCloseTo(widthAt(draft, level), 6)
+      for (const own of altered.seams) expect(Math.abs(own.difference)).toBeLessThan(0.5)
+    }
+  })
+
+  it('is the same from either edge of a seam', () => {
+    const one = applyAlterations(draft, [girth({ seams: [{ piece: 'side-front', edge: 'side' }] })]).draft
+    const other = applyAlterations(draft, [girth({ seams: [{ piece: 'side-back', edge: 'side' }] })]).draft
+    for (const piece of one.pieces) {
+      const fellow = pieceOf(other, piece.id)
+      piece.levels.forEach((level, index) => expect(level.width).toBeCloseTo(fellow.levels[index]!.width, 9))
+    }
+  })
+
+  it('is parked whole when one of its seams is gone or is a fold, never shared over the rest', () => {
+    const gone = girth({ seams: [...girth().seams, { piece: 'front-centre', edge: 'centre' }] })
+    const { draft: altered, effects, parked } = applyAlterations(draft, [gone])
+    expect(effects[0]!.state).toBe('parked')
+    expect(parked).toEqual([gone])
+    expect(altered).toBe(draft)
+  })
+})
+
+describe('lengthening and shortening', () => {
+  it('draws out what lies between two levels on every piece, keeps widths and mates, and moves the levels below', () => {
+    const { draft: altered } = applyAlterations(draft, [length()])
+    for (const level of ['bust', 'underbust', 'waist', 'high-hip', 'hip']) {
+      expect(widthAt(altered, level)).toBeCloseTo(widthAt(draft, level), 6)
+      const down = level === 'bust' || level === 'underbust' ? 0 : 15
+      expect(draft.frame[`level-${level}`]!.y - altered.frame[`level-${level}`]!.y).toBeCloseTo(down, 9)
+    }
+    for (const own of altered.seams) expect(Math.abs(own.difference)).toBeLessThan(0.5)
+    const hem = (from: Draft) => pieceOf(from, 'front-centre').edges.find((edge) => edge.id === 'hem')!.nodes[0]!.at.y
+    expect(hem(draft) - hem(altered)).toBeCloseTo(15, 9)
+  })
+
+  it('and shortening by as much gives the first draft back', () => {
+    const back = applyAlterations(draft, [length({ id: 'a', by: mm(12) }), length({ id: 'b', by: mm(-12) })]).draft
+    for (const piece of back.pieces) {
+      pieceOf(draft, piece.id).edges.forEach((edge, index) =>
+        edge.nodes.forEach((node, at) => expect(Math.abs(node.at.y - piece.edges[index]!.nodes[at]!.at.y)).toBeLessThan(1e-9)),
+      )
+    }
+  })
+
+  it('is refused where two levels would meet, with the most that works, and parked below the lowest', () => {
+    const { effects } = applyAlterations(draft, [length({ by: mm(-290) })])
+    expect(effects[0]!.state).toBe('refused')
+    const most = Number(/by (\d+) mm/.exec(effects[0]!.problem!.todo!)![1])
+    expect(applyAlterations(draft, [length({ by: mm(-most) })]).effects[0]!.state).toBe('applied')
+    expect(applyAlterations(draft, [length({ below: 'hip' })]).effects[0]!.state).toBe('parked')
   })
 })

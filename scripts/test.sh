@@ -5,7 +5,7 @@ source "$(dirname "$0")/lib/common.sh"
 source "$(dirname "$0")/lib/database.sh"
 
 packages_up || exit 1
-tools_up chromium=chromium pdfinfo=poppler-utils qpdf=qpdf rsvg-convert=librsvg2-bin python3:shapely python3:pikepdf || exit 1
+tools_up chromium=chromium pdfinfo=poppler-utils qpdf=qpdf rsvg-convert=librsvg2-bin python3:shapely python3:pikepdf python3:ezdxf || exit 1
 database_up || exit 1
 
 reports="$root/.data/reports"

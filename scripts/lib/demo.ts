@@ -11,6 +11,7 @@ import { archiveCloth, createCloth, createTest } from '../../server/services/clo
 import { recordFitting } from '../../server/services/fittings'
 import { createGarment } from '../../server/services/garments'
 import { createMeasuring } from '../../server/services/measurings'
+import { measurePrinter } from '../../server/services/printers'
 import { dateIn, type Room } from '../../server/services/room'
 import { clearVersion, createVersion } from '../../server/services/versions'
 import { createWearer, noteFlags } from '../../server/services/wearers'
@@ -262,6 +263,7 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
         note: null,
       })
       await archiveCloth(room, remnant.id, true)
+      await measurePrinter(room, { name: 'Office printer', acrossMm: 99.4, alongMm: 99.8 })
     }
 
     await enterWorkroom(db, second.workroom)
@@ -296,6 +298,7 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
         note: null,
         levels: [{ level: 'waist', gap: null, feel: 'right', pull: null }],
       })
+      await measurePrinter(room, { name: 'Loft plotter', acrossMm: 100.2, alongMm: 100 })
     }
     return { first, second }
   })

@@ -233,6 +233,17 @@ export interface WorkingCopy {
   workroomId: string
 }
 
+export interface Printer {
+  acrossMm: number
+  alongMm: number
+  archivedAt: Timestamp | null
+  id: Generated<string>
+  measuredOn: string
+  name: string
+  savedBy: string | null
+  workroomId: string
+}
+
 export interface Workroom {
   createdAt: Generated<Timestamp>
   id: Generated<string>
@@ -252,6 +263,7 @@ export interface DB {
   loginAttempt: LoginAttempt
   measuring: Measuring
   membership: Membership
+  printer: Printer
   session: Session
   stretchTest: StretchTest
   version: Version

@@ -33,9 +33,10 @@ export interface PatternPdfInput {
  */
 export function renderPatternPdf({ set, title, createdAt }: PatternPdfInput, fonts: readonly PrintFont[]): Readable {
   const { width, height } = set.plan.page
+  const { scale } = set
   const document = new PDFDocument({
     autoFirstPage: false,
-    size: [width * POINTS, height * POINTS],
+    size: [width * scale.x * POINTS, height * scale.y * POINTS],
     margin: 0,
     font: '',
     lang: 'en',
@@ -47,7 +48,7 @@ export function renderPatternPdf({ set, title, createdAt }: PatternPdfInput, fon
   const out = new PassThrough()
   document.pipe(out)
   const drawing = set.drawing.map((operation) => ({ operation, bounds: reachOf(operation) }))
-  drawSheets(document, set.sheets, drawing, { height, fonts, isOpen: () => !out.destroyed }).catch((error: unknown) =>
+  drawSheets(document, set.sheets, drawing, { height, scale, fonts, isOpen: () => !out.destroyed }).catch((error: unknown) =>
     out.destroy(error instanceof Error ? error : new Error(String(error))),
   )
   return out
@@ -55,6 +56,7 @@ export function renderPatternPdf({ set, title, createdAt }: PatternPdfInput, fon
 
 interface Pen {
   readonly height: number
+  readonly scale: PrintSet['scale']
   readonly fonts: readonly PrintFont[]
   readonly isOpen: () => boolean
 }
@@ -71,6 +73,7 @@ async function drawSheets(document: PDFKit.PDFDocument, sheets: readonly Sheet[]
 }
 
 function drawSheet(document: PDFKit.PDFDocument, sheet: Sheet, drawing: Reached, pen: Pen): void {
+  if (pen.scale.x !== 1 || pen.scale.y !== 1) document.scale(pen.scale.x, pen.scale.y, {})
   const onPage = ({ x, y }: Point): Point => ({ x: x * POINTS, y: (pen.height - y) * POINTS })
   for (const operation of sheet.under) drawOperation(document, operation, weightOf(operation), onPage, pen.fonts)
   if (sheet.drawing) {

@@ -1,18 +1,20 @@
 import type { VersionKept } from '../../shared/domain/garment/snapshot'
 import { printSet, type PrintSet } from '../../shared/domain/output/print-set'
-import type { PrintFacts } from '../../shared/domain/output/print-words'
+import { exchangeDrawing } from '../../shared/domain/output/exchange'
+import type { PrintedLines, PrintFacts } from '../../shared/domain/output/print-words'
 import { layoutPieces } from '../../shared/domain/output/layout'
-import { PAPERS } from '../../shared/domain/output/paper'
+import { paperOf } from '../../shared/domain/output/paper'
 import { placePoint } from '../../shared/domain/output/placing'
 import type { Placement } from '../../shared/domain/output/types'
 import { planTiles, type TilePlan } from '../../shared/domain/output/tiles'
-import type { DraftPiece } from '../../shared/domain/draft/types'
+import type { DraftPiece, PieceId } from '../../shared/domain/draft/types'
 import type { Point } from '../../shared/domain/geometry/types'
 import type { ParsedBody } from '../../shared/schemas/routes'
 import type { PrintQuery } from '../../shared/schemas/print'
 import type { LengthUnit } from '../../shared/schemas/session'
 import { fromJson } from '../db/client'
 import { findVersionKept } from '../db/queries/versions'
+import { printerFor } from './printers'
 import { refuse, found } from './refusal'
 import type { Room } from './room'
 import { readableVersion } from './versions'
@@ -38,24 +40,34 @@ function factsOf(kept: VersionKept, garmentCode: string, version: string, printe
   }
 }
 
-/** The print set of a version as saved. An archived cloth or an erased body changes nothing on it but its mark. */
-export async function printOfVersion(
-  room: Room,
-  id: string,
-  query: PrintQuery,
-  unit: LengthUnit,
-): Promise<{ set: PrintSet; title: string; outlines: Point[][] }> {
+/** A version as it is kept, with what is said of it on paper. */
+async function keptForPrint(room: Room, id: string, unit: LengthUnit) {
   const row = await readableVersion(room, id)
   const kept = fromJson<VersionKept>(found(await findVersionKept(room.db, room.workroom, id)).kept)
   const marks = [row.clearedAt ? 'cleared for cutting' : 'not cleared for cutting', ...(row.erasedAt ? ['body erased'] : [])]
   const version = `version ${row.number}, ${marks.join(', ')}`
-  const set = printSet(factsOf(kept, row.garmentCode, version, room.today, unit), kept.draft.pieces, query)
+  return { kept, facts: factsOf(kept, row.garmentCode, version, room.today, unit), title: `${row.garmentCode} version ${row.number}` }
+}
+
+/** The print set of a version as saved. An archived cloth or an erased body changes nothing on it but its mark. */
+export async function printOfVersion(
+  room: Room,
+  id: string,
+  { pieces, printer, ...query }: PrintQuery,
+  unit: LengthUnit,
+): Promise<{ set: PrintSet; title: string; outlines: Point[][] }> {
+  const { kept, facts, title } = await keptForPrint(room, id, unit)
+  const only = pieces ? { only: pieces.split(',') as PieceId[] } : {}
+  const set = printSet({ ...facts, printer: await printerFor(room, printer) }, kept.draft.pieces, { ...query, ...only })
   if (!set.ok) return refuse('cannot-solve', { problem: set.problem })
-  return {
-    set: set.value,
-    outlines: outlinesOf(kept.draft.pieces, set.value.placements),
-    title: `${row.garmentCode} version ${row.number}`,
-  }
+  return { set: set.value, outlines: outlinesOf(kept.draft.pieces, set.value.placements), title }
+}
+
+/** A version's pieces as one drawing, for other programs. */
+export async function patternOfVersion(room: Room, id: string, lines: PrintedLines, unit: LengthUnit) {
+  const { kept, facts, title } = await keptForPrint(room, id, unit)
+  const { pieces } = kept.draft
+  return { pieces, facts, title, drawing: exchangeDrawing(facts, pieces, lines) }
 }
 
 /** Cutting lines as they lie on the drafting plane. */
@@ -66,9 +78,10 @@ const outlinesOf = (pieces: readonly DraftPiece[], placements: readonly Placemen
   })
 
 /** Pages for pieces that are not saved. */
-export function tilesOfPieces({ pieces, paper, spacing, ...options }: ParsedBody<'solve.tiles'>): TilePlan {
+export function tilesOfPieces({ pieces, paper, width, height, spacing, ...options }: ParsedBody<'solve.tiles'>): TilePlan {
   const placements = layoutPieces(pieces, 'packed', spacing)
   const outlines = outlinesOf(pieces, placements)
-  const plan = planTiles(outlines, PAPERS[paper], options)
+  const known = paperOf(paper, width, height)
+  const plan = known.ok ? planTiles(outlines, known.value, options) : known
   return plan.ok ? plan.value : refuse('cannot-solve', { problem: plan.problem })
 }

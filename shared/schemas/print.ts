@@ -1,9 +1,10 @@
 import { z } from 'zod'
+import { PAPER_IDS } from '../domain/output/paper'
 import type { TilePlan } from '../domain/output/tiles'
 import type { Point } from '../domain/geometry/types'
 import { figure, length, mirrors, point } from './base'
 
-export const paperId = z.enum(['A4', 'A3', 'letter'])
+export const paperId = z.enum(PAPER_IDS)
 
 export const tileOptions = z.object({
   orientation: z.enum(['portrait', 'landscape', 'auto']).default('auto'),
@@ -15,7 +16,17 @@ export const printQuery = tileOptions.extend({
   paper: paperId.default('A4'),
   /** `seam` leaves the allowances off, `cut` prints both lines. */
   lines: z.enum(['both', 'seam', 'cutting']).default('both'),
+  /** Sides of a typed paper, mm. */
+  width: z.coerce.number().min(1).max(5000).optional(),
+  height: z.coerce.number().min(1).max(5000).optional(),
+  layout: z.enum(['packed', 'wearing']).default('packed'),
+  /** Ids of the pieces, parted by commas; all when left out. */
+  pieces: z.string().max(600).optional(),
+  /** A printer that was measured. */
+  printer: z.string().uuid().optional(),
 })
+/** Files for other programs: which outlines they hold. */
+export const exchangeQuery = z.object({ lines: z.enum(['both', 'seam', 'cutting']).default('both') })
 export type PrintQuery = z.output<typeof printQuery>
 
 const bounds = z.object({ left: figure(), bottom: figure(), right: figure(), top: figure() })
@@ -50,3 +61,12 @@ export interface TileMap extends TilePlan {
   readonly outlines: readonly (readonly Point[])[]
 }
 export const tileMap = mirrors<TileMap>()(pages.extend({ outlines: z.array(z.array(point)) }))
+
+/** What the 100 mm square measures on a printer's paper, across it and along it, mm. */
+export const printerBody = z.object({
+  name: z.string().trim().min(1, 'Name the printer.').max(60),
+  acrossMm: figure(1, 1000),
+  alongMm: figure(1, 1000),
+})
+export const printer = printerBody.extend({ id: z.string(), measuredOn: z.string() })
+export type PrinterView = z.output<typeof printer>

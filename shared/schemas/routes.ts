@@ -7,7 +7,7 @@ import { fitting, fittingBody } from './fittings'
 import { garmentBody, garmentSummary, garmentUpdate, garmentWhole, workingCopy, workingCopySave } from './garments'
 import { runAnswer, runQuery, runUpload } from './machine-file'
 import { measuring, measuringBody, measuringUpdate } from './measuring'
-import { printQuery, tileMap, tilePlan } from './print'
+import { exchangeQuery, printer, printerBody, printQuery, tileMap, tilePlan } from './print'
 import { me, preferencesBody, signInBody, type Role } from './session'
 import {
   solveCurveAnswer,
@@ -32,7 +32,7 @@ import { member, workroom, workroomPatch } from './workroom'
 export type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE'
 
 /** What the `id` of an address names. */
-export type ResourceKind = 'client' | 'wearer' | 'measuring' | 'cloth' | 'test' | 'garment' | 'version'
+export type ResourceKind = 'client' | 'wearer' | 'measuring' | 'cloth' | 'test' | 'garment' | 'version' | 'printer'
 
 /** Who may: anyone, whoever is signed in, or the roles listed. */
 export type Access = 'public' | 'signed-in' | readonly Role[]
@@ -550,6 +550,69 @@ export const routes = {
     media: 'application/pdf',
     group: 'Print',
     summary: 'The print set, true to scale.',
+  },
+  'print.svg': {
+    ...of('version'),
+    method: 'GET',
+    path: '/api/versions/:id/pattern.svg',
+    access: everyone,
+    query: exchangeQuery,
+    response: null,
+    media: 'image/svg+xml',
+    group: 'Print',
+    summary: 'The pieces as SVG in millimetres, a group a piece, layers by name.',
+  },
+  'print.dxf': {
+    ...of('version'),
+    method: 'GET',
+    path: '/api/versions/:id/pattern.dxf',
+    access: everyone,
+    query: exchangeQuery,
+    response: null,
+    media: 'image/vnd.dxf',
+    group: 'Print',
+    summary: 'The pieces as DXF after the conventions of ASTM D6673 (withdrawn 2019), a block a piece.',
+  },
+  'print.png': {
+    ...of('version'),
+    method: 'GET',
+    path: '/api/versions/:id/pattern.png',
+    access: everyone,
+    query: exchangeQuery,
+    response: null,
+    media: 'image/png',
+    group: 'Print',
+    summary: 'A preview of the pieces, not to measure.',
+  },
+
+  'printers.list': {
+    ...plain,
+    method: 'GET',
+    path: '/api/printers',
+    access: everyone,
+    response: list(printer),
+    group: 'Print',
+    summary: 'Printers that were measured.',
+  },
+  'printers.measure': {
+    ...plain,
+    method: 'POST',
+    path: '/api/printers',
+    access: everyone,
+    body: printerBody,
+    response: printer,
+    status: 201,
+    group: 'Print',
+    summary: 'What a printer makes of the 100 mm square, by its name. Measured again it replaces what was known.',
+  },
+  'printers.remove': {
+    ...of('printer'),
+    method: 'DELETE',
+    path: '/api/printers/:id',
+    access: drafting,
+    response: done,
+    group: 'Print',
+    summary: 'Put a printer away; measured again under its name it is back.',
   },
 
   'solve.curve': {

@@ -60,7 +60,10 @@ export const solvePiecesBody = z
 
 export const solveTilesBody = tileOptions.extend({
   pieces: z.array(draftPiece).min(1).max(20),
-  paper: paperId.default('A4'),
+  /** Tiles lie on sheets: a roll is for the print of a version. */
+  paper: paperId.exclude(['roll-841', 'roll-914', 'roll-36in']).default('A4'),
+  width: figure(1, 5000).optional(),
+  height: figure(1, 5000).optional(),
   /** Room between pieces, mm. */
   spacing: figure(0, 500).default(20),
 })

@@ -179,7 +179,7 @@ describe.skipIf(missing.length > 0).each(cases)('pattern print on $name, read ba
         .split(/\s+/)
         .map((each) => Number(each) * POINTS_TO_MM),
     )
-    const paper = PAPERS[options.paper]
+    const paper = PAPERS[options.paper as 'A4']
     const [width, height] = set.plan.orientation === 'portrait' ? [paper.width, paper.height] : [paper.height, paper.width]
     expect(boxes).toHaveLength(set.sheets.length)
     for (const [left, bottom, right, top] of boxes) {

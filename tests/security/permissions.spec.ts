@@ -13,6 +13,7 @@ const tables: Readonly<Record<ResourceKind, string>> = {
   test: 'stretch_test',
   garment: 'garment',
   version: 'version',
+  printer: 'printer',
 }
 
 /** Routes that end the session they are called with. */

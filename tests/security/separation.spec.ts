@@ -56,6 +56,7 @@ describe('workrooms in SQL, as the role that serves', () => {
       'garment',
       'measuring',
       'membership',
+      'printer',
       'stretch_test',
       'version',
       'version_body',

@@ -9,6 +9,7 @@ const tables = {
   test: 'stretchTest',
   garment: 'garment',
   version: 'version',
+  printer: 'printer',
 } as const satisfies Record<ResourceKind, string>
 
 /** Whether the workroom has such a row. */

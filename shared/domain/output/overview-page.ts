@@ -6,6 +6,8 @@ import { entry, fittingSize, paragraph, tableRow } from './flow'
 import type { Flow, TableColumn } from './flow'
 import { ACTUAL_SIZE, allowanceState, cutLines, layersOf, SAFETY_LINE } from './print-words'
 import type { PrintedLines, PrintFacts } from './print-words'
+import { isRoll } from './paper'
+import { correctionWords } from './printer-correction'
 import { polygon, rectangle, stroke, words } from './sheet'
 import type { Sheet, SheetOperation } from './sheet'
 import type { TilePlan } from './tiles'
@@ -71,9 +73,17 @@ function headPart(flow: Flow, { plan, facts, pieces, outlines, lines }: Overview
   const leftOut = blank.length > 0 ? `; ${blank.join(', ')} blank, left out` : ''
   const length = (value: number) => formatLength(mm(value), facts.unit)
   const rules: readonly (readonly [string, string])[] = [
-    ['Paper', `${paper.name}, ${orientation === 'portrait' ? 'upright' : 'lying'}; margins ${length(margin)}, overlap ${length(overlap)}`],
+    [
+      'Paper',
+      isRoll(paper.id)
+        ? `${paper.name}; margins ${length(margin)}`
+        : `${paper.name}, ${orientation === 'portrait' ? 'upright' : 'lying'}; margins ${length(margin)}, ${overlap === 0 ? 'edges butt' : `overlap ${length(overlap)}`}`,
+    ],
     ['Tiles', `${tiles.length} in ${rows} ${rows === 1 ? 'row' : 'rows'} of ${columns}${leftOut}`],
-    ['Scale', `true size; units ${facts.unit === 'cm' ? 'centimetres' : 'inches'}`],
+    [
+      'Scale',
+      `true size${facts.printer ? `, ${correctionWords(facts.printer)}` : ''}; units ${facts.unit === 'cm' ? 'centimetres' : 'inches'}`,
+    ],
     ['Allowance', allowanceState(pieces, facts.unit, lines)],
   ]
   for (const [name, text] of rules) left = entry(left, name, text, BODY, label)

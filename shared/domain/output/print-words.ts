@@ -4,6 +4,7 @@ import type { DraftPiece, EdgeId } from '../draft/types'
 import type { HoldBand } from '../textile/types'
 import { formatLength } from '../units/format'
 import type { Mm } from '../units/brand'
+import type { CorrectedPrinter } from './printer-correction'
 
 /**
  * What a print set says beside the drawing. There is no field for a client's or wearer's name, a body girth or a wearer's
@@ -22,6 +23,8 @@ export interface PrintFacts {
   readonly rings: readonly { readonly name: string; readonly cut: Mm; readonly hold: HoldBand }[]
   /** Open cautions; only the maker's words are printed. */
   readonly cautions: readonly Pick<Caution, 'severity' | 'makerMessage'>[]
+  /** The printer whose error is taken out, said on every tile; null prints as it is. */
+  readonly printer?: CorrectedPrinter | null
   /** Worn strain by zone and level; given, the pieces carry stretch ticks. */
   readonly strains?: Readonly<Record<'front' | 'back', Readonly<Partial<Record<LevelId, number>>>>>
 }

@@ -31,6 +31,18 @@ export interface Sheet {
   readonly operations: readonly SheetOperation[]
 }
 
+/** An operation moved on its page, mm. */
+export function movedOperation(operation: SheetOperation, dx: number, dy: number): SheetOperation {
+  const by = ({ x, y }: Point): Point => ({ x: x + dx, y: y + dy })
+  if (operation.kind === 'text') return { ...operation, at: by(operation.at) }
+  const path = operation.path.map((segment) =>
+    segment.kind === 'line'
+      ? { ...segment, from: by(segment.from), to: by(segment.to) }
+      : { ...segment, from: by(segment.from), c1: by(segment.c1), c2: by(segment.c2), to: by(segment.to) },
+  )
+  return { ...operation, path }
+}
+
 /** A straight stroke. */
 export const stroke = (role: SheetRole | DrawingRole, from: Point, to: Point): SheetOperation => ({
   kind: 'path',

@@ -2,6 +2,7 @@ import { pathFlatten } from '../geometry/path'
 import type { Point } from '../geometry/types'
 import type { Bounds } from './placing'
 import type { PrintFacts } from './print-words'
+import { correctionWords } from './printer-correction'
 import { stroke, words } from './sheet'
 import type { Sheet, SheetOperation } from './sheet'
 import { textWidth } from './text-width'
@@ -28,7 +29,7 @@ const sideWords: Readonly<Record<TileSide, string>> = { left: 'left', top: 'abov
 export function tilePage(
   plan: TilePlan,
   tile: Tile,
-  facts: Pick<PrintFacts, 'garmentCode' | 'version'>,
+  facts: Pick<PrintFacts, 'garmentCode' | 'version' | 'printer'>,
   number: number,
   strokes: readonly Stroke[],
 ): Sheet {
@@ -119,11 +120,16 @@ function lozenge({ x, y }: Point, half: number): SheetOperation {
   }
 }
 
-function stripOperations(plan: TilePlan, tile: Tile, facts: Pick<PrintFacts, 'garmentCode' | 'version'>, number: number): SheetOperation[] {
+function stripOperations(
+  plan: TilePlan,
+  tile: Tile,
+  facts: Pick<PrintFacts, 'garmentCode' | 'version' | 'printer'>,
+  number: number,
+): SheetOperation[] {
   const [left, right] = [plan.margin, plan.page.width - plan.margin]
   const baseline = plan.margin + 1.6
   const joins = tile.joins.map((join) => `${sideWords[join.side]} ${join.neighbour}`).join(' · ')
-  const end = `${facts.garmentCode} · ${facts.version} · tile ${number} of ${plan.tiles.length}`
+  const end = `${facts.garmentCode} · ${facts.version} · tile ${number} of ${plan.tiles.length}${facts.printer ? ` · ${correctionWords(facts.printer)}` : ''}`
   const nameWidth = textWidth(tile.name, 4, 'semibold')
   const room = right - left - nameWidth - 4 - textWidth(end, STRIP_SIZE) - 4
   return [

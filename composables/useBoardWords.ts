@@ -1,23 +1,17 @@
 import type { Alteration, DraftPiece, EdgeId, EdgeNode, PieceEdge, PieceId, PointRole, SeamComparison } from '#shared/domain/draft/types'
+import { edgeWords, pieceWords } from '#shared/domain/draft/roles'
 import { TRUE_WITHIN } from '#shared/domain/draft/truing'
 import type { Mm } from '#shared/domain/units/brand'
 import { formatLength } from '#shared/domain/units/format'
 
 export type BoardUnit = 'cm' | 'in'
 
-const PIECE_NAMES: Readonly<Record<PieceId, string>> = {
-  'front-centre': 'front centre',
-  'side-front': 'side front',
-  'side-back': 'side back',
-  'back-centre': 'back centre',
-}
-
-export const pieceName = (piece: PieceId): string => PIECE_NAMES[piece]
+export const pieceName = (piece: PieceId): string => pieceWords(piece).replace(/^./, (first) => first.toLowerCase())
 
 /** An edge in the trade's words; a centre says which one. */
 export function edgeName(piece: Pick<DraftPiece, 'zone'>, edge: EdgeId): string {
   if (edge === 'centre') return piece.zone === 'front' ? 'centre front' : 'centre back'
-  return edge === 'princess' || edge === 'side' ? `${edge} seam` : edge
+  return edgeWords(edge)
 }
 
 export const nodeName = (node: string): string => node.replaceAll('-', ' ')

@@ -1,13 +1,58 @@
 import { z } from 'zod'
 import type { BodyLevel, DraftBody } from '../domain/body/types'
 import type { Alteration, BodiceStyle, Draft, DraftPiece, LevelWidths } from '../domain/draft/types'
+import { baseStyle } from '../domain/draft/style'
 import type { Segment } from '../domain/geometry/types'
 import { figure, length, mirrors, point } from './base'
 
 export const levelId = z.enum(['bust', 'underbust', 'waist', 'high-hip', 'hip'])
-export const pieceId = z.enum(['front-centre', 'side-front', 'side-back', 'back-centre'])
-export const edgeId = z.enum(['centre', 'neckline', 'shoulder', 'armhole', 'princess', 'side', 'hem'])
-const centreKind = z.enum(['fold', 'seam', 'lacing'])
+const seamLetter = z.enum(['a', 'b', 'c', 'd'])
+export const pieceId = z.enum([
+  'front-centre',
+  'side-front',
+  'side-back',
+  'back-centre',
+  'front',
+  'back',
+  'front-centre-a',
+  'front-centre-b',
+  'front-centre-c',
+  'front-centre-d',
+  'side-front-a',
+  'side-front-b',
+  'side-front-c',
+  'side-front-d',
+  'side-back-a',
+  'side-back-b',
+  'side-back-c',
+  'side-back-d',
+  'back-centre-a',
+  'back-centre-b',
+  'back-centre-c',
+  'back-centre-d',
+])
+export const edgeId = z.enum([
+  'centre',
+  'neckline',
+  'shoulder',
+  'armhole',
+  'princess',
+  'side',
+  'hem',
+  'top',
+  'seam-a',
+  'seam-b',
+  'seam-c',
+  'seam-d',
+  'shoulder-princess',
+  'dart',
+  'dart-beyond',
+  'neckline-dart',
+  'shoulder-dart',
+  'armhole-dart',
+  'top-dart',
+])
+const centreKind = z.enum(['fold', 'seam', 'zip', 'hook-tape', 'hooks', 'busk', 'lacing'])
 const degree = figure(-360, 360)
 const role = z.string().min(1).max(60)
 
@@ -66,11 +111,50 @@ const shares = z
   .object({ centre: figure(0, 1), princess: figure(0, 1), side: figure(0, 1) })
   .refine((parts) => Math.abs(parts.centre + parts.princess + parts.side - 1) < 0.001, 'The three shares must make one whole.')
 
+const halfPanels = z.object({
+  princess: z.boolean(),
+  further: z
+    .array(
+      z.object({
+        id: seamLetter,
+        beside: z.enum(['centre', 'side']),
+        at: figure(0, 1).nullable(),
+        end: figure(0, 1).nullable(),
+        share: figure(0, 1),
+        letOut: figure(0, 1).nullable(),
+      }),
+    )
+    .max(4)
+    .refine((seams) => new Set(seams.map(({ id }) => id)).size === seams.length, 'A seam stands only once.'),
+})
+const princessEnd = z.object({ edge: z.enum(['shoulder', 'armhole', 'neckline']), at: figure(0, 1) })
+const edgeForm = z.enum(['straight', 'pointed', 'rounded'])
+const necklineForm = z.enum(['round', 'square', 'v'])
+
+/** Fields that older documents do not have yet are read as `baseStyle` has them. */
+const BASE = baseStyle()
+
 export const bodiceStyle = mirrors<BodiceStyle>()(
   z.object({
     centreFront: centreKind,
     centreBack: centreKind,
-    hem: z.object({ level: z.enum(['waist', 'high-hip', 'hip']), below: length(-300, 500) }),
+    panels: z
+      .object({ front: halfPanels, back: halfPanels })
+      .default(() => ({ front: { princess: true, further: [] }, back: { princess: true, further: [] } })),
+    hem: z.object({ level: z.enum(['underbust', 'waist', 'high-hip', 'hip']), below: length(-300, 500) }),
+    hemShape: z
+      .object({ form: edgeForm, front: length(-300, 300), back: length(-300, 300), side: length(-300, 300), curve: figure(0, 1) })
+      .default(BASE.hemShape),
+    neckline: z.object({ front: necklineForm, back: necklineForm }).default(BASE.neckline),
+    top: z
+      .object({ form: edgeForm, front: length(0, 300), back: length(-100, 300), side: length(-100, 300), curve: figure(0, 1) })
+      .nullable()
+      .default(null),
+    princessEnd: z.object({ front: princessEnd, back: princessEnd }).default(BASE.princessEnd),
+    backPrincessAt: figure(0.1, 0.9).default(BASE.backPrincessAt),
+    letOut: z.object({ front: shares.nullable(), back: shares.nullable() }).default(BASE.letOut),
+    openingsTake: z.object({ front: z.boolean(), back: z.boolean() }).default(BASE.openingsTake),
+    bustAs: z.enum(['auto', 'seam', 'dart', 'ease']).default(BASE.bustAs),
     necklineFrontDepth: length(0, 400),
     necklineBackDepth: length(0, 500),
     necklineWidth: length(0, 200),
@@ -83,6 +167,7 @@ export const bodiceStyle = mirrors<BodiceStyle>()(
     allowances: z.object({
       seam: length(0, 60),
       centre: length(0, 60),
+      opening: length(0, 60).default(BASE.allowances.opening),
       shoulder: length(0, 60),
       neckline: length(0, 60),
       armhole: length(0, 60),
@@ -168,6 +253,8 @@ export const draft = mirrors<Draft>()(
           'bust-angle-negative',
           'bust-angle-large',
           'bust-angle-held',
+          'bust-angle-eased',
+          'bust-angle-dart',
           'bust-level-moved',
           'across-front-held',
           'across-back-held',

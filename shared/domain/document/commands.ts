@@ -1,5 +1,6 @@
 import type { LevelId } from '../body/types'
 import type { Acknowledged } from '../cautions/acknowledge'
+import { edgeWords, pieceWords } from '../draft/roles'
 import type { Alteration, BodiceStyle, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from '../draft/types'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothState } from '../textile/types'
@@ -61,8 +62,8 @@ export function sameRole(a: PointRole, b: PointRole): boolean {
 
 /** A point or handle in the trade's words: `side front, princess seam at the bust`. */
 export function roleWords(role: PointRole): string {
-  const piece = role.piece.replace('-', ' ')
-  const edge = role.edge === 'princess' || role.edge === 'side' ? `${role.edge} seam` : role.edge === 'centre' ? 'centre edge' : role.edge
+  const piece = pieceWords(role.piece).replace(/^./, (first) => first.toLowerCase())
+  const edge = role.edge === 'centre' ? 'centre edge' : edgeWords(role.edge)
   const handle = role.handle ? `, curve ${role.handle}` : ''
   return `${piece}, ${edge} at ${role.node.replaceAll('-', ' ')}${handle}`
 }

@@ -51,7 +51,7 @@ function carried(
 ): { readonly role: PointRole; readonly by: Point } | null {
   const { mate } = place.edge
   if (mate === null || (mate.piece === role.piece && mate.edge === role.edge)) return null
-  const alike = matesTravelAlike(role.piece, role.edge)
+  const alike = matesTravelAlike(role.edge)
   const turned = { before: 'after', after: 'before' } as const
   const handle = role.handle === undefined || alike ? role.handle : turned[role.handle]
   const mateRole: PointRole = { piece: mate.piece, edge: mate.edge, node: role.node, ...(handle === undefined ? {} : { handle }) }

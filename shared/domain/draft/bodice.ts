@@ -12,9 +12,11 @@ import { outlineIsSound, readPiece } from './piece'
 import type { LevelHeight } from './piece'
 import { sketchPieces } from './pieces'
 import { millimetres } from './say'
-import { compareSeams, edgeOf, withNotches } from './seams'
+import { halfOf, wholeEdge } from './roles'
+import { compareSeams, withNotches } from './seams'
 import { checkStyle } from './style'
-import type { BodiceStyle, Draft, DraftFinding, DraftInput, DraftPiece } from './types'
+import { crossedProblem, drawnProblem, heldFrame } from './upper-limits'
+import type { BodiceStyle, Draft, DraftFinding, DraftInput, DraftPiece, PieceId } from './types'
 import { wedgesOf } from './wedges'
 
 const LEVELS: readonly LevelId[] = ['bust', 'underbust', 'waist', 'high-hip', 'hip']
@@ -71,6 +73,14 @@ function frameProblem(frame: Frame): Problem | null {
     }
   }
   const { front, back } = frame
+  if (frame.above !== null && !(frame.above.y - frame.heightOf('bust') >= LEAST_BETWEEN_LEVELS)) {
+    return {
+      code: 'levels-too-near',
+      message: `The level above the bust lies ${millimetres(frame.above.y - frame.heightOf('bust'))} above it; ${LEAST_BETWEEN_LEVELS} mm is the least.`,
+      todo: 'Measure the upper bust further up.',
+      at: 'above',
+    }
+  }
   const beside = Math.min(front.princess.x - front.centreX, front.underarm.x - front.princess.x)
   if (!(beside >= LEAST_TO_BUST_POINT)) {
     return {
@@ -92,10 +102,12 @@ function frameProblem(frame: Frame): Problem | null {
   return null
 }
 
-/** How far the princess seam passes inside the across point, the nearer of front and back, mm. */
+/** How far the princess seams that end on the shoulder pass inside the across point, the nearer of front and back, mm. */
 function princessInsideAcross(frame: Frame, style: BodiceStyle): number {
   return Math.min(
-    ...[frame.front, frame.back].map((half) => {
+    ...(['front', 'back'] as const).map((zone) => {
+      if (style.top !== null || !style.panels[zone].princess || style.princessEnd[zone].edge !== 'shoulder') return Infinity
+      const half = frame[zone]
       const seam = pathCrossingsAtHeight([princessAbove(half, shoulderOf(half, style))], half.across.y)[0]
       return seam === undefined ? Infinity : half.across.x - seam.x
     }),
@@ -160,9 +172,22 @@ export const withLevelHeights = (frame: Draft['frame'], heights: readonly LevelH
   ...Object.fromEntries(heights.map(({ level, y }) => [levelName(level), { x: 0, y }])),
 })
 
-/** Length of the armhole of both sides together, mm. */
-export function armholeLength(pieces: readonly DraftPiece[]): number {
-  return pathLength(edgeOf(pieces, 'side-front', 'armhole').path) + pathLength(edgeOf(pieces, 'side-back', 'armhole').path)
+/** Length of the armhole, front and back together, mm; 0 without shoulders. */
+export const armholeLength = (pieces: readonly DraftPiece[]): number =>
+  pieces
+    .flatMap(({ edges }) => edges)
+    .filter(({ id }) => wholeEdge(id) === 'armhole')
+    .reduce((sum, { path }) => sum + pathLength(path), 0)
+
+/** A finding on the piece that has its edge, the one nearest to the side; on that half's side piece where none has. */
+function placedFinding(finding: DraftFinding, pieces: readonly DraftPiece[]): DraftFinding {
+  if (finding.piece === null || pieces.some(({ id }) => id === finding.piece)) return finding
+  const half = pieces.filter(({ zone }) => zone === halfOf(finding.piece as PieceId))
+  const wide = halfOf(finding.piece) === 'front' ? [...half].reverse() : half
+  const own = wide.find(({ edges }) => edges.some(({ id }) => id === finding.edge))
+  const edge =
+    own === undefined && finding.edge === 'princess' && half.some(({ edges }) => edges.some(({ id }) => id === 'dart')) ? 'dart' : null
+  return { ...finding, piece: (own ?? wide[0])?.id ?? null, edge: own === undefined ? edge : finding.edge }
 }
 
 /** What is said of the armhole and of narrow pieces; read again after alterations. */
@@ -198,7 +223,7 @@ export function readFindings(pieces: readonly DraftPiece[], aim: number): readon
 }
 
 /**
- * The bodice of one half of the body: four pieces with notches, grain, levels and cutting line, its seams compared, and
+ * The bodice of one half of the body: its pieces with notches, grain, levels and cutting line, its seams compared, and
  * what had to be decided or held. Widths on the pieces are those of the rings, front and back together, to .5 mm at every
  * level that crosses all pieces. It is a draft: it says nothing of the fit.
  */
@@ -206,28 +231,21 @@ export function draftBodice(input: DraftInput): Result<Draft> {
   const { body, style } = input
   const problem = checkStyle(style, body)[0] ?? widthProblem(input)
   if (problem !== null) return fail(problem)
-  const frame = draftFrame(input)
-  const wrong = frameProblem(frame) ?? princessProblem(frame, style)
+  const frame = heldFrame(input, draftFrame(input))
+  const wrong = frameProblem(frame) ?? princessProblem(frame, style) ?? drawnProblem(frame, style)
   if (wrong !== null) return fail(wrong)
   const sketches = sketchPieces(frame, style, hemHeightOf(frame, style))
   const crossed = sketches.find((piece) => !outlineIsSound(piece.edges))
-  if (crossed !== undefined) {
-    return fail({
-      code: 'outline-crosses',
-      message: `${crossed.name} would cross its own outline.`,
-      todo: 'Bring the levels nearer to each other, take a higher neckline or a smaller bust angle.',
-      at: crossed.id,
-    })
-  }
+  if (crossed !== undefined) return fail(crossedProblem(crossed.id, crossed.name, style))
   const heights = LEVELS.map((level) => ({ level, y: frame.heightOf(level) }))
   const pieces = withNotches(sketches.map((piece) => readPiece(piece, heights)))
-  const aim = body.values.armscyeGirth * frame.milder
+  const aim = style.top === null ? body.values.armscyeGirth * frame.milder : 0
   const moved = wedgesOf(frame, style).sideMoved('waist')
   return succeed({
     pieces,
     seams: compareSeams(pieces),
     findings: [
-      ...frame.findings,
+      ...frame.findings.map((finding) => placedFinding(finding, pieces)),
       ...(Math.abs(moved) > SIDE_SEAM_MOVED
         ? [
             {

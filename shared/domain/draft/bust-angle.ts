@@ -6,7 +6,7 @@ import type { Transform } from '../geometry/transform'
 import type { Path, Point } from '../geometry/types'
 import { degrees, millimetres } from './say'
 import { BUST_ANGLE_LARGE, BUST_ANGLE_MOST } from './style'
-import type { DraftFinding } from './types'
+import type { BodiceStyle, DraftFinding } from './types'
 
 /** The bust angle and how it turns points. */
 export interface BustAngle {
@@ -38,20 +38,36 @@ export function bustAngleAsked(bustPoint: Point, underarm: Point, longer: number
   return sine >= 1 ? Math.PI / 2 : Math.asin(sine) - Math.atan2(arm.y, arm.x)
 }
 
+/** The front may be this much longer than the back and be eased rather than darted, mm. */
+export const EASED_AT_MOST = 10
+
+/** What is done with the bust angle; `longer` is d on the body, mm. */
+export function bustTaken({ bustAs, panels, bustAngle }: BodiceStyle, longer: number): 'seam' | 'dart' | 'ease' {
+  if (bustAs !== 'auto') return bustAs
+  if (panels.front.princess) return 'seam'
+  return bustAngle === null && longer <= EASED_AT_MOST ? 'ease' : 'dart'
+}
+
 /**
  * The bust angle: what the shoulder beyond the princess seam turns about the bust point, so that the front armhole is as
- * deep as the back's although the front is longer. 0 where the front is shorter (measure again); held at 42°. A chosen
- * angle in degrees goes before the lengths.
+ * deep as the back's although the front is longer. 0 where the front is shorter (measure again) or is eased; held at 42° or at
+ * `most` radians. A chosen angle in degrees goes before the lengths.
  */
 export function bustAngle(input: {
   readonly bustPoint: Point
   readonly underarm: Point
   readonly longer: number
   readonly chosen: number | null
+  readonly eased?: boolean
+  readonly most?: number | undefined
 }): BustAngle {
-  const { bustPoint, underarm, longer, chosen } = input
-  const most = (BUST_ANGLE_MOST * Math.PI) / 180
-  const asked = chosen === null ? Math.max(0, longer <= 0 ? 0 : bustAngleAsked(bustPoint, underarm, longer)) : (chosen * Math.PI) / 180
+  const { bustPoint, underarm, longer, chosen, eased = false } = input
+  const most = input.most ?? (BUST_ANGLE_MOST * Math.PI) / 180
+  const asked = eased
+    ? 0
+    : chosen === null
+      ? Math.max(0, longer <= 0 ? 0 : bustAngleAsked(bustPoint, underarm, longer))
+      : (chosen * Math.PI) / 180
   const angle = Math.min(asked, most)
   const findings: DraftFinding[] = []
   if (chosen === null && longer < 0) {
@@ -64,6 +80,16 @@ export function bustAngle(input: {
       ),
     )
   }
+  if (eased && longer > 0) {
+    findings.push(
+      finding(
+        'bust-angle-eased',
+        longer,
+        'mm',
+        `The front is ${millimetres(longer)} longer than the back over the bust; it is eased into the armhole, without seam or dart.`,
+      ),
+    )
+  }
   if (asked > most) {
     const lifted = pointTurn(underarm, bustPoint, angle).y - underarm.y
     findings.push(
@@ -71,7 +97,7 @@ export function bustAngle(input: {
         'bust-angle-held',
         longer - lifted,
         'mm',
-        `The bust angle is held at ${BUST_ANGLE_MOST}°; ${millimetres(longer - lifted)} of the front's length stay in the armhole.`,
+        `The bust angle is held at ${degrees((most * 180) / Math.PI)}; ${millimetres(longer - lifted)} of the front's length stay in the armhole.`,
       ),
     )
   } else if (angle >= (BUST_ANGLE_LARGE * Math.PI) / 180) {

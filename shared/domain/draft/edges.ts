@@ -1,9 +1,10 @@
-import { pathEndTangent, pathStart, pathStartTangent } from '../geometry/path'
-import { pointAlong, pointDistance, vectorRight } from '../geometry/point'
-import { cubicSegment } from '../geometry/segment'
-import type { CubicSegment, Path, Point } from '../geometry/types'
+import { pointAdd, pointAlong, pointDistance, pointSubtract, vectorLeft, vectorRight, vectorUnit } from '../geometry/point'
+import { cubicSegment, lineSegment } from '../geometry/segment'
+import type { CubicSegment, Point } from '../geometry/types'
 import type { HalfFrame } from './frame'
-import type { BodiceStyle } from './types'
+import type { BodiceStyle, NecklineForm } from './types'
+import { railOf } from './wedges'
+import type { Rail } from './wedges'
 
 /** Share of a seam's chord that its handles take where a plain arc is wanted. */
 const ARC_HANDLE = 0.36
@@ -44,34 +45,46 @@ export function princessAbove(half: HalfFrame, shoulder: Shoulder): CubicSegment
   )
 }
 
-/** The neckline from the shoulder to the centre: square to both, so that it runs on across the shoulder seam and the fold. */
-export function necklineCurve(shoulder: Shoulder, centre: Point): CubicSegment {
+/** How far out the corner of a square neckline stands, as a share of the neckline's width at the shoulder. */
+const SQUARE_CORNER = 0.84
+/** Handles of a V neckline at the shoulder, as a share of its length. */
+const V_HANDLE = 0.22
+
+/**
+ * The neckline from the centre to the shoulder. It leaves the shoulder square, so that it runs on across the shoulder seam,
+ * and meets the centre square but for a V.
+ */
+export function necklineRail(shoulder: Shoulder, centre: Point, form: NecklineForm): Rail {
   const { neck, down } = shoulder
   const width = neck.x - centre.x
   const depth = neck.y - centre.y
   const upper = Math.min((depth * NECKLINE_FULLNESS) / Math.max(-down.y, 1e-6), (width * NECKLINE_LEAN) / Math.max(-down.x, 1e-6))
-  return cubicSegment(neck, pointAlong(neck, down, upper), { x: centre.x + width * NECKLINE_FULLNESS, y: centre.y }, centre)
+  if (form === 'square') {
+    const corner = { x: centre.x + width * SQUARE_CORNER, y: centre.y }
+    const side = cubicSegment(
+      corner,
+      { x: corner.x, y: corner.y + depth * 0.4 },
+      pointAlong(neck, down, Math.min(upper, depth * 0.3)),
+      neck,
+    )
+    return railOf(['centre', 'corner', 'neck'], [lineSegment(centre, corner), side])
+  }
+  if (form === 'v') {
+    const length = pointDistance(centre, neck)
+    const handle = pointAlong(neck, down, Math.min(upper, length * V_HANDLE))
+    const towards = vectorUnit({ x: handle.x - centre.x, y: handle.y - centre.y })
+    return railOf(['centre', 'neck'], [cubicSegment(centre, pointAlong(centre, towards, length * 0.4), handle, neck)])
+  }
+  const round = cubicSegment(centre, { x: centre.x + width * NECKLINE_FULLNESS, y: centre.y }, pointAlong(neck, down, upper), neck)
+  return railOf(['centre', 'neck'], [round])
 }
 
 /**
- * The hem of one piece between two rails read from the hem up, level and square to both, so that joined hems run on
- * without a corner.
+ * A seam from the bust to where it ends on an edge above: upright at the bust, arriving half-way between its own direction
+ * and square to that edge. `along` is the edge's direction there, from the centre outwards.
  */
-export function hemCurve(left: Path, right: Path): CubicSegment {
-  const from = pathStart(left)
-  const to = pathStart(right)
-  const handle = pointDistance(from, to) / 3
-  return cubicSegment(
-    from,
-    pointAlong(from, vectorRight(pathStartTangent(left)), handle),
-    pointAlong(to, vectorRight(pathStartTangent(right)), -handle),
-    to,
-  )
-}
-
-/** Whether two paths meet without a corner. Tolerance in radians. */
-export function runsOn(before: Path, after: Path, tolerance: number): boolean {
-  const a = pathEndTangent(before)
-  const b = pathStartTangent(after)
-  return Math.abs(Math.atan2(a.x * b.y - a.y * b.x, a.x * b.x + a.y * b.y)) <= tolerance
+export function seamAbove(from: Point, to: Point, along: Point): CubicSegment {
+  const handle = pointDistance(from, to) * ARC_HANDLE
+  const arrive = vectorUnit(pointAdd(vectorUnit(pointSubtract(to, from)), vectorLeft(along)))
+  return cubicSegment(from, pointAlong(from, { x: 0, y: 1 }, handle), pointAlong(to, arrive, -handle), to)
 }

@@ -2,7 +2,7 @@ import { bodyLevels, FRONT_SHARE } from '../body/levels'
 import type { BodyLevel } from '../body/types'
 import { pointAlong } from '../geometry/point'
 import type { Point } from '../geometry/types'
-import { bustAngle } from './bust-angle'
+import { bustAngle, bustTaken } from './bust-angle'
 import type { BustAngle } from './bust-angle'
 import { millimetres } from './say'
 import type { DraftFinding, DraftInput, LevelWidths } from './types'
@@ -13,8 +13,6 @@ const ACROSS_INSIDE_UNDERARM = 12
 const ACROSS_AT = 0.45
 /** The back shoulder lies flatter and the front steeper than the measured slope, degrees. */
 const SHOULDER_TURN = 2
-/** Where the back princess seam stands at the bust: share of the half back's width from its centre edge. */
-const BACK_PRINCESS_AT = 0.42
 
 /** The points from which one half (front or back) is drawn; mm, x from the body's centre, y over the waist. */
 export interface HalfFrame {
@@ -46,6 +44,8 @@ export interface Frame {
   readonly front: HalfFrame
   readonly back: HalfFrame
   readonly bust: BustAngle
+  /** The level above the bust: its height on the pieces and what the seams take in there; in front less the bust angle's own opening. */
+  readonly above: { readonly y: number; readonly takenFront: number; readonly takenBack: number } | null
   /** k_u: what shoulder length, across back and across front are multiplied by. */
   readonly milder: number
   readonly findings: readonly DraftFinding[]
@@ -73,9 +73,9 @@ function acrossFinding(half: 'front' | 'back', heldBy: number): readonly DraftFi
 
 /**
  * The frame by the drafting notes. Heights times the vertical factor; shoulder length, across back and across front times
- * the milder factor; widths at the bust as given. The front shoulder stands 3 mm nearer to the neck than the back's.
+ * the milder factor; widths at the bust as given. `mostAngle` (radians) holds the bust angle lower than the notes do. The front shoulder stands 3 mm nearer to the neck than the back's.
  */
-export function draftFrame({ body, style, widths }: DraftInput): Frame {
+export function draftFrame({ body, style, widths, above }: DraftInput, mostAngle?: number): Frame {
   const { values } = body
   const v = style.verticalFactor
   const levels = bodyLevels(body)
@@ -108,11 +108,14 @@ export function draftFrame({ body, style, widths }: DraftInput): Frame {
     y: heightOf('bust'),
   }
   const frontUnderarm = { x: bust.front + gapFront, y: backUnderarm.y }
+  const frontLonger = values.frontWaistLength - values.backWaistLength - rise
   const angle = bustAngle({
     bustPoint,
     underarm: { x: frontUnderarm.x, y: values.sideWaistLength * v },
-    longer: (values.frontWaistLength - values.backWaistLength - rise) * v,
+    longer: frontLonger * v,
     chosen: style.bustAngle,
+    eased: bustTaken(style, frontLonger) === 'ease',
+    most: mostAngle,
   })
   const frontDrawn = angle.turnBack(frontUnderarm)
   const frontAcross = acrossPoint((values.acrossFront / 2) * milder, frontEnd, frontDrawn)
@@ -124,6 +127,14 @@ export function draftFrame({ body, style, widths }: DraftInput): Frame {
     widthsOf,
     milder,
     bust: angle,
+    above:
+      above === undefined
+        ? null
+        : {
+            y: above.y * v,
+            takenFront: bust.front - above.front - 2 * Math.tan(angle.angle / 2) * (above.y * v - bustPoint.y),
+            takenBack: bust.back - above.back,
+          },
     front: {
       centreX: gapFront,
       width: bust.front,
@@ -149,7 +160,7 @@ export function draftFrame({ body, style, widths }: DraftInput): Frame {
       across: backAcross.at,
       underarm: backUnderarm,
       underarmDrawn: backUnderarm,
-      princess: { x: gapBack + BACK_PRINCESS_AT * bust.back, y: heightOf('bust') },
+      princess: { x: gapBack + style.backPrincessAt * bust.back, y: heightOf('bust') },
     },
     findings: [
       ...angle.findings,

@@ -8,7 +8,7 @@ import type { Polygon } from '../geometry/polygon'
 import { segmentTangentAt } from '../geometry/segment'
 import type { Path, Point } from '../geometry/types'
 import { mm } from '../units/brand'
-import type { DraftPiece, EdgeId, PieceEdge, PieceId } from './types'
+import type { DraftPiece, PieceEdge } from './types'
 
 /** A level and its height on the pieces, mm over the waist. */
 export interface LevelHeight {
@@ -19,12 +19,11 @@ export interface LevelHeight {
 /** What a piece is before anything is read off it. */
 export type PieceSketch = Pick<DraftPiece, 'id' | 'name' | 'zone' | 'edges' | 'onFold' | 'quantity'>
 
-/** The two edges between which a level crosses a piece. */
-export function edgesAcross(piece: PieceId): readonly [left: EdgeId, right: EdgeId] {
-  return piece === 'front-centre' || piece === 'back-centre' ? ['centre', 'princess'] : ['princess', 'side']
-}
-
-const edgeIn = (edges: readonly PieceEdge[], id: EdgeId): PieceEdge => edges.find((edge) => edge.id === id) as PieceEdge
+/** The two edges between which a level crosses a piece: towards the centre the last, away from it the one after the hem. */
+export const edgesAcross = (edges: readonly PieceEdge[]): readonly [left: PieceEdge, right: PieceEdge] => [
+  edges.at(-1) as PieceEdge,
+  edges[1] as PieceEdge,
+]
 
 function crossing(edge: PieceEdge, { level, y }: LevelHeight): Point | null {
   const found = pathCrossingsAtHeight(edge.path, y)
@@ -34,11 +33,11 @@ function crossing(edge: PieceEdge, { level, y }: LevelHeight): Point | null {
 }
 
 /** Where each level crosses a piece, from edge to edge, and how wide the piece is there. A level that misses an edge is left out. */
-export function levelsAcross(id: PieceId, edges: readonly PieceEdge[], heights: readonly LevelHeight[]): DraftPiece['levels'] {
-  const [left, right] = edgesAcross(id)
+export function levelsAcross(edges: readonly PieceEdge[], heights: readonly LevelHeight[]): DraftPiece['levels'] {
+  const [left, right] = edgesAcross(edges)
   return heights.flatMap((height) => {
-    const from = crossing(edgeIn(edges, left), height)
-    const to = crossing(edgeIn(edges, right), height)
+    const from = crossing(left, height)
+    const to = crossing(right, height)
     return from === null || to === null ? [] : [{ level: height.level, from, to, width: mm(to.x - from.x) }]
   })
 }
@@ -71,27 +70,23 @@ export function cuttingLineOf(edges: readonly PieceEdge[]): readonly Point[] {
   return outlineOffset(edges.map((edge) => ({ points: pointsWithTrueEnds(edge.path), allowance: edge.allowance }))) ?? []
 }
 
-function middleAt(edges: readonly PieceEdge[], id: PieceId, y: number): { readonly x: number; readonly width: number } | null {
-  const [left, right] = edgesAcross(id)
-  const from = pathCrossingsAtHeight(edgeIn(edges, left).path, y)[0]
-  const to = pathCrossingsAtHeight(edgeIn(edges, right).path, y)[0]
+function middleAt(edges: readonly PieceEdge[], y: number): { readonly x: number; readonly width: number } | null {
+  const [left, right] = edgesAcross(edges)
+  const from = pathCrossingsAtHeight(left.path, y)[0]
+  const to = pathCrossingsAtHeight(right.path, y)[0]
   return from === undefined || to === undefined ? null : { x: (from.x + to.x) / 2, width: to.x - from.x }
 }
 
 /** Grain line, arrow of greatest stretch and place of the label, within the piece, clear of the level lines. */
-function marksOf(
-  id: PieceId,
-  edges: readonly PieceEdge[],
-  heights: readonly LevelHeight[],
-): Pick<DraftPiece, 'grain' | 'stretch' | 'labelAt'> {
-  const bottom = Math.max(...edgeIn(edges, 'hem').nodes.map(({ at }) => at.y))
+function marksOf(edges: readonly PieceEdge[], heights: readonly LevelHeight[]): Pick<DraftPiece, 'grain' | 'stretch' | 'labelAt'> {
+  const bottom = Math.max(...(edges[0] as PieceEdge).nodes.map(({ at }) => at.y))
   const heightOf = (level: LevelId) => Math.max(bottom, heights.find((own) => own.level === level)?.y ?? bottom)
   const [top, underbust, waist] = [heightOf('bust'), heightOf('underbust'), heightOf('waist')]
   const at = (share: number) => bottom + (top - bottom) * share
-  const middles = [0.1, 0.35, 0.6, 0.85].map((share) => middleAt(edges, id, at(share))).filter((middle) => middle !== null)
+  const middles = [0.1, 0.35, 0.6, 0.85].map((share) => middleAt(edges, at(share))).filter((middle) => middle !== null)
   const x = middles.reduce((sum, middle) => sum + middle.x, 0) / Math.max(1, middles.length)
   const y = (underbust + waist) / 2
-  const arrow = middleAt(edges, id, y) ?? { x, width: 40 }
+  const arrow = middleAt(edges, y) ?? { x, width: 40 }
   return {
     grain: { from: { x, y: at(0.08) }, to: { x, y: at(0.92) } },
     stretch: { from: { x: arrow.x - arrow.width * 0.3, y }, to: { x: arrow.x + arrow.width * 0.3, y } },
@@ -103,8 +98,8 @@ function marksOf(
 export function readPiece(sketch: PieceSketch, heights: readonly LevelHeight[]): DraftPiece {
   return {
     ...sketch,
-    ...marksOf(sketch.id, sketch.edges, heights),
-    levels: levelsAcross(sketch.id, sketch.edges, heights),
+    ...marksOf(sketch.edges, heights),
+    levels: levelsAcross(sketch.edges, heights),
     cuttingLine: cuttingLineOf(sketch.edges),
   }
 }

@@ -1,210 +1,172 @@
 import type { LevelId } from '../body/types'
-import { pathReverse } from '../geometry/path'
-import { lineSegment, segmentReverse } from '../geometry/segment'
-import { moveBy, transformPoint } from '../geometry/transform'
-import type { Transform } from '../geometry/transform'
-import type { Path, Point, Segment } from '../geometry/types'
+import { monotoneValueAt } from '../geometry/monotone'
+import type { MonotoneCurve } from '../geometry/monotone'
 import { mm } from '../units/brand'
-import { armholeCurve } from './armhole'
-import { fairBustCorner } from './bust-angle'
-import { hemCurve, necklineCurve, princessAbove, shoulderOf } from './edges'
-import type { Shoulder } from './edges'
-import type { Frame, HalfFrame } from './frame'
+import type { Frame } from './frame'
+import { pieceIdsOf, seamLines } from './panels'
+import type { SeamLine, Zone } from './panels'
 import type { PieceSketch } from './piece'
-import { railBelowBust, railThen, wedgesOf } from './wedges'
-import type { Rail } from './wedges'
-import type { BodiceStyle, CentreKind, EdgeId, EdgeKind, EdgeNode, PieceEdge, PieceId } from './types'
-
-const PIECE_NAMES: Readonly<Record<PieceId, string>> = {
-  'front-centre': 'Front centre',
-  'side-front': 'Side front',
-  'side-back': 'Side back',
-  'back-centre': 'Back centre',
-}
-
-const STAYS = moveBy(0, 0)
-
-interface EdgePlan {
-  readonly id: EdgeId
-  readonly rail: Rail
-  readonly mate: PieceEdge['mate']
-}
-
-const reversed = (rail: Rail): Rail => ({ nodes: [...rail.nodes].reverse(), path: pathReverse(rail.path) })
-
-/** A rail of segments with the names of its nodes in order. */
-const railOf = (names: readonly string[], path: Path): Rail => ({
-  path,
-  nodes: names.map((name, index): EdgeNode => {
-    const at = index === 0 ? (path[0] as Segment).from : (path[index - 1] as Segment).to
-    return { name, at, level: null }
-  }),
-})
+import { pieceWords } from './roles'
+import { edgeAcross, heightLine } from './shapes'
+import type { Stretch } from './stretches'
+import { upperStrapless, upperWithShoulders } from './upper'
+import type { PanelRails, UpperHalf } from './upper'
+import { curveBelowBust, railBelowBust, railOf, railReverse, wedgesOf } from './wedges'
+import type { Rail, Wedges } from './wedges'
+import type { BodiceStyle, CentreKind, EdgeId, EdgeKind, PieceEdge, PieceId } from './types'
 
 function centreKind(kind: CentreKind): EdgeKind {
   if (kind === 'fold') return 'fold'
   return kind === 'seam' ? 'seam' : 'opening'
 }
 
-function allowanceOf(id: EdgeId, kind: EdgeKind, allowances: BodiceStyle['allowances']): number {
-  if (id === 'centre') return kind === 'fold' ? 0 : allowances.centre
-  if (id === 'princess' || id === 'side') return allowances.seam
-  return allowances[id]
+/** The two edges of a panel below the bust as curves of their x. */
+interface PanelCurves {
+  readonly left: MonotoneCurve
+  readonly right: MonotoneCurve
 }
 
-function sketch(id: PieceId, plans: readonly EdgePlan[], style: BodiceStyle): PieceSketch {
-  const zone = id === 'front-centre' || id === 'side-front' ? 'front' : 'back'
-  const centre = zone === 'front' ? style.centreFront : style.centreBack
-  const onFold = centre === 'fold' && (id === 'front-centre' || id === 'back-centre')
-  const edges = plans.map((plan): PieceEdge => {
-    const finished = plan.id === 'neckline' || plan.id === 'armhole' || plan.id === 'hem'
-    const kind: EdgeKind = plan.id === 'centre' ? centreKind(centre) : finished ? 'finished' : 'seam'
-    return {
-      id: plan.id,
-      kind,
-      nodes: plan.rail.nodes,
-      path: plan.rail.path,
-      mate: plan.mate,
-      allowance: mm(allowanceOf(plan.id, kind, style.allowances)),
+function panelCurves(frame: Frame, zone: Zone, lines: readonly SeamLine[], wedges: Wedges): readonly PanelCurves[] {
+  const half = frame[zone]
+  const curve = (xAt: (level: LevelId) => number) => curveBelowBust(frame, xAt)
+  const seam = ({ id, x }: SeamLine, sign: 1 | -1) => curve((level) => x + sign * wedges.at(zone, id, level))
+  const centre = curve((level) => wedges.at(zone, 'centre', level))
+  const side = curve((level) => half.underarm.x - wedges.at(zone, 'side', level))
+  return [...lines, null].map((line, index) => ({
+    left: index === 0 ? centre : seam(lines[index - 1] as SeamLine, 1),
+    right: line === null ? side : seam(line, -1),
+  }))
+}
+
+/** The hem of a half: its rails cut at their own heights, and its edge panel by panel. */
+function hemmed(
+  curves: readonly PanelCurves[],
+  zone: Zone,
+  style: BodiceStyle,
+  hemHeight: number,
+  names: readonly string[],
+): { readonly rails: readonly PanelRails[]; readonly hems: readonly Rail[] } {
+  const { form, front, back, side, curve } = style.hemShape
+  const drop = heightLine(form, zone === 'front' ? front : back, form === 'straight' ? 0 : side, curve)
+  const widths = curves.map(({ left, right }) => monotoneValueAt(right, hemHeight) - monotoneValueAt(left, hemHeight))
+  const whole = widths.reduce((sum, width) => sum + width, 0)
+  const stations = [0]
+  widths.forEach((width) => stations.push((stations.at(-1) as number) + width / whole))
+  const heightAt = (index: number) => hemHeight - drop.at(stations[index] as number)
+  const slopeAt = (index: number) => -drop.slope(stations[index] as number) / whole
+  const rails = curves.map(({ left, right }, index) => ({
+    left: railBelowBust(left, heightAt(index)),
+    right: railBelowBust(right, heightAt(index + 1)),
+  }))
+  const hems = rails.map(({ left, right }, index) =>
+    railOf(
+      [names[index] as string, names[index + 1] as string],
+      [edgeAcross(left.path, right.path, [slopeAt(index), slopeAt(index + 1)], true)],
+    ),
+  )
+  return { rails, hems }
+}
+
+const KINDS: Readonly<Record<Stretch['edge'], EdgeKind>> = {
+  neckline: 'finished',
+  armhole: 'finished',
+  top: 'finished',
+  shoulder: 'seam',
+  dart: 'seam',
+}
+
+/** A shoulder's part and its place, for the other half to find. */
+interface ShoulderPlace {
+  readonly part: NonNullable<Stretch['part']>
+  readonly piece: PieceId
+  readonly edge: EdgeId
+}
+
+interface HalfSketch {
+  readonly pieces: readonly PieceSketch[]
+  readonly shoulders: readonly ShoulderPlace[]
+}
+
+function sketchHalf(frame: Frame, style: BodiceStyle, hemHeight: number, zone: Zone, wedges: Wedges, otherSide: PieceId): HalfSketch {
+  const { allowances } = style
+  const kind = zone === 'front' ? style.centreFront : style.centreBack
+  const lines = seamLines(frame[zone], style.panels[zone])
+  const ids = pieceIdsOf(zone, lines)
+  const names: readonly EdgeId[] = ['centre', ...lines.map(({ id }) => id), 'side']
+  const { rails: below, hems } = hemmed(panelCurves(frame, zone, lines, wedges), zone, style, hemHeight, names)
+  const input = { frame, style, zone, lines, below }
+  const upper: UpperHalf =
+    style.top === null ? upperWithShoulders(input) : upperStrapless(input, (place) => wedges.at(zone, place, 'above'))
+
+  const shoulders: ShoulderPlace[] = []
+  const pieces = ids.map((id, index): PieceSketch => {
+    const onFold = index === 0 && kind === 'fold'
+    const { left, right } = upper.rails[index] as PanelRails
+    const edge = (own: EdgeId, edgeKind: EdgeKind, rail: Rail, mate: PieceEdge['mate'], allowance: number): PieceEdge => ({
+      id: own,
+      kind: edgeKind,
+      nodes: rail.nodes,
+      path: rail.path,
+      mate,
+      allowance: mm(allowance),
       notches: [],
+    })
+    const line = (place: number, rail: Rail): PieceEdge => {
+      const own = names[place] as EdgeId
+      if (own === 'centre') {
+        const edgeKind = centreKind(kind)
+        const allowance = edgeKind === 'fold' ? 0 : edgeKind === 'seam' ? allowances.centre : allowances.opening
+        return edge(own, edgeKind, rail, kind === 'seam' ? { piece: id, edge: 'centre' } : null, allowance)
+      }
+      const mate = own === 'side' ? otherSide : (ids[place === index ? index - 1 : index + 1] as PieceId)
+      return edge(own, 'seam', rail, { piece: mate, edge: own }, allowances.seam)
+    }
+    const above = (upper.uppers[index] as readonly Stretch[]).map((stretch): PieceEdge => {
+      if (stretch.part !== undefined) shoulders.push({ part: stretch.part, piece: id, edge: stretch.id })
+      const mate = stretch.edge === 'dart' ? ({ piece: id, edge: stretch.id === 'dart' ? 'dart-beyond' : 'dart' } as const) : null
+      const allowance = stretch.edge === 'dart' ? allowances.seam : stretch.edge === 'top' ? allowances.neckline : allowances[stretch.edge]
+      return edge(stretch.id, KINDS[stretch.edge], railReverse(stretch.rail), mate, allowance)
+    })
+    return {
+      id,
+      name: pieceWords(id),
+      zone,
+      edges: [
+        edge('hem', 'finished', hems[index] as Rail, null, allowances.hem),
+        line(index + 1, right),
+        ...above.reverse(),
+        line(index, railReverse(left)),
+      ],
+      onFold,
+      quantity: onFold ? 1 : 2,
     }
   })
-  return { id, name: PIECE_NAMES[id], zone, edges, onFold, quantity: onFold ? 1 : 2 }
+  return { pieces, shoulders }
 }
 
-function centrePiece(
-  id: 'front-centre' | 'back-centre',
-  half: HalfFrame,
-  shoulder: Shoulder,
-  rails: { readonly centre: Rail; readonly princess: Rail },
-  neckCentre: Point,
-  style: BodiceStyle,
-): PieceSketch {
-  const front = id === 'front-centre'
-  const kind = front ? style.centreFront : style.centreBack
-  const top = { x: half.centreX, y: neckCentre.y }
-  const bust = rails.centre.nodes.at(-1) as EdgeNode
-  const centre = railThen(rails.centre, [{ segment: lineSegment(bust.at, top), name: 'neckline' }])
-  const princess = railThen(rails.princess, [{ segment: princessAbove(half, shoulder), name: 'shoulder' }])
-  return sketch(
-    id,
-    [
-      { id: 'hem', rail: railOf(['centre', 'princess'], [hemCurve(centre.path, princess.path)]), mate: null },
-      { id: 'princess', rail: princess, mate: { piece: front ? 'side-front' : 'side-back', edge: 'princess' } },
-      {
-        id: 'shoulder',
-        rail: railOf(['princess', 'neck'], [lineSegment(shoulder.princess, shoulder.neck)]),
-        mate: { piece: front ? 'back-centre' : 'front-centre', edge: 'shoulder' },
-      },
-      { id: 'neckline', rail: railOf(['neck', 'centre'], [necklineCurve(shoulder, top)]), mate: null },
-      { id: 'centre', rail: reversed(centre), mate: kind === 'seam' ? { piece: id, edge: 'centre' } : null },
-    ],
-    style,
+/** The pieces of one half with their shoulders joined to those of the other. */
+function joined({ pieces, shoulders }: HalfSketch, other: HalfSketch): readonly PieceSketch[] {
+  const mates = new Map(
+    shoulders.map(({ part, piece, edge }) => [`${piece} ${edge}`, other.shoulders.find((own) => own.part === part) ?? null]),
   )
+  return pieces.map((piece) => ({
+    ...piece,
+    edges: piece.edges.map((edge) => {
+      const mate = mates.get(`${piece.id} ${edge.id}`)
+      return mate === undefined || mate === null ? edge : { ...edge, mate: { piece: mate.piece, edge: mate.edge } }
+    }),
+  }))
 }
 
-function sidePiece(
-  id: 'side-front' | 'side-back',
-  half: HalfFrame,
-  shoulder: Shoulder,
-  rails: { readonly princess: Rail; readonly side: Rail },
-  turned: Transform,
-  style: BodiceStyle,
-): PieceSketch {
-  const front = id === 'side-front'
-  const bust = rails.side.nodes.at(-1) as EdgeNode
-  const side = railThen(rails.side, [{ segment: lineSegment(bust.at, half.underarm), name: 'underarm' }])
-  const armhole = armholeCurve(half, shoulder, turned)
-  return sketch(
-    id,
-    [
-      { id: 'hem', rail: railOf(['princess', 'side'], [hemCurve(rails.princess.path, side.path)]), mate: null },
-      { id: 'side', rail: side, mate: { piece: front ? 'side-back' : 'side-front', edge: 'side' } },
-      {
-        id: 'armhole',
-        rail: railOf(['underarm', 'across', 'tip'], [segmentReverse(armhole.lower), segmentReverse(armhole.upper)]),
-        mate: null,
-      },
-      {
-        id: 'shoulder',
-        rail: railOf(['tip', 'princess'], [lineSegment(armhole.upper.from, transformPoint(turned, shoulder.princess))]),
-        mate: { piece: front ? 'side-back' : 'side-front', edge: 'shoulder' },
-      },
-      { id: 'princess', rail: reversed(rails.princess), mate: { piece: front ? 'front-centre' : 'back-centre', edge: 'princess' } },
-    ],
-    style,
-  )
-}
-
-/** The side front's princess edge from the hem up: faired at the bust, turned above it. */
-function turnedPrincess(below: Rail, above: Segment, frame: Frame): { readonly rail: Rail; readonly turned: Transform } {
-  const { bust } = frame
-  const edge = fairBustCorner(bust, [above], pathReverse(below.path))
-  if (bust.angle === 0) return { rail: railThen(below, [{ segment: above, name: 'shoulder' }]), turned: STAYS }
-  const downwards = pathReverse(edge.down)
-  const names: EdgeNode[] = [...below.nodes.slice(0, -1), { name: 'fairing-below', at: (downwards.at(-1) as Segment).from, level: null }]
-  const bustNode = below.nodes.at(-1) as EdgeNode
-  const rail: Rail = { path: downwards, nodes: [...names, bustNode] }
-  const [fairing, seam] = edge.up
-  return {
-    turned: edge.turned,
-    rail: railThen(rail, [
-      { segment: fairing as Segment, name: 'fairing-above' },
-      { segment: seam as Segment, name: 'shoulder' },
-    ]),
-  }
-}
-
-/** The four pieces of a half as edges: the frame's rectangles, their wedges taken out, styled and turned. `hemHeight` in mm over the waist. */
+/**
+ * The pieces of a half of the body as edges, from the centre front round to the centre back: the frame's rectangles, their
+ * wedges taken out, styled and turned. Every piece has its hem first, then the edge away from the centre, what bounds it
+ * above, and last the edge towards the centre. `hemHeight` in mm over the waist.
+ */
 export function sketchPieces(frame: Frame, style: BodiceStyle, hemHeight: number): readonly PieceSketch[] {
-  const { front, back } = frame
   const wedges = wedgesOf(frame, style)
-  const rail = (xAt: (level: LevelId) => number) => railBelowBust(frame, hemHeight, xAt)
-  const frontShoulder = shoulderOf(front, style)
-  const backShoulder = shoulderOf(back, style)
-  const frontNeck = { x: front.centreX, y: front.neckCentre.y - style.necklineFrontDepth }
-  const backNeck = { x: back.centreX, y: back.neckCentre.y - style.necklineBackDepth }
-  const sideFront = turnedPrincess(
-    rail((level) => front.princess.x + wedges.frontPrincess(level)),
-    princessAbove(front, frontShoulder),
-    frame,
-  )
-  const sideBack = railThen(
-    rail((level) => back.princess.x + wedges.backPrincess(level)),
-    [{ segment: princessAbove(back, backShoulder), name: 'shoulder' }],
-  )
-  return [
-    centrePiece(
-      'front-centre',
-      front,
-      frontShoulder,
-      { centre: rail(wedges.frontCentre), princess: rail((level) => front.princess.x - wedges.frontPrincess(level)) },
-      frontNeck,
-      style,
-    ),
-    sidePiece(
-      'side-front',
-      front,
-      frontShoulder,
-      { princess: sideFront.rail, side: rail((level) => front.underarm.x - wedges.side(level)) },
-      sideFront.turned,
-      style,
-    ),
-    sidePiece(
-      'side-back',
-      back,
-      backShoulder,
-      { princess: sideBack, side: rail((level) => back.underarm.x - wedges.side(level)) },
-      STAYS,
-      style,
-    ),
-    centrePiece(
-      'back-centre',
-      back,
-      backShoulder,
-      { centre: rail(wedges.backCentre), princess: rail((level) => back.princess.x - wedges.backPrincess(level)) },
-      backNeck,
-      style,
-    ),
-  ]
+  const sideOf = (zone: Zone) => (style.panels[zone].princess ? (zone === 'front' ? 'side-front' : 'side-back') : zone)
+  const front = sketchHalf(frame, style, hemHeight, 'front', wedges, sideOf('back'))
+  const back = sketchHalf(frame, style, hemHeight, 'back', wedges, sideOf('front'))
+  return [...joined(front, back), ...[...joined(back, front)].reverse()]
 }

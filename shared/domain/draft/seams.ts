@@ -1,6 +1,7 @@
 import { pathLength, pathPointAt, pathTangentAt } from '../geometry/path'
 import { vectorLeft } from '../geometry/point'
 import { mm } from '../units/brand'
+import { edgeWords, wholeEdge } from './roles'
 import type { DraftPiece, EdgeId, Notch, PieceEdge, PieceId, SeamComparison } from './types'
 
 /** A seam of the bodice: both mates, and whether their edges are travelled the same way. */
@@ -13,54 +14,62 @@ interface Seam {
   readonly notch: Notch['kind']
 }
 
-/** The seams between the four pieces of a half; `a` is travelled from the hem up, or from the side to the neck. */
-export const SEAMS: readonly Seam[] = [
-  {
-    id: 'front-princess',
-    name: 'Front princess seam',
-    a: { piece: 'front-centre', edge: 'princess' },
-    b: { piece: 'side-front', edge: 'princess' },
-    sameWay: false,
-    notch: 'single',
-  },
-  {
-    id: 'side',
-    name: 'Side seam',
-    a: { piece: 'side-front', edge: 'side' },
-    b: { piece: 'side-back', edge: 'side' },
-    sameWay: true,
-    notch: 'single',
-  },
-  {
-    id: 'back-princess',
-    name: 'Back princess seam',
-    a: { piece: 'back-centre', edge: 'princess' },
-    b: { piece: 'side-back', edge: 'princess' },
-    sameWay: false,
-    notch: 'double',
-  },
-  {
-    id: 'shoulder-centre',
-    name: 'Shoulder seam at the neck',
-    a: { piece: 'front-centre', edge: 'shoulder' },
-    b: { piece: 'back-centre', edge: 'shoulder' },
-    sameWay: true,
-    notch: 'single',
-  },
-  {
-    id: 'shoulder-side',
-    name: 'Shoulder seam at the arm',
-    a: { piece: 'side-front', edge: 'shoulder' },
-    b: { piece: 'side-back', edge: 'shoulder' },
-    sameWay: true,
-    notch: 'single',
-  },
-]
-
 /** Whether mates are travelled the same way (front and back lie with the centre on the same side) or against each other. */
-export function matesTravelAlike(piece: PieceId, edge: EdgeId): boolean {
-  return SEAMS.find((seam) => [seam.a, seam.b].some((own) => own.piece === piece && own.edge === edge))?.sameWay ?? false
+export const matesTravelAlike = (edge: EdgeId): boolean => edge === 'side' || wholeEdge(edge) === 'shoulder'
+
+function shoulderSeam(edge: PieceEdge): Pick<Seam, 'id' | 'name'> {
+  const inner = startsAtNeck(edge)
+  const outer = edge.nodes.some(({ name }) => name === 'tip')
+  if (inner && outer) return { id: 'shoulder', name: 'Shoulder seam' }
+  return inner ? { id: 'shoulder-centre', name: 'Shoulder seam at the neck' } : { id: 'shoulder-side', name: 'Shoulder seam at the arm' }
 }
+
+function seamWords(piece: DraftPiece, edge: PieceEdge): Pick<Seam, 'id' | 'name'> {
+  if (edge.id === 'side') return { id: 'side', name: 'Side seam' }
+  if (edge.id === 'dart') return { id: 'dart', name: 'Bust dart' }
+  if (wholeEdge(edge.id) === 'shoulder') return shoulderSeam(edge)
+  const half = piece.zone === 'front' ? 'Front' : 'Back'
+  return { id: `${piece.zone}-${edge.id}`, name: `${half} ${edgeWords(edge.id)}` }
+}
+
+/**
+ * The seams of the bodice by the mates of its edges: those of the front from the centre outwards, the side, those of the back,
+ * the shoulders, the dart. `a` is the front's edge, or that of the piece nearer to the centre.
+ */
+function seamsOf(pieces: readonly DraftPiece[]): readonly Seam[] {
+  const seam = (piece: DraftPiece, edge: PieceEdge): Seam => {
+    const { id, name } = seamWords(piece, edge)
+    const inBack = piece.zone === 'back'
+    return {
+      id,
+      name,
+      a: { piece: piece.id, edge: edge.id },
+      b: edge.mate as Seam['b'],
+      sameWay: matesTravelAlike(edge.id),
+      notch: inBack ? 'double' : 'single',
+    }
+  }
+  const owned = pieces.flatMap((piece) => piece.edges.map((edge) => ({ piece, edge })))
+  const fromTo = (zone: DraftPiece['zone']) => {
+    const own = owned.filter(
+      ({ piece, edge }) => piece.zone === zone && edge === piece.edges[1] && edge.id !== 'side' && edge.mate !== null,
+    )
+    return zone === 'front' ? own : own.reverse()
+  }
+  const inFront = (test: (edge: PieceEdge) => boolean) =>
+    owned.filter(({ piece, edge }) => piece.zone === 'front' && edge.mate !== null && test(edge))
+  return [
+    ...fromTo('front'),
+    ...inFront(({ id }) => id === 'side'),
+    ...fromTo('back'),
+    ...inFront((edge) => wholeEdge(edge.id) === 'shoulder').sort(
+      (one, other) => Number(startsAtNeck(other.edge)) - Number(startsAtNeck(one.edge)),
+    ),
+    ...inFront(({ id }) => id === 'dart'),
+  ].map(({ piece, edge }) => seam(piece, edge))
+}
+
+const startsAtNeck = (edge: PieceEdge): boolean => edge.nodes.some(({ name }) => name === 'neck')
 
 /** An edge of a piece; that it is there is the draft's own promise. */
 export function edgeOf(pieces: readonly DraftPiece[], piece: PieceId, edge: EdgeId): PieceEdge {
@@ -71,7 +80,7 @@ export function edgeOf(pieces: readonly DraftPiece[], piece: PieceId, edge: Edge
 
 /** Every seam with the length of both mates along the seam line, mm, and their difference. */
 export function compareSeams(pieces: readonly DraftPiece[]): readonly SeamComparison[] {
-  return SEAMS.map(({ name, a, b }) => {
+  return seamsOf(pieces).map(({ name, a, b }) => {
     const first = pathLength(edgeOf(pieces, a.piece, a.edge).path)
     const second = pathLength(edgeOf(pieces, b.piece, b.edge).path)
     return { name, a: { ...a, length: mm(first) }, b: { ...b, length: mm(second) }, difference: mm(first - second) }
@@ -109,7 +118,7 @@ export function withNotches(pieces: readonly DraftPiece[]): readonly DraftPiece[
     const key = `${piece} ${edge}`
     found.set(key, [...(found.get(key) ?? []), notch])
   }
-  for (const { id, a, b, sameWay, notch } of SEAMS) {
+  for (const { id, a, b, sameWay, notch } of seamsOf(pieces)) {
     const first = edgeOf(pieces, a.piece, a.edge)
     const second = edgeOf(pieces, b.piece, b.edge)
     const whole = pathLength(second.path)

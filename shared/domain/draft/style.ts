@@ -2,17 +2,21 @@ import { bodyLevels } from '../body/levels'
 import type { DraftBody } from '../body/types'
 import { mm } from '../units/brand'
 import type { Problem } from '../units/result'
-import type { BodiceStyle } from './types'
+import type { BodiceStyle, HalfPanels } from './types'
 
 /** Seam allowances to begin with, mm: common practice for stretch cloth. */
 const DEFAULT_ALLOWANCES: BodiceStyle['allowances'] = {
   seam: mm(10),
   centre: mm(15),
+  opening: mm(15),
   shoulder: mm(10),
   neckline: mm(10),
   armhole: mm(10),
   hem: mm(20),
 }
+
+/** Two panels: a princess seam and no other. */
+const PRINCESS_PANELS: HalfPanels = { princess: true, further: [] }
 
 /**
  * The base style: neckline at the neck base, full shoulder, hem at the hip, folds at both centres, heights as on the
@@ -22,15 +26,24 @@ export function baseStyle(): BodiceStyle {
   return {
     centreFront: 'fold',
     centreBack: 'fold',
+    panels: { front: PRINCESS_PANELS, back: PRINCESS_PANELS },
     hem: { level: 'hip', below: mm(0) },
+    hemShape: { form: 'straight', front: mm(0), back: mm(0), side: mm(0), curve: 0.4 },
+    neckline: { front: 'round', back: 'round' },
     necklineFrontDepth: mm(0),
     necklineBackDepth: mm(0),
     necklineWidth: mm(0),
+    top: null,
     princessAt: 0.5,
+    princessEnd: { front: { edge: 'shoulder', at: 0.5 }, back: { edge: 'shoulder', at: 0.5 } },
+    backPrincessAt: 0.42,
     frontShares: { centre: 0, princess: 0.62, side: 0.38 },
     backShares: { centre: 0.14, princess: 0.5, side: 0.36 },
+    letOut: { front: null, back: null },
+    openingsTake: { front: false, back: false },
     verticalFactor: 1,
     bustAngle: null,
+    bustAs: 'auto',
     underarmDrop: mm(0),
     allowances: DEFAULT_ALLOWANCES,
   }

@@ -6,6 +6,7 @@ import type { LevelChoice } from '../document/types'
 import { freshLevel } from '../document/fresh'
 import { applyAlterations } from '../draft/alterations'
 import { draftBodice } from '../draft/bodice'
+import { blockOf } from '../draft/roles'
 import { checkStyle } from '../draft/style'
 import type { Draft, LevelWidths } from '../draft/types'
 import { cappedHold } from '../textile/hold'
@@ -221,7 +222,8 @@ function widthsRead(draft: Draft, level: Level): readonly Mm[] | null {
   for (const piece of draft.pieces) {
     const crossing = piece.levels.find((one) => one.level === level.body.id)
     if (!crossing) return null
-    onPieces.set(piece.id, crossing.width)
+    const part = blockOf(piece.id)
+    onPieces.set(part, (onPieces.get(part) ?? 0) + crossing.width)
   }
   const paper = level.parts.map((part) => 2 * part.pieces.reduce((sum, piece) => sum + (onPieces.get(piece) ?? 0), 0))
   const half = (side: 'front' | 'back') => paper.reduce((sum, width, i) => (level.parts[i]!.half === side ? sum + width : sum), 0)

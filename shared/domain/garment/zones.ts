@@ -1,6 +1,7 @@
 import type { LevelId } from '../body/types'
 import type { ExtraZone } from '../document/types'
-import type { Draft, PieceId } from '../draft/types'
+import { blockOf, halfOf } from '../draft/roles'
+import type { BlockId, Draft, PieceId } from '../draft/types'
 import type { LayerPlan } from '../textile/types'
 
 /** The plan of each zone that has one; front and back always have. */
@@ -9,15 +10,16 @@ export type ZonePlans = { readonly front: LayerPlan; readonly back: LayerPlan } 
 /** The order in which zones beside front and back are read: one before another goes over it where both reach. */
 export const EXTRA_ZONES: readonly ExtraZone[] = ['waistPanel', 'cups', 'side', 'yoke', 'sleeve']
 
+/** The parts of each half, from its centre outwards: the pieces up to the princess seam and those beyond it. */
 const HALF_PIECES = { front: ['front-centre', 'side-front'], back: ['back-centre', 'side-back'] } as const satisfies Readonly<
-  Record<'front' | 'back', readonly PieceId[]>
+  Record<'front' | 'back', readonly BlockId[]>
 >
 
 /** Where a zone lies on the pieces of the bodice. Yoke and sleeve lie on no level of it. */
-const REACHES: Readonly<Record<ExtraZone, (piece: PieceId, level: LevelId) => boolean>> = {
-  waistPanel: (_piece, level) => level === 'waist',
-  cups: (piece, level) => level === 'bust' && (piece === 'front-centre' || piece === 'side-front'),
-  side: (piece) => piece === 'side-front' || piece === 'side-back',
+const REACHES: Readonly<Record<ExtraZone, (part: BlockId, level: LevelId) => boolean>> = {
+  waistPanel: (_part, level) => level === 'waist',
+  cups: (part, level) => level === 'bust' && halfOf(part) === 'front',
+  side: (part) => part === 'side-front' || part === 'side-back',
   yoke: () => false,
   sleeve: () => false,
 }
@@ -26,7 +28,7 @@ const REACHES: Readonly<Record<ExtraZone, (piece: PieceId, level: LevelId) => bo
 export const zoneStanding = (zone: ExtraZone): 'pieces' | 'part' | 'none' =>
   zone === 'side' ? 'pieces' : zone === 'yoke' || zone === 'sleeve' ? 'none' : 'part'
 
-/** Part of a half at the bust that is the piece next to its centre. */
+/** Part of a half at the bust that lies between its centre and the princess seam; 1 where the half is one panel. */
 export interface BustSplit {
   readonly front: number
   readonly back: number
@@ -35,21 +37,20 @@ export interface BustSplit {
 /** Halves divided evenly, until a draft says more. */
 export const EVEN_SPLIT: BustSplit = { front: 0.5, back: 0.5 }
 
-/** A segment of a ring before it has a plan: the pieces it runs over, of one half, and its share of the half's free arc. */
+/** A segment of a ring before it has a plan: the parts of a half it runs over, and its share of the half's free arc. */
 export interface ZoneSegment {
   readonly half: 'front' | 'back'
   readonly zone: 'front' | 'back' | ExtraZone
-  readonly pieces: readonly PieceId[]
+  readonly pieces: readonly BlockId[]
   readonly share: number
 }
 
 /** The zone whose layers a piece has at a level. */
 export function zoneAt(plans: Readonly<Partial<Record<ExtraZone, unknown>>>, piece: PieceId, level: LevelId): ZoneSegment['zone'] {
-  const half = piece === 'front-centre' || piece === 'side-front' ? 'front' : 'back'
-  return EXTRA_ZONES.find((zone) => plans[zone] !== undefined && REACHES[zone](piece, level)) ?? half
+  return EXTRA_ZONES.find((zone) => plans[zone] !== undefined && REACHES[zone](blockOf(piece), level)) ?? halfOf(piece)
 }
 
-/** The segments of a level: one for each half, or one for each piece where the pieces of a half have different layers. */
+/** The segments of a level: one for each half, or one for each part where the parts of a half have different layers and both have pieces. */
 export function zoneSegments(
   plans: Readonly<Partial<Record<ExtraZone, unknown>>>,
   level: LevelId,
@@ -58,7 +59,7 @@ export function zoneSegments(
   return (['front', 'back'] as const).flatMap((half): readonly ZoneSegment[] => {
     const [centre, side] = HALF_PIECES[half]
     const [zone, other] = [zoneAt(plans, centre, level), zoneAt(plans, side, level)]
-    if (zone === other) return [{ half, zone, pieces: [centre, side], share: 1 }]
+    if (zone === other || split[half] >= 1) return [{ half, zone, pieces: [centre, side], share: 1 }]
     return [
       { half, zone, pieces: [centre], share: split[half] },
       { half, zone: other, pieces: [side], share: 1 - split[half] },
@@ -71,8 +72,10 @@ export const dividesHalves = (plans: Readonly<Partial<Record<ExtraZone, unknown>
 
 /** How the pieces divide each half at the bust. */
 export function bustSplit(draft: Draft): BustSplit {
-  const width = (id: PieceId) =>
-    draft.pieces.find((piece) => piece.id === id)?.levels.find((crossing) => crossing.level === 'bust')?.width ?? 0
+  const width = (part: BlockId) =>
+    draft.pieces
+      .filter((piece) => blockOf(piece.id) === part)
+      .reduce((sum, piece) => sum + (piece.levels.find((crossing) => crossing.level === 'bust')?.width ?? 0), 0)
   const share = (half: 'front' | 'back') => {
     const [centre, side] = HALF_PIECES[half].map(width) as [number, number]
     return centre + side > 0 ? centre / (centre + side) : EVEN_SPLIT[half]

@@ -1,10 +1,11 @@
-import type { DraftPiece, PieceId } from '../draft/types'
+import { BLOCKS, blockOf } from '../draft/roles'
+import type { DraftPiece } from '../draft/types'
 import { insideAtHeight } from './crossings'
 import { boundsOfPoints, placePoint } from './placing'
 import type { Placement } from './types'
 
-/** From the centre front round to the centre back. */
-export const WEARING_ORDER: readonly PieceId[] = ['front-centre', 'side-front', 'side-back', 'back-centre']
+/** Where a piece lies from the centre front round to the centre back; pieces of one part keep the order of the draft. */
+const wearingPlace = (piece: DraftPiece): number => BLOCKS.indexOf(blockOf(piece.id))
 
 /** Height between the level lines on which two cutting lines are compared when pieces are pushed together, mm. */
 const ROW = 2
@@ -19,7 +20,7 @@ const upright = (piece: DraftPiece): Placement => ({ piece: piece.id, mirrored: 
  * first row on top; grain lines stay upright. A piece wider than `width` has a row of its own.
  */
 export function layoutPieces(pieces: readonly DraftPiece[], mode: 'wearing' | 'packed', spacing: number, width = Infinity): Placement[] {
-  const ordered = [...pieces].sort((a, b) => WEARING_ORDER.indexOf(a.id) - WEARING_ORDER.indexOf(b.id))
+  const ordered = [...pieces].sort((a, b) => wearingPlace(a) - wearingPlace(b))
   return mode === 'wearing' ? wearing(ordered, spacing) : packed(ordered, spacing, width)
 }
 

@@ -1,5 +1,6 @@
 import type { LevelId } from '../body/types'
 import type { Caution } from '../cautions/types'
+import { blockOf } from '../draft/roles'
 import type { DraftPiece, EdgeId } from '../draft/types'
 import type { HoldBand } from '../textile/types'
 import { formatLength } from '../units/format'
@@ -34,7 +35,7 @@ export type PrintZone = 'front' | 'side' | 'back'
 
 /** Layers of a piece: those of the side where the side has its own, else of its half. */
 export function layersOf(piece: Pick<DraftPiece, 'id' | 'zone'>, facts: Pick<PrintFacts, 'layers'>): PrintFacts['layers'] {
-  const side = piece.id === 'side-front' || piece.id === 'side-back' ? facts.layers.filter((layer) => layer.zone === 'side') : []
+  const side = blockOf(piece.id).startsWith('side-') ? facts.layers.filter((layer) => layer.zone === 'side') : []
   return side.length > 0 ? side : facts.layers.filter((layer) => layer.zone === piece.zone)
 }
 

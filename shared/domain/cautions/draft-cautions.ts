@@ -44,6 +44,20 @@ export const bustAngleHeld = finding(
   DESIGN,
   'Check the front lengths, or type the angle.',
 )
+export const bustAngleEased = finding(
+  'bust-angle-eased',
+  'note',
+  'The front armhole is eased: gather it evenly over its lower half.',
+  DESIGN,
+  'Ease it with elastic or tape, or take a dart or a princess seam.',
+)
+export const bustAngleDart = finding(
+  'bust-angle-dart',
+  'note',
+  'Sew the bust dart before the side seam.',
+  DESIGN,
+  'Mark its point; take a princess seam where a dart would show.',
+)
 export const bustLevelMoved = finding(
   'bust-level-moved',
   'note',

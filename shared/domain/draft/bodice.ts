@@ -11,12 +11,12 @@ import type { Frame } from './frame'
 import { outlineIsSound, readPiece } from './piece'
 import type { LevelHeight } from './piece'
 import { sketchPieces } from './pieces'
-import { millimetres } from './say'
+import { degrees, millimetres } from './say'
 import { halfOf, wholeEdge } from './roles'
 import { compareSeams, withNotches } from './seams'
 import { checkStyle } from './style'
 import { crossedProblem, drawnProblem, heldFrame } from './upper-limits'
-import type { BodiceStyle, Draft, DraftFinding, DraftInput, DraftPiece, PieceId } from './types'
+import type { BodiceStyle, Draft, DraftFinding, DraftInput, DraftPiece, EdgeId, PieceEdge, PieceId } from './types'
 import { wedgesOf } from './wedges'
 
 const LEVELS: readonly LevelId[] = ['bust', 'underbust', 'waist', 'high-hip', 'hip']
@@ -39,7 +39,23 @@ const LEAST_BESIDE_ARMHOLE = 12
 /** Levels by the names they have in the draft's frame. */
 const levelName = (level: LevelId): string => `level-${level}`
 
-function widthProblem({ widths, style }: DraftInput): Problem | null {
+function widthProblem({ widths, style, above }: DraftInput): Problem | null {
+  if (style.top !== null && above === undefined) {
+    return {
+      code: 'top-without-level',
+      message: 'A strapless bodice hangs from a level above the bust, and there is none.',
+      todo: 'Measure the upper bust girth and choose the hold there, or take shoulders.',
+      at: 'style.top',
+    }
+  }
+  if (above !== undefined && !(above.front > 0 && above.back > 0 && Number.isFinite(above.front + above.back + above.y))) {
+    return {
+      code: 'width-missing',
+      message: 'The level above the bust has no width to draft.',
+      todo: 'Solve its ring first.',
+      at: 'style.top',
+    }
+  }
   for (const level of LEVELS) {
     const own = widths.find((candidate) => candidate.level === level)
     const values = own === undefined ? [] : [own.front, own.back, own.gapFront, own.gapBack]
@@ -179,6 +195,29 @@ export const armholeLength = (pieces: readonly DraftPiece[]): number =>
     .filter(({ id }) => wholeEdge(id) === 'armhole')
     .reduce((sum, { path }) => sum + pathLength(path), 0)
 
+const EDGE_WORDS: Readonly<Partial<Record<EdgeId, string>>> = { neckline: 'neckline', armhole: 'armhole', top: 'top edge' }
+
+/** The dart that takes the place of a princess seam: said, with its width at the mouth. */
+function dartFinding(pieces: readonly DraftPiece[], { bust }: Frame): readonly DraftFinding[] {
+  const piece = pieces.find(({ edges }) => edges.some(({ id }) => id === 'dart'))
+  const leg = piece?.edges.findIndex(({ id }) => id === 'dart') ?? -1
+  const own = piece?.edges[leg]
+  if (piece === undefined || own === undefined) return []
+  const into = EDGE_WORDS[wholeEdge((piece.edges[leg + 1] as PieceEdge).id)] ?? 'edge'
+  const mouth = 2 * pathLength(own.path) * Math.sin(bust.angle / 2)
+  const shown = (bust.angle * 180) / Math.PI
+  return [
+    {
+      code: 'bust-angle-dart',
+      piece: piece.id,
+      edge: 'dart',
+      value: shown,
+      unit: 'degree',
+      message: `The bust angle of ${degrees(shown)} is a dart from the bust point into the ${into}, ${millimetres(mouth)} wide at its mouth.`,
+    },
+  ]
+}
+
 /** A finding on the piece that has its edge, the one nearest to the side; on that half's side piece where none has. */
 function placedFinding(finding: DraftFinding, pieces: readonly DraftPiece[]): DraftFinding {
   if (finding.piece === null || pieces.some(({ id }) => id === finding.piece)) return finding
@@ -246,6 +285,7 @@ export function draftBodice(input: DraftInput): Result<Draft> {
     seams: compareSeams(pieces),
     findings: [
       ...frame.findings.map((finding) => placedFinding(finding, pieces)),
+      ...dartFinding(pieces, frame),
       ...(Math.abs(moved) > SIDE_SEAM_MOVED
         ? [
             {

@@ -5,8 +5,11 @@ import { moveBy, transformThen, turnAbout } from '../geometry/transform'
 import type { Transform } from '../geometry/transform'
 import type { Path, Point } from '../geometry/types'
 import { degrees, millimetres } from './say'
-import { BUST_ANGLE_LARGE, BUST_ANGLE_MOST } from './style'
 import type { BodiceStyle, DraftFinding } from './types'
+
+/** Degrees: the bust angle is said from the first and held at the second. */
+export const BUST_ANGLE_LARGE = 30
+export const BUST_ANGLE_MOST = 42
 
 /** The bust angle and how it turns points. */
 export interface BustAngle {

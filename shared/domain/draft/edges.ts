@@ -1,4 +1,4 @@
-import { pointAdd, pointAlong, pointDistance, pointSubtract, vectorLeft, vectorRight, vectorUnit } from '../geometry/point'
+import { pointAdd, pointAlong, pointDistance, pointScale, pointSubtract, vectorLeft, vectorRight, vectorUnit } from '../geometry/point'
 import { cubicSegment, lineSegment } from '../geometry/segment'
 import type { CubicSegment, Point } from '../geometry/types'
 import type { HalfFrame } from './frame'
@@ -79,12 +79,15 @@ export function necklineRail(shoulder: Shoulder, centre: Point, form: NecklineFo
   return railOf(['centre', 'neck'], [round])
 }
 
+/** How much more a seam keeps to its own direction than it turns square to the edge where it ends. */
+const OWN_DIRECTION = 2
+
 /**
- * A seam from the bust to where it ends on an edge above: upright at the bust, arriving half-way between its own direction
- * and square to that edge. `along` is the edge's direction there, from the centre outwards.
+ * A seam from the bust to where it ends on an edge above: upright at the bust, arriving between its own direction and square
+ * to that edge. `along` is the edge's direction there, from the centre outwards.
  */
 export function seamAbove(from: Point, to: Point, along: Point): CubicSegment {
   const handle = pointDistance(from, to) * ARC_HANDLE
-  const arrive = vectorUnit(pointAdd(vectorUnit(pointSubtract(to, from)), vectorLeft(along)))
+  const arrive = vectorUnit(pointAdd(pointScale(vectorUnit(pointSubtract(to, from)), OWN_DIRECTION), vectorLeft(along)))
   return cubicSegment(from, pointAlong(from, { x: 0, y: 1 }, handle), pointAlong(to, arrive, -handle), to)
 }

@@ -32,6 +32,9 @@ export function heightLine(form: EdgeShape['form'], centre: number, side: number
   return { at: (s) => side + rise * left(s) ** power, slope: (s) => -rise * power * left(s) ** (power - 1) }
 }
 
+/** Longest handle of an edge that is level at both ends, mm: on a wide panel it turns square to a slanting seam near to it. */
+const LEVEL_HANDLE = 60
+
 /**
  * An edge across one panel from the start of its left rail to the start of its right one, both read into the piece. It
  * stands square to both but for `slopes`, its rise by millimetre there: on both mates of a seam the same, so that the
@@ -40,7 +43,8 @@ export function heightLine(form: EdgeShape['form'], centre: number, side: number
 export function edgeAcross(left: Path, right: Path, slopes: readonly [left: number, right: number], up: boolean): CubicSegment {
   const from = pathStart(left)
   const to = pathStart(right)
-  const handle = pointDistance(from, to) / 3
+  const third = pointDistance(from, to) / 3
+  const handle = slopes[0] === 0 && slopes[1] === 0 ? Math.min(third, LEVEL_HANDLE) : third
   const along = (rail: Path, slope: number) => {
     const inwards = pathStartTangent(rail)
     const square = vectorRight(up ? inwards : { x: -inwards.x, y: -inwards.y })

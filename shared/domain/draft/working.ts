@@ -1,7 +1,7 @@
 import type { DraftBody, DraftBodyKey } from '../body/types'
 import type { Working, WorkingInput } from '../units/working'
 import { draftFrame } from './frame'
-import { BUST_ANGLE_MOST } from './style'
+import { BUST_ANGLE_MOST } from './bust-angle'
 import type { Draft, DraftInput, SeamComparison } from './types'
 
 /** Where the drafting rules come from. */

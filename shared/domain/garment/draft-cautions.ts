@@ -9,6 +9,8 @@ const BY_CODE = new Map(
     cautions.bustAngleNegative,
     cautions.bustAngleLarge,
     cautions.bustAngleHeld,
+    cautions.bustAngleEased,
+    cautions.bustAngleDart,
     cautions.bustLevelMoved,
     cautions.acrossFrontHeld,
     cautions.acrossBackHeld,

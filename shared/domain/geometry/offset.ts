@@ -24,16 +24,14 @@ interface Side {
   readonly allowance: number
 }
 
-function sidesOf(runs: readonly OffsetRun[]): readonly Side[] {
+function sidesOf({ points, allowance }: OffsetRun): readonly Side[] {
   const sides: Side[] = []
-  for (const run of runs) {
-    for (let index = 1; index < run.points.length; index += 1) {
-      const from = run.points[index - 1] as Point
-      const to = run.points[index] as Point
-      if (pointDistance(from, to) <= POINT_TOLERANCE) continue
-      const along = vectorUnit(pointSubtract(to, from))
-      sides.push({ from, to, along, out: vectorRight(along), allowance: run.allowance })
-    }
+  for (let index = 1; index < points.length; index += 1) {
+    const from = points[index - 1] as Point
+    const to = points[index] as Point
+    if (pointDistance(from, to) <= POINT_TOLERANCE) continue
+    const along = vectorUnit(pointSubtract(to, from))
+    sides.push({ from, to, along, out: vectorRight(along), allowance })
   }
   return sides
 }
@@ -59,18 +57,58 @@ function corner(before: Side, after: Side, mitreLimit: number): readonly Point[]
 }
 
 /**
+ * Where two runs meet at a corner that turns outwards and one of them, wider offset than the other, has to end before the
+ * corner: the line of the next run, drawn on backwards, cuts the one before. Null where it does not within the limit.
+ */
+function cutBack(line: readonly Point[], from: Point, along: Point, at: Point, reach: number): readonly Point[] | null {
+  const aside = (own: Point) => vectorCross(along, pointSubtract(own, from))
+  for (let index = line.length - 1; index > 0; index -= 1) {
+    const [a, b] = [line[index - 1] as Point, line[index] as Point]
+    const [before, after] = [aside(a), aside(b)]
+    if (before === after || before * after > 0) continue
+    const t = before / (before - after)
+    const meet = { x: a.x + (b.x - a.x) * t, y: a.y + (b.y - a.y) * t }
+    return pointDistance(at, meet) <= reach ? [...line.slice(0, index), meet] : null
+  }
+  return null
+}
+
+/**
  * The closed outline outside `runs`, each by its own allowance, corners mitred; a mitre longer than `mitreLimit`
  * allowances is cut off straight. Runs follow each other counter-clockwise and close. Where the allowance of a hollow
  * runs into itself the loops are taken out, so the line never crosses itself. Counter-clockwise; null when nothing is left.
  */
 export function outlineOffset(runs: readonly OffsetRun[], mitreLimit = MITRE_LIMIT): Polygon | null {
-  const sides = sidesOf(runs)
-  if (sides.length < 3) return null
-  const raw: Point[] = []
-  sides.forEach((after, index) => {
-    const before = sides.at(index - 1) as Side
-    raw.push(...corner(before, after, mitreLimit))
+  const parts = runs.map(sidesOf).filter((sides) => sides.length > 0)
+  if (parts.reduce((sum, sides) => sum + sides.length, 0) < 3) return null
+  const lines: (readonly Point[])[] = parts.map((sides) =>
+    sides.slice(1).flatMap((after, index) => corner(sides[index] as Side, after, mitreLimit)),
+  )
+  const joints: (readonly Point[])[] = parts.map((sides, index) => {
+    const next = (index + 1) % parts.length
+    const [before, after] = [sides.at(-1) as Side, (parts[next] as readonly Side[])[0] as Side]
+    const [first, second] = [pointAlong(after.from, before.out, before.allowance), pointAlong(after.from, after.out, after.allowance)]
+    const meet = linesMeet(first, before.along, second, after.along)
+    const turn = vectorCross(before.along, after.along)
+    const reach = Math.max(before.allowance, after.allowance) * mitreLimit
+    if (meet !== null && turn >= NEARLY_STRAIGHT && meet.alongU < -pointDistance(before.from, before.to)) {
+      const cut = cutBack([...(lines[index] as readonly Point[]), first], second, after.along, after.from, reach)
+      if (cut !== null) {
+        lines[index] = cut
+        return []
+      }
+    }
+    if (meet !== null && turn >= NEARLY_STRAIGHT && meet.alongV > pointDistance(after.from, after.to)) {
+      const backwards = [second, ...(lines[next] as readonly Point[])].reverse()
+      const cut = cutBack(backwards, first, before.along, after.from, reach)
+      if (cut !== null) {
+        lines[next] = [...cut].reverse()
+        return []
+      }
+    }
+    return corner(before, after, mitreLimit)
   })
+  const raw = lines.flatMap((line, index) => [...line, ...(joints[index] as readonly Point[])])
   const loops = booleanOpD(ClipType.Union, [raw], null, FillRule.Positive, CLIPPING_PRECISION)
   let largest: Polygon | null = null
   let area = 0

@@ -29,7 +29,7 @@ export function gentlestCurve(from: Point, leaving: Point, to: Point, arriving: 
     for (const second of HANDLE_SHARES) {
       const curve = cubicSegment(from, pointAlong(from, leaving, meet.alongU * first), pointAlong(to, arriving, -meet.alongV * second), to)
       let sharpest = 0
-      for (let sample = 0; sample <= CURVATURE_SAMPLES; sample += 1) {
+      for (let sample = 0; sample <= CURVATURE_SAMPLES && sharpest < least; sample += 1) {
         sharpest = Math.max(sharpest, Math.abs(segmentCurvatureAt(curve, sample / CURVATURE_SAMPLES)))
       }
       if (sharpest < least) {

@@ -9,13 +9,13 @@ import { princessAbove, shoulderOf } from './edges'
 import { draftFrame } from './frame'
 import type { Frame } from './frame'
 import { outlineIsSound, readPiece } from './piece'
-import type { LevelHeight } from './piece'
-import { sketchPieces } from './pieces'
+import type { LevelHeight, PieceSketch } from './piece'
+import { drawnHalves, sketchPieces } from './pieces'
 import { degrees, millimetres } from './say'
 import { halfOf, wholeEdge } from './roles'
 import { compareSeams, withNotches } from './seams'
 import { checkStyle } from './style'
-import { crossedProblem, drawnProblem, heldFrame } from './upper-limits'
+import { changesFor, drawnProblem, heldFrame } from './upper-limits'
 import type { BodiceStyle, Draft, DraftFinding, DraftInput, DraftPiece, EdgeId, PieceEdge, PieceId } from './types'
 import { wedgesOf } from './wedges'
 
@@ -261,6 +261,39 @@ export function readFindings(pieces: readonly DraftPiece[], aim: number): readon
   return findings
 }
 
+interface Sketched {
+  readonly frame: Frame
+  readonly sketches: readonly PieceSketch[]
+}
+
+/** Frame and edges, or why not; `crossed` is a piece whose outline would cross itself. */
+function sketchBodice(input: DraftInput): Result<Sketched, Problem & { readonly crossed?: PieceSketch }> {
+  const { body, style } = input
+  const problem = checkStyle(style, body)[0] ?? widthProblem(input)
+  if (problem !== null) return fail(problem)
+  const frame = heldFrame(input, draftFrame(input))
+  const drawn = drawnHalves(frame, style)
+  const wrong = frameProblem(frame) ?? princessProblem(frame, style) ?? drawnProblem(frame, style, drawn)
+  if (wrong !== null) return fail(wrong)
+  const sketches = sketchPieces(frame, style, hemHeightOf(frame, style), drawn)
+  const crossed = sketches.find((piece) => !outlineIsSound(piece.edges))
+  if (crossed === undefined) return succeed({ frame, sketches })
+  return fail({ code: 'outline-crosses', message: `${crossed.name} would cross its own outline.`, crossed })
+}
+
+/** An outline that crosses itself, with the smallest change of style that keeps it from it. */
+function crossedProblem(input: DraftInput, { id, name }: PieceSketch): Problem {
+  const message = `${name} would cross its own outline.`
+  const works = changesFor(id, input.style).find(({ style }) => sketchBodice({ ...input, style }).ok)
+  if (works !== undefined) return { code: 'outline-crosses', message, todo: works.todo, at: works.at }
+  return {
+    code: 'outline-crosses',
+    message,
+    todo: 'Bring the levels nearer to each other, take a higher neckline or a smaller bust angle.',
+    at: id,
+  }
+}
+
 /**
  * The bodice of one half of the body: its pieces with notches, grain, levels and cutting line, its seams compared, and
  * what had to be decided or held. Widths on the pieces are those of the rings, front and back together, to .5 mm at every
@@ -268,14 +301,12 @@ export function readFindings(pieces: readonly DraftPiece[], aim: number): readon
  */
 export function draftBodice(input: DraftInput): Result<Draft> {
   const { body, style } = input
-  const problem = checkStyle(style, body)[0] ?? widthProblem(input)
-  if (problem !== null) return fail(problem)
-  const frame = heldFrame(input, draftFrame(input))
-  const wrong = frameProblem(frame) ?? princessProblem(frame, style) ?? drawnProblem(frame, style)
-  if (wrong !== null) return fail(wrong)
-  const sketches = sketchPieces(frame, style, hemHeightOf(frame, style))
-  const crossed = sketches.find((piece) => !outlineIsSound(piece.edges))
-  if (crossed !== undefined) return fail(crossedProblem(crossed.id, crossed.name, style))
+  const sketched = sketchBodice(input)
+  if (!sketched.ok) {
+    const { crossed } = sketched.problem
+    return fail(crossed === undefined ? sketched.problem : crossedProblem(input, crossed))
+  }
+  const { frame, sketches } = sketched.value
   const heights = LEVELS.map((level) => ({ level, y: frame.heightOf(level) }))
   const pieces = withNotches(sketches.map((piece) => readPiece(piece, heights)))
   const aim = style.top === null ? body.values.armscyeGirth * frame.milder : 0

@@ -9,8 +9,8 @@ import type { PieceSketch } from './piece'
 import { pieceWords } from './roles'
 import { edgeAcross, heightLine } from './shapes'
 import type { Stretch } from './stretches'
-import { upperStrapless, upperWithShoulders } from './upper'
-import type { PanelRails, UpperHalf } from './upper'
+import { drawnUpper, upperStrapless, upperWithShoulders } from './upper'
+import type { DrawnUpper, PanelRails, UpperHalf } from './upper'
 import { curveBelowBust, railBelowBust, railOf, railReverse, wedgesOf } from './wedges'
 import type { Rail, Wedges } from './wedges'
 import type { BodiceStyle, CentreKind, EdgeId, EdgeKind, PieceEdge, PieceId } from './types'
@@ -87,14 +87,29 @@ interface HalfSketch {
   readonly shoulders: readonly ShoulderPlace[]
 }
 
-function sketchHalf(frame: Frame, style: BodiceStyle, hemHeight: number, zone: Zone, wedges: Wedges, otherSide: PieceId): HalfSketch {
+/** The edges above the bust of both halves as drawn; null under a top edge. */
+export type DrawnHalves = Readonly<Record<Zone, DrawnUpper>> | null
+
+/** Draws the edges above the bust of both halves. */
+export const drawnHalves = (frame: Frame, style: BodiceStyle): DrawnHalves =>
+  style.top === null ? { front: drawnUpper(frame.front, 'front', style), back: drawnUpper(frame.back, 'back', style) } : null
+
+function sketchHalf(
+  frame: Frame,
+  style: BodiceStyle,
+  hemHeight: number,
+  zone: Zone,
+  wedges: Wedges,
+  otherSide: PieceId,
+  drawn: DrawnUpper | null,
+): HalfSketch {
   const { allowances } = style
   const kind = zone === 'front' ? style.centreFront : style.centreBack
   const lines = seamLines(frame[zone], style.panels[zone])
   const ids = pieceIdsOf(zone, lines)
   const names: readonly EdgeId[] = ['centre', ...lines.map(({ id }) => id), 'side']
   const { rails: below, hems } = hemmed(panelCurves(frame, zone, lines, wedges), zone, style, hemHeight, names)
-  const input = { frame, style, zone, lines, below }
+  const input = { frame, style, zone, lines, below, drawn }
   const upper: UpperHalf =
     style.top === null ? upperWithShoulders(input) : upperStrapless(input, (place) => wedges.at(zone, place, 'above'))
 
@@ -163,10 +178,15 @@ function joined({ pieces, shoulders }: HalfSketch, other: HalfSketch): readonly 
  * wedges taken out, styled and turned. Every piece has its hem first, then the edge away from the centre, what bounds it
  * above, and last the edge towards the centre. `hemHeight` in mm over the waist.
  */
-export function sketchPieces(frame: Frame, style: BodiceStyle, hemHeight: number): readonly PieceSketch[] {
+export function sketchPieces(
+  frame: Frame,
+  style: BodiceStyle,
+  hemHeight: number,
+  drawn = drawnHalves(frame, style),
+): readonly PieceSketch[] {
   const wedges = wedgesOf(frame, style)
   const sideOf = (zone: Zone) => (style.panels[zone].princess ? (zone === 'front' ? 'side-front' : 'side-back') : zone)
-  const front = sketchHalf(frame, style, hemHeight, 'front', wedges, sideOf('back'))
-  const back = sketchHalf(frame, style, hemHeight, 'back', wedges, sideOf('front'))
+  const front = sketchHalf(frame, style, hemHeight, 'front', wedges, sideOf('back'), drawn?.front ?? null)
+  const back = sketchHalf(frame, style, hemHeight, 'back', wedges, sideOf('front'), drawn?.back ?? null)
   return [...joined(front, back), ...[...joined(back, front)].reverse()]
 }

@@ -7,6 +7,8 @@ import { princessAbove, seamAbove, shoulderOf } from './edges'
 import { draftFrame } from './frame'
 import type { Frame } from './frame'
 import { panelCount, seamLines } from './panels'
+import type { DrawnHalves } from './pieces'
+import { halfOf } from './roles'
 import type { Zone } from './panels'
 import { millimetres } from './say'
 import { cutStretch } from './stretches'
@@ -20,28 +22,33 @@ const ZONES: readonly Zone[] = ['front', 'back']
 /** The turned end of a princess seam or dart in the armhole stays this far above the underarm, mm. */
 const ABOVE_UNDERARM = 15
 
-/** How far above the underarm the bust angle's turned end lies on the armhole, mm; infinite where it opens elsewhere. */
-function turnedEndAbove(frame: Frame, style: BodiceStyle): number {
+/** And this far inside it, mm. */
+const INSIDE_UNDERARM = 15
+
+/** Room left to the bust angle's turned end on the armhole, above the underarm and inside it, mm; infinite where it opens elsewhere. */
+function turnedEndRoom(frame: Frame, style: BodiceStyle): number {
   const drawn = drawnUpper(frame.front, 'front', style)
   const opening = openingOf({ frame, style, zone: 'front' }, drawn)
   if (opening === null || opening.edge !== 'armhole') return Infinity
   const end = cutStretch(drawn.armhole, opening.share, 'princess')[0].rail.nodes.at(-1)
-  return end === undefined ? Infinity : frame.bust.turn(end.at).y - frame.front.underarm.y
+  if (end === undefined) return Infinity
+  const turned = frame.bust.turn(end.at)
+  return Math.min(turned.y - frame.front.underarm.y - ABOVE_UNDERARM, frame.front.underarm.x - turned.x - INSIDE_UNDERARM)
 }
 
 /**
  * The frame with the bust angle no larger than a seam or dart into the armhole allows: its turned end 15 mm above the
- * underarm, to a hundredth of a degree.
+ * underarm and inside it, to a hundredth of a degree.
  */
 export function heldFrame(input: DraftInput, frame: Frame): Frame {
   const { style } = input
-  if (style.top !== null || frame.bust.angle === 0 || turnedEndAbove(frame, style) >= ABOVE_UNDERARM) return frame
+  if (style.top !== null || frame.bust.angle === 0 || turnedEndRoom(frame, style) >= 0) return frame
   let low = 0
   let high = frame.bust.angle
   while (high - low > 1.7e-4) {
     const middle = (low + high) / 2
     const tried = draftFrame(input, middle)
-    if (turnedEndAbove(tried, style) >= ABOVE_UNDERARM) low = middle
+    if (turnedEndRoom(tried, style) >= 0) low = middle
     else high = middle
   }
   return draftFrame(input, low)
@@ -55,7 +62,7 @@ const LEAST_PANEL = 25
 const LEAST_PANEL_ELSEWHERE = 10
 
 function nearest(one: Path, other: Path): number {
-  const [a, b] = [pathFlatten(one, 1), pathFlatten(other, 1)]
+  const [a, b] = [pathFlatten(one, 0.5), pathFlatten(other, 0.1)]
   let least = Infinity
   a.forEach((at, index) => {
     const before = a[index - 1]
@@ -88,38 +95,30 @@ function princessDrawn(frame: Frame, style: BodiceStyle, zone: Zone, drawn: Draw
 }
 
 /** How much cloth a neckline leaves beyond what it must, the least of both limits, mm; negative: too little. */
-function necklineRoom(frame: Frame, style: BodiceStyle, zone: Zone): number {
-  const drawn = drawnUpper(frame[zone], zone, style)
+function necklineRoom(frame: Frame, style: BodiceStyle, zone: Zone, drawn = drawnUpper(frame[zone], zone, style)): number {
   const beside = nearest(drawn.neckline.rail.path, drawn.armhole.rail.path) - NECKLINE_TO_ARMHOLE
   if (style.princessEnd[zone].edge === 'neckline') return beside
   const princess = princessDrawn(frame, style, zone, drawn)
   return princess === null ? beside : Math.min(beside, nearest(drawn.neckline.rail.path, princess) - NECKLINE_TO_PRINCESS)
 }
 
-function necklineProblem(frame: Frame, style: BodiceStyle, zone: Zone): Problem | null {
-  if (necklineRoom(frame, style, zone) >= 0) return null
+function necklineProblem(frame: Frame, style: BodiceStyle, zone: Zone, drawn: DrawnUpper): Problem | null {
+  if (necklineRoom(frame, style, zone, drawn) >= 0) return null
   const key = zone === 'front' ? 'necklineFrontDepth' : 'necklineBackDepth'
-  const tries: readonly { readonly at: 'necklineWidth' | typeof key; readonly what: string }[] = [
-    { at: 'necklineWidth', what: 'The nearest width taken off the shoulder that works is' },
-    { at: key, what: 'The nearest depth that works is' },
-  ]
-  for (const { at, what } of tries) {
-    const from = Math.floor(style[at])
-    for (let value = from; value >= 0; value -= 2) {
-      if (necklineRoom(frame, { ...style, [at]: value }, zone) < 0) continue
-      return {
-        code: 'neckline-near-edge',
-        message: `The ${zone} neckline comes too near to the armhole or the princess seam.`,
-        todo: `${what} ${value} mm.`,
-        at: `style.${at}`,
-      }
+  const found = (['necklineWidth', key] as const).flatMap((at) => {
+    for (let value = Math.floor(style[at]); value >= 0; value -= 2) {
+      if (necklineRoom(frame, { ...style, [at]: value }, zone) >= 0) return [{ at, value }]
     }
-  }
+    return []
+  })[0]
   return {
     code: 'neckline-near-edge',
     message: `The ${zone} neckline comes too near to the armhole or the princess seam.`,
-    todo: `Take a narrower and higher ${zone} neckline, or let the princess seam end elsewhere.`,
-    at: `style.${key}`,
+    todo:
+      found === undefined
+        ? `Take a narrower and higher ${zone} neckline, or let the princess seam end elsewhere.`
+        : `The nearest ${found.at === key ? 'depth' : 'width taken off the shoulder'} that works is ${found.value} mm.`,
+    at: `style.${found?.at ?? key}`,
   }
 }
 
@@ -177,24 +176,62 @@ function panelProblem(frame: Frame, style: BodiceStyle, zone: Zone): Problem | n
 }
 
 /** What of a style does not work on the drawn frame: necklines, panels; null when all does. */
-export function drawnProblem(frame: Frame, style: BodiceStyle): Problem | null {
+export function drawnProblem(frame: Frame, style: BodiceStyle, drawn: DrawnHalves): Problem | null {
   for (const zone of ZONES) {
-    const found = panelProblem(frame, style, zone) ?? (style.top === null ? necklineProblem(frame, style, zone) : null)
+    const found = panelProblem(frame, style, zone) ?? (drawn === null ? null : necklineProblem(frame, style, zone, drawn[zone]))
     if (found !== null) return found
   }
   return null
 }
 
-/** An outline that crosses itself although everything drawn had room. */
-export function crossedProblem(piece: PieceId, name: string, style: BodiceStyle): Problem {
-  const zone = piece.includes('front') ? 'front' : 'back'
-  const further = style.panels[zone].further.length > 0
-  return {
-    code: 'outline-crosses',
-    message: `${name} would cross its own outline.`,
-    todo: further
-      ? 'Take a panel away, leave the places of the seams empty, or take a higher neckline or a smaller bust angle.'
-      : 'Bring the levels nearer to each other, take a higher neckline or a smaller bust angle.',
-    at: further ? `style.panels.${zone}` : piece,
-  }
+/** Another style, and what was changed in it. */
+export interface StyleChange {
+  readonly style: BodiceStyle
+  readonly at: string
+  readonly todo: string
+}
+
+/** Shares of an edge about one, nearest first. */
+const sharesAbout = (at: number, low: number, high: number): readonly number[] =>
+  Array.from(
+    { length: 24 },
+    (_, step) => Math.round((at + (step % 2 === 0 ? -1 : 1) * Math.ceil((step + 1) / 2) * 0.05) * 100) / 100,
+  ).filter((share) => share >= low && share <= high)
+
+/** Changes of a style that may keep a crossed outline from crossing itself, the smallest of each kind first. */
+export function changesFor(piece: PieceId, style: BodiceStyle): readonly StyleChange[] {
+  const zone = halfOf(piece)
+  const panels = style.panels[zone]
+  const end = style.princessEnd[zone]
+  const withPanels = (further: typeof panels.further): BodiceStyle => ({
+    ...style,
+    panels: { ...style.panels, [zone]: { ...panels, further } },
+  })
+  const ends: readonly StyleChange[] =
+    style.top !== null || !panels.princess || end.edge === 'shoulder'
+      ? []
+      : [
+          ...sharesAbout(end.at, end.edge === 'armhole' ? 0.2 : 0.25, end.edge === 'armhole' ? 0.75 : 0.85).map((at) => ({
+            style: { ...style, princessEnd: { ...style.princessEnd, [zone]: { ...end, at } } },
+            at: `style.princessEnd.${zone}.at`,
+            todo: `The nearest share of the ${end.edge} at which the princess seam can end is ${at}.`,
+          })),
+          {
+            style: { ...style, princessEnd: { ...style.princessEnd, [zone]: { edge: 'shoulder', at: end.at } } },
+            at: `style.princessEnd.${zone}`,
+            todo: 'Let the princess seam end on the shoulder.',
+          },
+        ]
+  const further: readonly StyleChange[] = panels.further
+    .map((_, index) => panels.further.slice(0, panels.further.length - 1 - index))
+    .map((fewer) => ({
+      style: withPanels(fewer.map((seam) => ({ ...seam, at: null, end: null }))),
+      at: `style.panels.${zone}`,
+      todo: `The most panels that work here are ${fewer.length + 2}.`,
+    }))
+  const shape: readonly StyleChange[] =
+    style.hemShape.form === 'straight'
+      ? []
+      : [{ style: { ...style, hemShape: { ...style.hemShape, form: 'straight' } }, at: 'style.hemShape', todo: 'A straight hem works.' }]
+  return [...ends, ...further, ...shape]
 }

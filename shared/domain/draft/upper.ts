@@ -1,4 +1,4 @@
-import { pathEnd, pathEndTangent, pathReverse } from '../geometry/path'
+import { pathEnd, pathEndTangent, pathLength, pathReverse } from '../geometry/path'
 import { lineSegment } from '../geometry/segment'
 import { moveBy, turnAbout } from '../geometry/transform'
 import type { Transform } from '../geometry/transform'
@@ -38,6 +38,8 @@ export interface UpperInput {
   readonly lines: readonly SeamLine[]
   /** Edges of the panels from the hem up to the bust. */
   readonly below: readonly PanelRails[]
+  /** The edges above as drawn; not used under a top edge. */
+  readonly drawn: DrawnUpper | null
 }
 
 const bustOf = (rail: Rail): Point => (rail.nodes.at(-1) as EdgeNode).at
@@ -78,9 +80,15 @@ const DART_FROM_END = 0.12
 /** Where a dart from the bust point opens: in the nearest of neckline and armhole. */
 export function dartOpening(frame: Frame, drawn: DrawnUpper): Opening {
   const clear = (share: number) => Math.min(1 - DART_FROM_END, Math.max(DART_FROM_END, share))
-  const [neckline, armhole] = [nearestOn(drawn.neckline, frame.bust.bustPoint), nearestOn(drawn.armhole, frame.bust.bustPoint)]
+  // Of a square neckline only the level part: a dart does not open in its corner.
+  const cornered = drawn.neckline.rail.nodes.some(({ name }) => name === 'corner')
+  const level = cornered
+    ? { ...drawn.neckline, rail: { ...drawn.neckline.rail, path: drawn.neckline.rail.path.slice(0, 1) } }
+    : drawn.neckline
+  const part = cornered ? pathLength(level.rail.path) / pathLength(drawn.neckline.rail.path) : 1
+  const [neckline, armhole] = [nearestOn(level, frame.bust.bustPoint), nearestOn(drawn.armhole, frame.bust.bustPoint)]
   return neckline.distance < armhole.distance
-    ? { edge: 'neckline', share: clear(neckline.share) }
+    ? { edge: 'neckline', share: clear(neckline.share) * part }
     : { edge: 'armhole', share: clear(armhole.share) }
 }
 
@@ -178,7 +186,7 @@ function cutBlock(
 export function upperWithShoulders(input: UpperInput): UpperHalf {
   const { frame, style, zone, lines, below } = input
   const half = frame[zone]
-  const drawn = drawnUpper(half, zone, style)
+  const drawn = input.drawn ?? drawnUpper(half, zone, style)
   const opening = openingOf(input, drawn)
   const princess = lines.findIndex(({ id }) => id === 'princess')
   const shoulders = shoulderParts(drawn.shoulder, style)

@@ -5,7 +5,7 @@ import { baseStyle } from '../domain/draft/style'
 import type { Segment } from '../domain/geometry/types'
 import { figure, length, mirrors, point } from './base'
 
-export const levelId = z.enum(['bust', 'underbust', 'waist', 'high-hip', 'hip'])
+export const levelId = z.enum(['top-edge', 'bust', 'underbust', 'waist', 'high-hip', 'hip'])
 const seamLetter = z.enum(['a', 'b', 'c', 'd'])
 export const pieceId = z.enum([
   'front-centre',

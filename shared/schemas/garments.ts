@@ -67,7 +67,7 @@ export const garmentDocument = mirrors<GarmentDocument>()(
     }),
     levels: z
       .array(levelChoice)
-      .max(5)
+      .max(6)
       .refine((levels) => new Set(levels.map((one) => one.level)).size === levels.length, 'A level stands only once.'),
     style: bodiceStyle,
     alterations: z.array(alteration).max(500),

@@ -93,7 +93,8 @@ export interface WearerFlags {
   readonly age: number | null
 }
 
-export type LevelId = 'bust' | 'underbust' | 'waist' | 'high-hip' | 'hip'
+/** Levels of every body, and the top edge of a strapless bodice, which lies above the bust. */
+export type LevelId = 'top-edge' | 'bust' | 'underbust' | 'waist' | 'high-hip' | 'hip'
 
 /** A horizontal level of the body: its height over the waist line and its girth. */
 export interface BodyLevel {

@@ -5,6 +5,7 @@ import type { Alteration, BodiceStyle, GirthAlteration, LengthAlteration, MoveAl
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothState } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
+import { freshLevel } from './fresh'
 import { planKey } from './plan-key'
 import type { GarmentDocument, LayerChoice, LevelChoice } from './types'
 
@@ -116,7 +117,7 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
         ),
       }
     case 'set-style':
-      return { ...document, style: { ...document.style, ...command.patch } }
+      return styled(document, command.patch)
     case 'acknowledge':
       return {
         ...document,
@@ -150,6 +151,19 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
       return { ...document, alterations: ordered(document.alterations, command.id, command.to) }
     case 'take-over':
       return command.document
+  }
+}
+
+/** A style taken over; with a top edge the garment is strapless and has a level there. The level is kept for the day it is strapless again. */
+function styled(document: GarmentDocument, patch: Partial<BodiceStyle>): GarmentDocument {
+  const style = { ...document.style, ...patch }
+  if (patch.top === undefined) return { ...document, style }
+  const has = document.levels.some(({ level }) => level === 'top-edge')
+  return {
+    ...document,
+    style,
+    use: { ...document.use, strapless: style.top !== null },
+    levels: style.top === null || has ? document.levels : [freshLevel('top-edge'), ...document.levels],
   }
 }
 

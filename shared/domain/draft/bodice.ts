@@ -170,13 +170,14 @@ function frameRecord(frame: Frame): Readonly<Record<string, Point>> {
     'front-underarm-turned-back': front.underarmDrawn,
     'bust-point': front.princess,
     'back-princess': back.princess,
+    ...(frame.above === null ? {} : { [levelName('top-edge')]: { x: 0, y: frame.above.y } }),
     ...Object.fromEntries(LEVELS.map((level) => [levelName(level), { x: 0, y: frame.heightOf(level) }])),
   }
 }
 
 /** Heights of the levels of a draft on its pieces. */
 export function levelHeightsOf(draft: Draft): readonly LevelHeight[] {
-  return LEVELS.flatMap((level) => {
+  return (['top-edge', ...LEVELS] as const).flatMap((level) => {
     const at = draft.frame[levelName(level)]
     return at === undefined ? [] : [{ level, y: at.y }]
   })
@@ -307,7 +308,10 @@ export function draftBodice(input: DraftInput): Result<Draft> {
     return fail(crossed === undefined ? sketched.problem : crossedProblem(input, crossed))
   }
   const { frame, sketches } = sketched.value
-  const heights = LEVELS.map((level) => ({ level, y: frame.heightOf(level) }))
+  const heights: readonly LevelHeight[] = [
+    ...(frame.above === null ? [] : [{ level: 'top-edge' as const, y: frame.above.y }]),
+    ...LEVELS.map((level) => ({ level, y: frame.heightOf(level) })),
+  ]
   const pieces = withNotches(sketches.map((piece) => readPiece(piece, heights)))
   const aim = style.top === null ? body.values.armscyeGirth * frame.milder : 0
   const moved = wedgesOf(frame, style).sideMoved('waist')

@@ -68,6 +68,9 @@ export function pieceIdsOf(zone: Zone, lines: readonly SeamLine[]): readonly Pie
   return ids
 }
 
+/** Whether a centre opens: by zip, hooks, busk or lacing. */
+export const opens = (kind: CentreKind): boolean => kind !== 'fold' && kind !== 'seam'
+
 /** Whether a centre takes a share of the wedge: a seam does, a fold cannot, an opening where it is asked to. */
 export const centreTakes = (kind: CentreKind, openingTakes: boolean): boolean => kind === 'seam' || (kind !== 'fold' && openingTakes)
 

@@ -1,7 +1,7 @@
 import type { LevelId } from '../body/types'
 import { pathCrossingsAtHeight } from '../geometry/crossings'
 import { outlineOffset } from '../geometry/offset'
-import { pathFlatten } from '../geometry/path'
+import { pathEnd, pathFlatten, pathStart } from '../geometry/path'
 import { pointAlong, pointDistance } from '../geometry/point'
 import { polygonArea, polygonIsSimple } from '../geometry/polygon'
 import type { Polygon } from '../geometry/polygon'
@@ -28,6 +28,8 @@ export const edgesAcross = (edges: readonly PieceEdge[]): readonly [left: PieceE
 function crossing(edge: PieceEdge, { level, y }: LevelHeight): Point | null {
   const found = pathCrossingsAtHeight(edge.path, y)
   const node = edge.nodes.find((own) => own.level === level)
+  // Above the bust an edge may be turned: the level runs to where it lies along the seam.
+  if (level === 'top-edge' && node !== undefined) return node.at
   if (node === undefined || found.length < 2) return found[0] ?? null
   return found.reduce((best, at) => (pointDistance(at, node.at) < pointDistance(best, node.at) ? at : best))
 }
@@ -38,8 +40,18 @@ export function levelsAcross(edges: readonly PieceEdge[], heights: readonly Leve
   return heights.flatMap((height) => {
     const from = crossing(left, height)
     const to = crossing(right, height)
-    return from === null || to === null ? [] : [{ level: height.level, from, to, width: mm(to.x - from.x) }]
+    if (from === null || to === null) return []
+    const width = height.level === 'top-edge' ? pointDistance(from, to) - dartOpening(edges, height.y) : to.x - from.x
+    return [{ level: height.level, from, to, width: mm(width) }]
   })
+}
+
+/** How wide a dart stands open at a height above its point, mm; 0 without one. */
+function dartOpening(edges: readonly PieceEdge[], y: number): number {
+  const [inner, outer] = [edges.find(({ id }) => id === 'dart'), edges.find(({ id }) => id === 'dart-beyond')]
+  if (inner === undefined || outer === undefined) return 0
+  const [point, mouth, other] = [pathStart(inner.path), pathEnd(inner.path), pathStart(outer.path)]
+  return (pointDistance(mouth, other) * Math.max(0, y - point.y)) / pointDistance(point, mouth)
 }
 
 /** The outline of a piece as a polygon, counter-clockwise, corners once. */

@@ -123,12 +123,12 @@ function turnedEdge(below: Rail, above: Rail, bust: BustAngle): { readonly rail:
   const downwards = pathReverse(edge.down)
   const names = [...below.nodes.slice(0, -1), { name: 'fairing-below', at: (downwards.at(-1) as Segment).from, level: null }]
   const rail: Rail = { path: downwards, nodes: [...names, below.nodes.at(-1) as EdgeNode] }
-  const upNames = ['fairing-above', ...above.nodes.slice(1).map(({ name }) => name)]
+  const upNodes = [{ name: 'fairing-above', level: null }, ...above.nodes.slice(1).map(({ name, level }) => ({ name, level }))]
   return {
     turned: edge.turned,
     rail: railThen(
       rail,
-      edge.up.map((segment, index) => ({ segment, name: upNames[index] as string })),
+      edge.up.map((segment, index) => ({ segment, ...(upNodes[index] as Pick<EdgeNode, 'name' | 'level'>) })),
     ),
   }
 }

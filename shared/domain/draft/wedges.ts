@@ -17,13 +17,6 @@ export interface Rail {
 
 /** Levels with the hem's, from the hem up to the bust. */
 const LEVELS_UP: readonly LevelId[] = ['hip', 'high-hip', 'waist', 'underbust', 'bust']
-const NODE_NAMES: Readonly<Record<LevelId, string>> = {
-  hip: 'hip',
-  'high-hip': 'high-hip',
-  waist: 'waist',
-  underbust: 'underbust',
-  bust: 'bust',
-}
 /** A level nearer to the hem than this is the hem's own, mm. */
 const AT_HEM = 0.01
 
@@ -95,7 +88,7 @@ export function railBelowBust(curve: MonotoneCurve, hemHeight: number): Rail {
     if (segment.to.y <= hemHeight + AT_HEM) return
     const share = (hemHeight - segment.from.y) / (segment.to.y - segment.from.y)
     path.push(share > 1e-9 ? segmentSplitAt(segment, share)[1] : segment)
-    nodes.push({ name: NODE_NAMES[top], at: segment.to, level: top })
+    nodes.push({ name: top, at: segment.to, level: top })
   })
   const first = path[0] as Segment
   nodes[0] = { name: 'hem', at: first.from, level: levelAtHem }
@@ -112,23 +105,26 @@ export function railAboveBust(from: Point, above: Point, height: number): Rail {
   if (height <= above.y + AT_HEM) {
     const share = Math.min(1, (height - from.y) / (above.y - from.y))
     const segment = share >= 1 ? whole : segmentSplitAt(whole, share)[0]
-    return { path: [segment], nodes: [{ name: 'top', at: segment.to, level: null }] }
+    return { path: [segment], nodes: [{ name: 'top', at: segment.to, level: share >= 1 ? 'top-edge' : null }] }
   }
   const top = { x: monotoneValueAt(curve, height), y: height }
   return {
     path: [whole, lineSegment(whole.to, top)],
     nodes: [
-      { name: 'above-bust', at: whole.to, level: null },
+      { name: 'above-bust', at: whole.to, level: 'top-edge' },
       { name: 'top', at: top, level: null },
     ],
   }
 }
 
 /** A rail carried on by further segments, each with the node at its end. */
-export function railThen(rail: Rail, segments: readonly { readonly segment: Segment; readonly name: string }[]): Rail {
+export function railThen(
+  rail: Rail,
+  segments: readonly { readonly segment: Segment; readonly name: string; readonly level?: LevelId | null }[],
+): Rail {
   return {
     path: [...rail.path, ...segments.map(({ segment }) => segment)],
-    nodes: [...rail.nodes, ...segments.map(({ segment, name }) => ({ name, at: segment.to, level: null }))],
+    nodes: [...rail.nodes, ...segments.map(({ segment, name, level }) => ({ name, at: segment.to, level: level ?? null }))],
   }
 }
 

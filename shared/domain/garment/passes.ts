@@ -3,6 +3,8 @@ import { cautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
 import type { GarmentDocument } from '../document/types'
 import { MOST_PULL, passLevel, type LevelPass, type Opening } from '../textile/getting-in'
+import { opens } from '../draft/panels'
+import { wholeEdge } from '../draft/roles'
 import { pathLength } from '../geometry/path'
 import type { RingGeometry, RingSegment } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
@@ -41,7 +43,7 @@ export function neckEdge(solution: Pick<GarmentSolution, 'draft' | 'plans' | 'ri
     2 *
     solution.draft.pieces
       .filter((piece) => piece.zone === half)
-      .flatMap((piece) => piece.edges.filter((edge) => edge.id === 'neckline'))
+      .flatMap((piece) => piece.edges.filter((edge) => wholeEdge(edge.id) === 'neckline'))
       .reduce((sum, edge) => sum + pathLength(edge.path), 0)
   const yoke = solution.plans.find((plan) => plan.zone === 'yoke')
   const segments = (['front', 'back'] as const).flatMap((half): RingSegment[] => {
@@ -102,8 +104,8 @@ export function entryCautions(input: GarmentInput, passes: readonly GarmentPass[
   const found: Caution[] = []
   for (const pass of passes) found.push(...levelCautions(pass, use.opens !== 'unsaid'))
   const place = { kind: 'garment' } as const
-  const opensBehind = style.centreBack === 'lacing' || use.opens === 'part' || use.opens === 'whole'
-  if (use.frontRelease || style.centreFront === 'lacing') return found
+  const opensBehind = opens(style.centreBack) || use.opens === 'part' || use.opens === 'whole'
+  if (use.frontRelease || opens(style.centreFront)) return found
   if (!opensBehind) return [...found, cautions.noOpening(place, {})]
   const because = use.water ? 'water' : input.wearer.child ? 'child' : null
   if (because === null && use.dresser === '') return [...found, cautions.noDresser(place, {})]

@@ -1,3 +1,4 @@
+import { FRONT_SHARE } from '../body/levels'
 import type { BodyLevel, MeasuredValues } from '../body/types'
 import type { GarmentDocument, LevelChoice } from '../document/types'
 import { ASPECT_BY_LEVEL, breathAt, FRONT_SHARE_BY_LEVEL, type Exertion } from '../textile/defaults'
@@ -5,8 +6,9 @@ import type { RingGeometry, RingMode, RingSegment, RingSolution, SewnRigid } fro
 import { mm, type Mm } from '../units/brand'
 import { EVEN_SPLIT, zoneSegments, type BustSplit, type ZonePlans, type ZoneSegment } from './zones'
 
-/** Body breadth over depth at a level: as measured where both stand, else the default of the level, said to be estimated. */
+/** Body breadth over depth at a level: as measured where both stand, else the default of the level, said to be estimated. A top edge has the bust's. */
 function aspectAt(level: BodyLevel, measured: MeasuredValues): { readonly aspect: number; readonly estimated: boolean } {
+  const id = level.id === 'top-edge' ? 'bust' : level.id
   const pair = {
     bust: ['bustBreadth', 'bustDepth'],
     underbust: ['bustBreadth', 'bustDepth'],
@@ -14,11 +16,12 @@ function aspectAt(level: BodyLevel, measured: MeasuredValues): { readonly aspect
     'high-hip': ['hipBreadth', 'hipDepth'],
     hip: ['hipBreadth', 'hipDepth'],
   } as const
-  const [breadth, depth] = pair[level.id]
+  const [breadth, depth] = pair[id]
   const across = measured[breadth]?.value
   const through = measured[depth]?.value
-  if (across && through && level.id !== 'underbust' && level.id !== 'high-hip') return { aspect: across / through, estimated: false }
-  return { aspect: ASPECT_BY_LEVEL[level.id], estimated: true }
+  if (across && through && level.id !== 'top-edge' && level.id !== 'underbust' && level.id !== 'high-hip')
+    return { aspect: across / through, estimated: false }
+  return { aspect: ASPECT_BY_LEVEL[id], estimated: true }
 }
 
 /** A segment of a ring with its plan and what is sewn to single layers of it. */
@@ -48,7 +51,7 @@ export function ringGeometry(
     level: level.id,
     name: level.name,
     girth: level.girth,
-    frontShare: arc ? arc / level.girth : FRONT_SHARE_BY_LEVEL[level.id],
+    frontShare: arc ? arc / level.girth : level.id === 'top-edge' ? FRONT_SHARE['top-edge'] : FRONT_SHARE_BY_LEVEL[level.id],
     segments: zoneSegments(plans, level.id, more.split ?? EVEN_SPLIT).map((part) => ringSegment(level.id, part, plans, choice)),
     rigidFront: choice.rigidFront,
     rigidBack: choice.rigidBack,
@@ -57,7 +60,7 @@ export function ringGeometry(
     squeeze: choice.squeeze,
     aspect,
     aspectEstimated: estimated,
-    breath: breathAt(level.id, more.exertion ?? 'calm'),
+    breath: breathAt(level.id === 'top-edge' ? 'bust' : level.id, more.exertion ?? 'calm'),
   }
 }
 

@@ -1,9 +1,9 @@
 import { completeBody } from '../body/complete'
-import { bodyLevels } from '../body/levels'
+import { bodyLevels, topEdgeLevel } from '../body/levels'
 import type { BodyLevel, DraftBody, LevelId } from '../body/types'
 import { wearerLimits } from '../body/wearer'
 import type { LevelChoice } from '../document/types'
-import { freshLevel } from '../document/fresh'
+import { DEFAULT_HOLD, freshLevel } from '../document/fresh'
 import { applyAlterations } from '../draft/alterations'
 import { draftBodice } from '../draft/bodice'
 import { blockOf } from '../draft/roles'
@@ -61,6 +61,8 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   if (!body.ok) return atStep('body', body.problem)
   const [styleProblem] = checkStyle(document.style, body.value)
   if (styleProblem) return atStep('draft', styleProblem)
+  const lacking = topEdgeProblem(input)
+  if (lacking !== null) return fail(lacking)
 
   const stiffness = standingStiffness(document)
   const tested = zonePlans(document, input.cloths, null)
@@ -123,6 +125,38 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   return succeed({ ...solution, cautions: garmentCautions(input, solution, altered.effects) })
 }
 
+/** What a strapless bodice lacks to hang from its top edge; null with shoulders. */
+function topEdgeProblem({ document, measured }: GarmentInput): GarmentProblem | null {
+  if (document.style.top === null) return null
+  if (!(Number(measured.upperBustGirth?.value) > 0)) {
+    return {
+      step: 'body',
+      code: 'upper-bust-missing',
+      message: 'A strapless bodice hangs from its top edge, and the upper bust girth is not measured.',
+      todo: 'Measure it round the body under the arms, or take shoulders.',
+      at: 'upperBustGirth',
+    }
+  }
+  const choice = document.levels.find((one) => one.level === 'top-edge') ?? freshLevel('top-edge')
+  if (choice.solve !== 'cut' || choice.hold > 0) return null
+  return {
+    step: 'layers',
+    code: 'top-edge-without-hold',
+    message: 'The top edge holds nothing: a strapless bodice would slip.',
+    todo: `Choose a hold there; ${DEFAULT_HOLD} Pa is easy.`,
+    at: 'top-edge',
+  }
+}
+
+/** The levels of the body, and above them a strapless bodice's top edge where it is lowest, so that it crosses every piece. */
+function levelsOf({ document, measured }: GarmentInput, body: DraftBody): readonly BodyLevel[] {
+  const { top, verticalFactor } = document.style
+  const girth = measured.upperBustGirth?.value
+  if (top === null || girth === undefined) return bodyLevels(body)
+  const heights = top.form === 'straight' ? [top.side] : [top.front, top.back, top.side]
+  return [topEdgeLevel(body, girth, Math.min(...heights) / verticalFactor), ...bodyLevels(body)]
+}
+
 /** The ring of every level of the body under the plans of its zones. */
 function solveLevels(
   input: GarmentInput,
@@ -132,7 +166,7 @@ function solveLevels(
 ): Result<readonly Level[], GarmentProblem> {
   const { document } = input
   const levels: Level[] = []
-  for (const level of bodyLevels(body)) {
+  for (const level of levelsOf(input, body)) {
     const choice = document.levels.find((one) => one.level === level.id) ?? freshLevel(level.id)
     const plans = plansAt(level.id)
     const more = { split, exertion: document.use.exertion }
@@ -167,7 +201,13 @@ const draftFrom = (input: GarmentInput, body: DraftBody, levels: readonly Level[
   draftBodice({
     body,
     style: input.document.style,
-    widths: levels.map((level) => levelWidths(level, cloth.get(level.body.id)!)),
+    widths: levels.filter(({ body: { id } }) => id !== 'top-edge').map((level) => levelWidths(level, cloth.get(level.body.id)!)),
+    ...levels
+      .filter(({ body: { id } }) => id === 'top-edge')
+      .map((level) => {
+        const { front, back } = levelWidths(level, cloth.get('top-edge')!)
+        return { above: { y: level.body.y, front, back } }
+      })[0],
   })
 
 /** Solve, draft, read, correct. */

@@ -5,6 +5,7 @@ export const LEVEL_NAMES: Readonly<Record<LevelId, string>> = {
   bust: 'bust',
   underbust: 'underbust',
   waist: 'waist',
+  'top-edge': 'top edge',
   'high-hip': 'high hip',
   hip: 'hip',
 }

@@ -1,6 +1,6 @@
 import type { HalfFrame } from './frame'
 import { BLOCKS, lineOf } from './roles'
-import type { BodiceStyle, CentreKind, FurtherSeam, HalfPanels, LineId, PieceId, SeamShares } from './types'
+import type { BodiceStyle, CentreKind, FurtherSeam, HalfPanels, LineId, PieceId, SeamLetter, SeamShares } from './types'
 
 export type Zone = 'front' | 'back'
 
@@ -17,6 +17,28 @@ export interface SeamLine {
 
 /** Panels of a half. */
 export const panelCount = ({ princess, further }: HalfPanels): number => (princess ? 2 + further.length : 1)
+
+const LETTERS: readonly SeamLetter[] = ['a', 'b', 'c', 'd']
+/** Most panels of one half: a princess seam and a further seam for each letter. */
+export const MOST_OF_HALF = LETTERS.length + 2
+/** What a new seam takes of the shaping to begin with. Setting. */
+const NEW_SHARE = 0.15
+
+/**
+ * A half with another number of panels: seams are added beside the side seam under the next free letter, or taken away from the last added;
+ * those that stay keep their letter, place and share. One panel has no seam.
+ */
+export function withPanelCount(panels: HalfPanels, count: number): HalfPanels {
+  if (count <= 1) return { princess: false, further: [] }
+  const further = panels.further.slice(0, count - 2)
+  for (const id of LETTERS) {
+    if (further.length >= count - 2) break
+    if (!further.some((seam) => seam.id === id)) {
+      further.push({ id, beside: 'side', at: null, end: null, share: NEW_SHARE, letOut: null })
+    }
+  }
+  return { princess: true, further }
+}
 
 /** Places between two: those that are given, the others (null) evenly between their neighbours. */
 export function fillEvenly(places: readonly (number | null)[], from: number, to: number): readonly number[] {

@@ -1,6 +1,6 @@
 import type { LevelId } from '../body/types'
 import type { Caution } from '../cautions/types'
-import { blockOf } from '../draft/roles'
+import { blockOf, wholeEdge } from '../draft/roles'
 import type { DraftPiece, EdgeId } from '../draft/types'
 import type { HoldBand } from '../textile/types'
 import { formatLength } from '../units/format'
@@ -57,12 +57,19 @@ export function cutLines(piece: Pick<DraftPiece, 'id' | 'zone' | 'quantity' | 'o
   return how ? [...counted, how] : counted
 }
 
+/** An edge as it stands in a list of edges: parts of one by its whole, seams with a letter together. */
+function edgeName(edge: EdgeId): string {
+  const whole = wholeEdge(edge)
+  if (whole.startsWith('seam-')) return 'further seams'
+  return whole === 'top' ? 'top edge' : whole
+}
+
 /** The allowances drawn, by width: `1.0 cm princess, side; 2.0 cm hem`. Empty when no edge has one. */
 export function allowanceWords(pieces: readonly DraftPiece[], unit: 'cm' | 'in'): string {
-  const edges = new Map<number, Set<EdgeId>>()
+  const edges = new Map<number, Set<string>>()
   for (const edge of pieces.flatMap((piece) => piece.edges)) {
     if (edge.kind === 'fold' || edge.allowance <= 0) continue
-    edges.set(edge.allowance, (edges.get(edge.allowance) ?? new Set()).add(edge.id))
+    edges.set(edge.allowance, (edges.get(edge.allowance) ?? new Set()).add(edgeName(edge.id)))
   }
   return [...edges]
     .sort(([a], [b]) => a - b)

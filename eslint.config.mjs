@@ -10,7 +10,7 @@ const mayImport = {
   textile: ['units', 'geometry', 'cautions'],
   body: ['units', 'geometry', 'cautions'],
   draft: ['units', 'geometry', 'textile', 'body', 'cautions'],
-  structure: ['units', 'geometry', 'textile', 'body', 'cautions'],
+  structure: ['units', 'geometry', 'textile', 'body', 'draft', 'cautions'],
   document: ['units', 'geometry', 'textile', 'body', 'draft', 'structure', 'cautions'],
   garment: ['units', 'geometry', 'textile', 'body', 'draft', 'structure', 'document', 'cautions'],
   grade: ['units', 'geometry', 'textile', 'body', 'draft', 'structure', 'document', 'garment', 'cautions'],

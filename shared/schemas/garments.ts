@@ -3,6 +3,7 @@ import type { Caution } from '../domain/cautions/types'
 import type { GarmentDocument } from '../domain/document/types'
 import type { GarmentCloth, GarmentInput, GarmentProblem, GarmentSolution } from '../domain/garment/types'
 import { figure, id, isoDate, length, mirrors, name, optionalText, point, pressure, revision, tension } from './base'
+import { structureChoice } from './structure'
 import { alteration, bodiceStyle, bodyLevel, draft, draftBody, levelId } from './draft'
 import { measuredValues } from './measuring'
 import { clothState, direction, layerCloth, layerPlan, ringGeometry, ringSolution } from './textile'
@@ -92,6 +93,7 @@ export const garmentDocument = mirrors<GarmentDocument>()(
       })
       .nullable()
       .default(null),
+    structure: structureChoice.optional(),
     alteredIn: z.string().max(8000).optional(),
   }),
 )

@@ -13,6 +13,9 @@ import { readMachineFile } from '../../shared/utils/machine-file'
 import { solveGarment } from '../../shared/domain/garment/solve'
 import { draftBodice } from '../../shared/domain/draft/bodice'
 import { solveRing } from '../../shared/domain/textile/ring'
+import { DEFAULT_CLOSURES } from '../../shared/domain/structure/lacing'
+import { layOutBones } from '../../shared/domain/structure/lay-out'
+import { DEFAULT_STOCK } from '../../shared/domain/structure/stock'
 import type { LevelWidths } from '../../shared/domain/draft/types'
 import { mm, pascal } from '../../shared/domain/units/brand'
 import { inventedInput } from '../fixtures/garment-inputs'
@@ -42,6 +45,20 @@ const widths: LevelWidths[] = levels.map((level) => {
   return { level: level.id, front: mm(cloth('front') / 2), back: mm(cloth('back') / 2), gapFront: mm(0), gapBack: mm(50) }
 })
 
+/** Twelve bones over the four pieces and a laced back. */
+const boned: typeof input = {
+  ...input,
+  document: {
+    ...input.document,
+    structure: {
+      bones: draft.pieces.flatMap(
+        (piece) => layOutBones(piece, 3, DEFAULT_STOCK[1]!, piece.id, (index) => `${piece.name} ${index + 1}`).bones,
+      ),
+      closures: { front: null, back: DEFAULT_CLOSURES.lacing },
+    },
+  },
+}
+
 const peer = median(() => curves.forEach((curve) => new Bezier(curve.points).length()))
 const ringTime = median(() => ringInputs.forEach((geometry) => solveRing(geometry, { solve: 'cut', hold: pascal(1200) }, input.settings)))
 const draftTime = median(() => draftBodice({ body, style: input.document.style, widths }))
@@ -49,6 +66,7 @@ const wideTime = medianOfFresh(8)
 const sewnTime = medianOfFresh(8, 12)
 const runTime = medianOfFresh(200)
 const wholeTime = median(() => solveGarment(input))
+const bonedTime = median(() => solveGarment(boned))
 
 /** A machine's file of 100,000 rows, five cycles. Invented. */
 const lines = ['Time (s),Extension (mm),Load (N)']
@@ -94,6 +112,11 @@ const rows = [
   { what: 'rings: 200 of a size run, 6 segments, 5 layers (under 20 ms)', time: runTime, most: 1200 },
   { what: 'draft: four pieces, trued, notched, offset', time: draftTime, most: 120 },
   { what: 'whole garment: solve, draft, read, judge', time: wholeTime, most: 150 },
+  {
+    what: `whole garment with ${boned.document.structure!.bones.length} bones and a lacing, settled (under 5 ms)`,
+    time: bonedTime,
+    most: 350,
+  },
 ]
 let failed = false
 for (const { what, time, most } of rows) {

@@ -8,11 +8,24 @@ import * as fit from './fit-cautions'
 import * as hold from './hold-cautions'
 import * as layer from './layer-cautions'
 import * as standing from './standing-notes'
+import * as structure from './structure-cautions'
 import type { Caution, Severity } from './types'
 import * as wearer from './wearer-cautions'
 
 /** Every code there is, by the room that finds it. A caution is built by calling its entry with its place and facts. */
-export const cautions = { ...hold, ...layer, ...cloth, ...body, ...wearer, ...draft, ...closure, ...entry, ...fit, ...standing } as const
+export const cautions = {
+  ...hold,
+  ...layer,
+  ...cloth,
+  ...body,
+  ...wearer,
+  ...draft,
+  ...closure,
+  ...entry,
+  ...fit,
+  ...structure,
+  ...standing,
+} as const
 
 /** The registry by code: source, whether a stop of it may be cleared, whether its figures are the wearer's own. */
 export const CAUTION_REGISTRY: ReadonlyMap<string, Pick<CautionMaker<never>, 'code' | 'source' | 'clearable' | 'private'>> = new Map(

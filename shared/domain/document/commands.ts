@@ -2,6 +2,7 @@ import type { LevelId } from '../body/types'
 import type { Acknowledged } from '../cautions/acknowledge'
 import { edgeWords, pieceWords } from '../draft/roles'
 import type { Alteration, BodiceStyle, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from '../draft/types'
+import type { Bone, ClosureChoice, StructureChoice } from '../structure/types'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothState } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
@@ -38,6 +39,10 @@ export type Command =
   | { readonly kind: 'change-alteration'; readonly id: string; readonly patch: AlterationPatch }
   | { readonly kind: 'remove-alteration'; readonly id: string }
   | { readonly kind: 'order-alteration'; readonly id: string; readonly to: number }
+  /** Bones added or, by their ids, in place of those that stand. */
+  | { readonly kind: 'set-bones'; readonly bones: readonly Bone[]; readonly label: string }
+  | { readonly kind: 'remove-bone'; readonly id: string }
+  | { readonly kind: 'set-closure'; readonly half: 'front' | 'back'; readonly closure: ClosureChoice | null }
   /** A whole document in place of this one: a recut, a trial. */
   | { readonly kind: 'take-over'; readonly document: GarmentDocument; readonly label: string }
 
@@ -149,6 +154,17 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
       return { ...document, alterations: document.alterations.filter((one) => one.id !== command.id) }
     case 'order-alteration':
       return { ...document, alterations: ordered(document.alterations, command.id, command.to) }
+    case 'set-bones':
+      return withStructure(document, ({ bones }) => ({
+        bones: [
+          ...bones.map((one) => command.bones.find((next) => next.id === one.id) ?? one),
+          ...command.bones.filter((next) => !bones.some((one) => one.id === next.id)),
+        ],
+      }))
+    case 'remove-bone':
+      return withStructure(document, ({ bones }) => ({ bones: bones.filter((one) => one.id !== command.id) }))
+    case 'set-closure':
+      return withStructure(document, ({ closures }) => ({ closures: { ...closures, [command.half]: command.closure } }))
     case 'take-over':
       return command.document
   }
@@ -165,6 +181,11 @@ function styled(document: GarmentDocument, patch: Partial<BodiceStyle>): Garment
     use: { ...document.use, strapless: style.top !== null },
     levels: style.top === null || has ? document.levels : [freshLevel('top-edge'), ...document.levels],
   }
+}
+
+function withStructure(document: GarmentDocument, change: (now: StructureChoice) => Partial<StructureChoice>): GarmentDocument {
+  const now = document.structure ?? { bones: [], closures: { front: null, back: null } }
+  return { ...document, structure: { ...now, ...change(now) } }
 }
 
 /** A zone beside front and back is there while it has layers. */
@@ -241,7 +262,12 @@ function commandWords(command: Command): string {
       return 'alteration removed'
     case 'order-alteration':
       return 'order of alterations'
+    case 'remove-bone':
+      return 'bone removed'
+    case 'set-closure':
+      return `closure at the centre ${command.half}`
     case 'set-plans':
+    case 'set-bones':
     case 'add-alterations':
     case 'take-over':
       return command.label

@@ -39,5 +39,6 @@ export function freshDocument(): GarmentDocument {
     alterations: [],
     acknowledged: [],
     stiffness: null,
+    structure: { bones: [], closures: { front: null, back: null } },
   }
 }

@@ -2,6 +2,7 @@ import type { EntryWay } from '../body/passing'
 import type { LevelId } from '../body/types'
 import type { Acknowledged } from '../cautions/acknowledge'
 import type { Alteration, BodiceStyle } from '../draft/types'
+import type { StructureChoice } from '../structure/types'
 import type { Exertion } from '../textile/defaults'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothDirection, ClothState } from '../textile/types'
@@ -83,6 +84,8 @@ export interface GarmentDocument {
   readonly acknowledged: readonly Acknowledged[]
   /** What a fitting taught of the cloth; null until one did, or once it was dropped. */
   readonly stiffness: Stiffness | null
+  /** Bones and what is stiff of the closures; absent in documents older than it. */
+  readonly structure?: StructureChoice
   /** The layers that the first standing alteration was made in, as `planKey` writes them; absent in documents older than this. */
   readonly alteredIn?: string
 }

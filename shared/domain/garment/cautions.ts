@@ -12,6 +12,7 @@ import { mm, pascal } from '../units/brand'
 import { draftCautions } from './draft-cautions'
 import { entryCautions } from './passes'
 import { standingStiffness } from './plans'
+import { structureCautions } from './structure'
 import type { GarmentInput, GarmentSolution } from './types'
 import { EXTRA_ZONES, zoneStanding } from './zones'
 
@@ -88,6 +89,7 @@ export function garmentCautions(
       settings,
       today,
     }),
+    ...structureCautions({ document, draft: solution.draft, rings: solution.rings, plans: solution.plans }),
     ...draftCautions({
       draft: solution.draft,
       alterations: document.alterations,

@@ -20,6 +20,8 @@ import { garmentCautions } from './cautions'
 import { passesOf } from './passes'
 import { standingStiffness, zonePlans } from './plans'
 import { gapsOf, modeOf, ringGeometry } from './rings'
+import { rigidLargest, rigidMoved, type RigidWidths } from '../structure/rigid'
+import { isStructured, rigidOf } from './structure'
 import type { GarmentInput, GarmentProblem, GarmentSolution } from './types'
 import { bustSplit, dividesHalves, EVEN_SPLIT, EXTRA_ZONES, zoneSegments, type BustSplit, type ZonePlans, type ZoneSegment } from './zones'
 
@@ -30,6 +32,9 @@ export const ENGINE = 'tenterframe-1'
 const TENSION_TOLERANCE = 0.005
 const WIDTH_TOLERANCE = mm(0.05)
 const MOST_ROUNDS = 8
+/** Rigid widths stand when none moves by more than this, mm. */
+const RIGID_TOLERANCE = WIDTH_TOLERANCE
+const MOST_STRUCTURE_ROUNDS = 4
 
 interface Level {
   readonly body: BodyLevel
@@ -38,6 +43,8 @@ interface Level {
   readonly parts: readonly ZoneSegment[]
   readonly geometry: RingGeometry
   readonly solved: RingSolution
+  /** Rigid widths of bones and closures it was solved with. */
+  readonly stiff: RigidWidths | undefined
 }
 
 /** Half widths of cloth (without rigid parts) at a level: what the loop corrects. */
@@ -72,19 +79,33 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   const plansAt = (level: LevelId) => (stiffness?.levels?.includes(level) === false ? tested.value : learnt.value)
   const plans = learnt.value
 
-  const first = solveLevels(input, body.value, plansAt, EVEN_SPLIT)
+  const first = solveLevels(input, body.value, plansAt, EVEN_SPLIT, [])
   if (!first.ok) return first
   let levels = first.value
-  if (dividesHalves(plans)) {
+  const structured = isStructured(document)
+  if (dividesHalves(plans) || structured) {
     const drafted = draftFrom(input, body.value, levels, new Map(levels.map((level) => [level.body.id, clothWidths(level.solved)])))
     if (!drafted.ok) return atStep('draft', drafted.problem)
-    const again = solveLevels(input, body.value, plansAt, bustSplit(drafted.value))
+    const split = dividesHalves(plans) ? bustSplit(drafted.value) : EVEN_SPLIT
+    const again = solveLevels(input, body.value, plansAt, split, rigidOf(document, drafted.value.pieces, idsOf(levels)))
     if (!again.ok) return again
     levels = again.value
   }
 
-  const settled = settle(input, body.value, levels)
+  let settled = settle(input, body.value, levels)
   if (!settled.ok) return atStep('draft', settled.problem)
+  // Channels lean as the pieces do: once the pieces stand, the rigid widths are read again, until they stay.
+  for (let round = 1; structured && round <= MOST_STRUCTURE_ROUNDS; round++) {
+    const before = levels.flatMap(({ stiff }) => stiff ?? [])
+    const read = rigidOf(document, settled.value.draft.pieces, idsOf(levels))
+    const now = round === 1 ? read : rigidLargest(before, read)
+    if (rigidMoved(before, now) <= RIGID_TOLERANCE) break
+    const again = solveLevels(input, body.value, plansAt, dividesHalves(plans) ? bustSplit(settled.value.draft) : EVEN_SPLIT, now)
+    if (!again.ok) return again
+    levels = again.value
+    settled = settle(input, body.value, levels)
+    if (!settled.ok) return atStep('draft', settled.problem)
+  }
   const { draft: plain, rounds, done } = settled.value
 
   const altered = applyAlterations(plain, document.alterations)
@@ -163,6 +184,7 @@ function solveLevels(
   body: DraftBody,
   plansAt: (level: LevelId) => ZonePlans,
   split: BustSplit,
+  structure: readonly RigidWidths[],
 ): Result<readonly Level[], GarmentProblem> {
   const { document } = input
   const levels: Level[] = []
@@ -170,13 +192,28 @@ function solveLevels(
     const choice = document.levels.find((one) => one.level === level.id) ?? freshLevel(level.id)
     const plans = plansAt(level.id)
     const more = { split, exertion: document.use.exertion }
-    const geometry = ringGeometry(level, { ...choice, ...gapsOf(document, choice) }, plans, input.measured, more)
+    const stiff = structure.find((one) => one.level === level.id)
+    const geometry = ringGeometry(level, { ...withRigid(choice, stiff), ...gapsOf(document, choice) }, plans, input.measured, more)
     const solved = solveLevel(input, choice, geometry)
     if (!solved.ok) return atStep('layers', { ...solved.problem, at: solved.problem.at ?? level.id })
     const parts = zoneSegments(plans, level.id, split)
-    levels.push({ body: level, choice, parts, geometry: withGaps(geometry, solved.value), solved: solved.value })
+    levels.push({ body: level, choice, parts, geometry: withGaps(geometry, solved.value), solved: solved.value, stiff })
   }
   return succeed(levels)
+}
+
+const idsOf = (levels: readonly Level[]): readonly LevelId[] => levels.map((level) => level.body.id)
+
+/** What was typed and what bones and closures bring, together. */
+function withRigid(choice: LevelChoice, stiff: RigidWidths | undefined): LevelChoice {
+  if (!stiff) return choice
+  const sewn = [...(choice.sewn ?? []), ...stiff.sewn]
+  return {
+    ...choice,
+    rigidFront: mm(choice.rigidFront + stiff.front),
+    rigidBack: mm(choice.rigidBack + stiff.back),
+    ...(sewn.length > 0 ? { sewn } : {}),
+  }
 }
 
 const isNotApplied = (state: string): boolean => state === 'parked' || state === 'refused'

@@ -26,10 +26,10 @@ export const vectorDot = (a: Point, b: Point): number => a.x * b.x + a.y * b.y
 /** Positive where b lies counter-clockwise of a. */
 export const vectorCross = (a: Point, b: Point): number => a.x * b.y - a.y * b.x
 
-export const vectorLength = (a: Point): number => Math.hypot(a.x, a.y)
+export const vectorLength = (a: Point): number => Math.sqrt(a.x * a.x + a.y * a.y)
 
 /** Straight distance, mm. */
-export const pointDistance = (a: Point, b: Point): number => Math.hypot(b.x - a.x, b.y - a.y)
+export const pointDistance = (a: Point, b: Point): number => Math.sqrt((b.x - a.x) * (b.x - a.x) + (b.y - a.y) * (b.y - a.y))
 
 /** Unit vector; the zero vector stays zero. */
 export function vectorUnit(a: Point): Point {

@@ -11,6 +11,7 @@ export interface BoardShow {
   readonly ticks?: boolean
   readonly points?: boolean
   readonly labels?: boolean
+  readonly bones?: boolean
 }
 
 export type BoardStrains = Readonly<Record<'front' | 'back', Readonly<Partial<Record<LevelId, number>>>>>

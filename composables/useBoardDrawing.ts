@@ -75,6 +75,14 @@ export function fillOutline(pen: Pen, view: BoardView, outline: Path, colour: st
   pen.fill()
 }
 
+/** Solid parts of one role: bone channels. */
+export function fillRole(pen: Pen, view: BoardView, operations: readonly DrawingOperation[], role: DrawingRole, colour: string) {
+  pen.beginPath()
+  for (const operation of operations) if (operation.kind === 'path' && operation.role === role) tracePath(pen, view, operation.path, true)
+  pen.fillStyle = colour
+  pen.fill()
+}
+
 /** All lines of one role in one stroke. */
 export function strokeRole(pen: Pen, view: BoardView, operations: readonly DrawingOperation[], role: DrawingRole, palette: BoardPalette) {
   const line = LINES[role]

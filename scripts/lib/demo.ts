@@ -1,6 +1,10 @@
 import { sql } from 'kysely'
 import type { LevelId } from '../../shared/domain/body/types'
-import type { Alteration } from '../../shared/domain/draft/types'
+import type { Alteration, DraftPiece } from '../../shared/domain/draft/types'
+import { DEFAULT_CLOSURES } from '../../shared/domain/structure/lacing'
+import { layOutBones } from '../../shared/domain/structure/lay-out'
+import { DEFAULT_STOCK } from '../../shared/domain/structure/stock'
+import type { StructureChoice } from '../../shared/domain/structure/types'
 import type { GarmentDocument, LayerChoice } from '../../shared/domain/document/types'
 import { DEFAULT_TEXTILE_SETTINGS } from '../../shared/domain/textile/defaults'
 import { mm, newton, pascal } from '../../shared/domain/units/brand'
@@ -92,6 +96,7 @@ interface DemoGarment {
   readonly hold?: number | Readonly<Partial<Record<LevelId, number>>>
   readonly alterations?: readonly Alteration[]
   readonly centreBack: 'lacing' | 'seam'
+  readonly boned?: true
 }
 
 /** A laced back stands open by 50 mm at every level and by 320 mm unlaced, with a dresser at hand; a seam takes no gap. */
@@ -136,6 +141,7 @@ const GARMENTS: readonly DemoGarment[] = [
   {
     code: 'LS-032',
     centreBack: 'lacing',
+    boned: true,
     name: 'Heron bodice',
     wearer: 'Ilse Marenbach',
     dueOn: '2027-01-22',
@@ -208,7 +214,45 @@ async function seedGarment(
   }
   const saved = await saveWorkingCopy(room, id, { base: copy.revision, document: withBack(plain, garment.centreBack) })
   if (!saved.solution) throw new Error(`${code} does not solve: ${saved.problem?.message}`)
-  return { id, saved }
+  if (!garment.boned) return { id, saved }
+  const structure = bonesFor(saved.solution.draft.pieces)
+  const boned = await saveWorkingCopy(room, id, { base: saved.revision, document: { ...saved.document, structure } })
+  if (!boned.solution) throw new Error(`${code} does not solve with its bones: ${boned.problem?.message}`)
+  return { id, saved: boned }
+}
+
+/** Spiral bones over the panels, two beside the eyelets of a laced back, all under shell and outer net. */
+function bonesFor(pieces: readonly DraftPiece[]): StructureChoice {
+  const stock = DEFAULT_STOCK.find(({ id }) => id === 'spiral-stainless-6')!
+  const counts: Readonly<Record<string, number>> = { 'front-centre': 1, 'side-front': 2, 'side-back': 1 }
+  const bones = pieces.flatMap(
+    (piece) =>
+      layOutBones(
+        piece,
+        counts[piece.id] ?? 0,
+        stock,
+        `bone-${piece.id}`,
+        (index) => `${piece.name} bone${counts[piece.id] === 1 ? '' : ` ${index + 1}`}`,
+      ).bones,
+  )
+  const [back] = layOutBones(
+    pieces.find(({ id }) => id === 'back-centre')!,
+    1,
+    stock,
+    'bone-back-centre',
+    () => 'Bone',
+  ).bones
+  const beside = [0.08, 0.5].map((at, index) => ({
+    ...back!,
+    id: `bone-eyelets-${index}`,
+    name: index === 0 ? 'Bone at the laced edge' : 'Bone beyond the eyelets',
+    place: { kind: 'panel' as const, piece: 'back-centre' as const, at },
+    top: { kind: 'level' as const, level: 'bust' as const, above: mm(50) },
+  }))
+  return {
+    bones: [...bones, ...beside].map((bone) => ({ ...bone, under: 2 })),
+    closures: { front: null, back: DEFAULT_CLOSURES.lacing },
+  }
 }
 
 /** Loads the demo workroom, and a small second one that must stay apart from it, through the same

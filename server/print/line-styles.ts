@@ -17,6 +17,7 @@ export const LINE_STYLES: Readonly<Record<DrawingRole | SheetRole, LineStyle>> =
   grain: { width: 0.3, grey: 0 },
   stretch: { width: 0.3, grey: 0 },
   level: { width: 0.2, grey: 0.35, dash: [0.6, 1.6] },
+  bone: { width: 0.2, grey: 0.2, fill: 0.86 },
   'stretch-tick': { width: 0.15, grey: 0.5 },
   point: { width: 0.2, grey: 0 },
   label: { width: 0.25, grey: 0 },

@@ -96,6 +96,9 @@ function blockOf(piece: DraftPiece, facts: PrintFacts): Group[] {
     ...line(LAYER.grain, piece.grain.from, piece.grain.to),
     ...line(LAYER.internal, piece.stretch.from, piece.stretch.to),
     ...piece.levels.flatMap(({ from, to }) => line(LAYER.internal, from, to)),
+    ...(facts.bones ?? [])
+      .filter((bone) => bone.piece === piece.id)
+      .flatMap((bone) => polyline(LAYER.internal, pathFlatten(bone.path, CHORD), false)),
     ...lines.flatMap((one, index) => words({ x: bounds.left + 5, y: piece.labelAt.y - index * TEXT_SIZE * 1.5 }, one)),
     [0, 'ENDBLK'],
     [8, '0'],

@@ -23,6 +23,7 @@ const LAYER_NAMES: Readonly<Record<DrawingRole, string>> = {
   grain: 'grain line',
   stretch: 'greatest stretch',
   level: 'level lines',
+  bone: 'bones',
   'stretch-tick': 'stretch ticks',
   point: 'points',
   label: 'piece name',
@@ -45,8 +46,8 @@ function pathData(path: Path, closed: boolean, place: (point: Point) => Point): 
   return closed ? `${data}Z` : data
 }
 
-const strokeOf = ({ width, grey: level, dash }: LineStyle) =>
-  `fill="none" stroke="${grey(level)}" stroke-width="${width}"${dash ? ` stroke-dasharray="${dash.join(' ')}"` : ''}`
+const strokeOf = ({ width, grey: level, dash, fill }: LineStyle) =>
+  `fill="${fill === undefined ? 'none' : grey(fill)}" stroke="${grey(level)}" stroke-width="${width}"${dash ? ` stroke-dasharray="${dash.join(' ')}"` : ''}`
 
 /**
  * A pattern as SVG in millimetres: the user unit is 1 mm and the page says its size in mm. A group a piece, in it a group a layer with

@@ -1,4 +1,5 @@
 import type { VersionKept } from '../../shared/domain/garment/snapshot'
+import { laidBones } from '../../shared/domain/garment/structure'
 import { printSet, type PrintSet } from '../../shared/domain/output/print-set'
 import { exchangeDrawing } from '../../shared/domain/output/exchange'
 import type { PrintedLines, PrintFacts } from '../../shared/domain/output/print-words'
@@ -46,7 +47,12 @@ async function keptForPrint(room: Room, id: string, unit: LengthUnit) {
   const kept = fromJson<VersionKept>(found(await findVersionKept(room.db, room.workroom, id)).kept)
   const marks = [row.clearedAt ? 'cleared for cutting' : 'not cleared for cutting', ...(row.erasedAt ? ['body erased'] : [])]
   const version = `version ${row.number}, ${marks.join(', ')}`
-  return { kept, facts: factsOf(kept, row.garmentCode, version, room.today, unit), title: `${row.garmentCode} version ${row.number}` }
+  const { bones } = laidBones(kept.document, kept.draft.pieces)
+  return {
+    kept,
+    facts: { ...factsOf(kept, row.garmentCode, version, room.today, unit), bones },
+    title: `${row.garmentCode} version ${row.number}`,
+  }
 }
 
 /** The print set of a version as saved. An archived cloth or an erased body changes nothing on it but its mark. */

@@ -31,6 +31,7 @@ export function exchangeDrawing(facts: PrintFacts, pieces: readonly DraftPiece[]
     const piece = pieces.find(({ id }) => id === placement.piece)!
     const operations = pieceOperations(piece, placement, {
       show: { seam: lines !== 'cutting', cutting: lines !== 'seam' },
+      bones: facts.bones ?? [],
       lines: [...cutLines(piece, facts), `${facts.garmentCode} · ${facts.version}`],
       textSize: 5,
     })

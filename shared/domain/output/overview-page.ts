@@ -33,7 +33,7 @@ export function overviewPages(input: OverviewInput): readonly Sheet[] {
   const fresh: Flow = { left, width: right - left, y: top, operations: [] }
   const pages: Flow[] = []
   let flow = headPart(fresh, input)
-  for (const section of [...cautionParts(input), ...cuttingParts(input), linesPart(input)]) {
+  for (const section of [...cautionParts(input), ...cuttingParts(input), ...boneParts(input), linesPart(input)]) {
     const next = section(flow)
     if (next.y >= bottom) flow = next
     else {
@@ -158,6 +158,33 @@ function cuttingParts({ facts, pieces }: OverviewInput): Part[] {
   return facts.rings.length > 0 ? [...pieceParts, ringPart] : pieceParts
 }
 
+/** Bones to cut, the same ones together. What is said of cutting them is common practice. */
+function boneParts({ facts, pieces }: OverviewInput): Part[] {
+  const bones = (facts.bones ?? []).filter((bone) => pieces.some((piece) => piece.id === bone.piece))
+  if (bones.length === 0) return []
+  const columns: readonly TableColumn[] = [
+    { share: 0.34 },
+    { share: 0.3 },
+    { share: 0.12, align: 'end' },
+    { share: 0.12, align: 'end' },
+    { share: 0.12, align: 'end' },
+  ]
+  const length = (value: number) => formatLength(mm(value), facts.unit)
+  const rows = bones.map(
+    (bone): Part =>
+      (flow) =>
+        tableRow(flow, columns, [bone.name, bone.stock.name, `${bone.count} ×`, length(bone.cut), length(bone.channel)], BODY),
+  )
+  const [first, ...others] = rows
+  const note: Part = (flow) =>
+    paragraph(flow, 'Insert each bone, mark it, then cut and cap it: the channel grows as the bone goes in.', { size: BODY })
+  return [
+    (flow) => first!(tableRow(heading(flow, 'Bones'), columns, ['Bone', 'Stock', 'Cut', 'Length', 'Channel'], BODY, 'semibold')),
+    ...others,
+    note,
+  ]
+}
+
 function cautionParts({ facts }: OverviewInput): Part[] {
   const sentence =
     (severity: string, text: string): Part =>
@@ -174,6 +201,7 @@ const lineSamples: readonly (readonly [DrawingRole, string])[] = [
   ['seam-line', 'seam line'],
   ['fold', 'fold'],
   ['level', 'level line'],
+  ['bone', 'bone channel'],
   ['grain', 'grain line'],
   ['stretch', 'greatest stretch'],
   ['notch', 'notch: one front, two back'],
@@ -187,7 +215,8 @@ const linesPart =
       ([role]) =>
         (role !== 'cutting-line' || lines !== 'seam') &&
         (role !== 'seam-line' || lines !== 'cutting') &&
-        (role !== 'stretch-tick' || facts.strains),
+        (role !== 'stretch-tick' || facts.strains) &&
+        (role !== 'bone' || (facts.bones ?? []).length > 0),
     )
     const titled = heading(flow, 'Lines')
     const perRow = Math.max(1, Math.floor(flow.width / 62))

@@ -77,7 +77,7 @@ export function printSet(facts: PrintFacts, pieces: readonly DraftPiece[], optio
     const label = pieceLabel(piece, facts)
     const strains = facts.strains?.[piece.zone]
     const show = { seam: lines !== 'cutting', cutting: lines !== 'seam', ticks: strains !== undefined }
-    return pieceOperations(piece, placement, { ...label, show, ...(strains ? { strains } : {}) })
+    return pieceOperations(piece, placement, { ...label, show, bones: facts.bones ?? [], ...(strains ? { strains } : {}) })
   })
   const wordPlan = isRoll(paper.id) ? { ...plan, page: STAMP, margin: STAMP_MARGIN } : plan
   const measured = measurePages(wordPlan)

@@ -2,6 +2,7 @@ import type { LevelId } from '../body/types'
 import type { Caution } from '../cautions/types'
 import { blockOf, wholeEdge } from '../draft/roles'
 import type { DraftPiece, EdgeId } from '../draft/types'
+import type { LaidBone } from '../structure/types'
 import type { HoldBand } from '../textile/types'
 import { formatLength } from '../units/format'
 import type { Mm } from '../units/brand'
@@ -24,6 +25,8 @@ export interface PrintFacts {
   readonly rings: readonly { readonly name: string; readonly cut: Mm; readonly hold: HoldBand }[]
   /** Open cautions; only the maker's words are printed. */
   readonly cautions: readonly Pick<Caution, 'severity' | 'makerMessage'>[]
+  /** Bones as they lie on the pieces. */
+  readonly bones?: readonly LaidBone[]
   /** The printer whose error is taken out, said on every tile; null prints as it is. */
   readonly printer?: CorrectedPrinter | null
   /** Worn strain by zone and level; given, the pieces carry stretch ticks. */

@@ -3,6 +3,8 @@ import type { DraftPiece, PieceEdge } from '../draft/types'
 import { pointDistance } from '../geometry/point'
 import type { Path, Point } from '../geometry/types'
 import { mm } from '../units/brand'
+import type { LaidBone } from '../structure/types'
+import { boneOutline } from './bone-outline'
 import { insideAtHeight, pointsAlong } from './crossings'
 import { LEVEL_NAMES } from './level-names'
 import { arrowHead, notchStrokes, pointCross, pullStrokes } from './marks'
@@ -14,11 +16,13 @@ import { shareInside } from './touching'
 import type { DrawingOperation, DrawingRole, Placement } from './types'
 
 /** What a drawing of a piece may show. */
-export type ScenePart = 'seam' | 'cutting' | 'notches' | 'arrows' | 'levels' | 'level-names' | 'ticks' | 'points' | 'labels'
+export type ScenePart = 'bones' | 'seam' | 'cutting' | 'notches' | 'arrows' | 'levels' | 'level-names' | 'ticks' | 'points' | 'labels'
 
 export interface SceneOptions {
   /** Shown unless `false`; ticks and points only when `true`. */
   readonly show?: Readonly<Partial<Record<ScenePart, boolean>>>
+  /** Bones as they lie; those of other pieces are left out. */
+  readonly bones?: readonly LaidBone[]
   /** Worn strain round the body by level, of the piece's own zone. Without it no ticks. */
   readonly strains?: Readonly<Partial<Record<LevelId, number>>>
   /** Lines under the piece's name; without them the words of the cut. */
@@ -28,6 +32,7 @@ export interface SceneOptions {
 }
 
 const shownUnlessAsked: Readonly<Record<ScenePart, boolean>> = {
+  bones: true,
   seam: true,
   cutting: true,
   notches: true,
@@ -71,6 +76,7 @@ export function pieceOperations(piece: DraftPiece, placement: Placement, options
     const clear = [...labels.map((label) => label.box), ...(shows('arrows') ? arrowBoxes(piece) : [])]
     for (const tick of stretchTicks(piece, options.strains, clear)) draw('stretch-tick', [{ kind: 'line', ...tick }])
   }
+  if (shows('bones')) for (const bone of options.bones ?? []) if (bone.piece === piece.id) draw('bone', boneOutline(bone), true)
   if (shows('levels')) {
     for (const { level, from, to } of piece.levels) {
       for (const part of besideWords({ from, to }, labels)) draw('level', [{ kind: 'line', ...part }])

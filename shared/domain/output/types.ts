@@ -3,7 +3,18 @@ import type { Mm } from '../units/brand'
 
 /** What a drawn thing is; screens and prints give each role its own line, never colour alone. */
 export type DrawingRole =
-  'seam-line' | 'cutting-line' | 'fold' | 'notch' | 'grain' | 'stretch' | 'level' | 'stretch-tick' | 'point' | 'label' | 'label-small'
+  | 'seam-line'
+  | 'cutting-line'
+  | 'fold'
+  | 'notch'
+  | 'grain'
+  | 'stretch'
+  | 'level'
+  | 'bone'
+  | 'stretch-tick'
+  | 'point'
+  | 'label'
+  | 'label-small'
 
 /** A drawing operation in millimetres on the drafting plane, y up. The board and the print draw the same ones. */
 export type DrawingOperation =

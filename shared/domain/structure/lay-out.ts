@@ -1,4 +1,5 @@
 import type { DraftPiece } from '../draft/types'
+import { pathEnd } from '../geometry/path'
 import { mm, type Mm } from '../units/brand'
 import { layBone } from './bone'
 import { boneFindings } from './rules'
@@ -7,7 +8,9 @@ import type { Bone, BoneStock } from './types'
 
 /** Ends inside the edges to begin with: an armhole asks for more than another finished edge. */
 export const END_CLEAR = { armhole: mm(20), finished: mm(13) }
-const MOST_CLEAR = 120
+const MOST_CLEAR = 400
+/** Bones laid out end no further than this above the bust line, whatever the piece does above it, mm. Setting; common practice. */
+const ABOVE_BUST = 60
 
 /** Vertical bones laid out on a panel. */
 export interface LaidOut {
@@ -73,6 +76,8 @@ function withEnds(piece: DraftPiece, at: number, stock: BoneStock, id: string, n
     const bone = make(END_CLEAR.finished, mm(top))
     const laid = layBone(bone, [piece], [stock])
     if (!laid.ok) return null
+    const bust = piece.levels.find(({ level }) => level === 'bust')
+    if (bust && pathEnd(laid.value.path).y > (bust.from.y + bust.to.y) / 2 + ABOVE_BUST) continue
     if (boneFindings([laid.value], [piece]).length === 0) return bone
   }
   return null

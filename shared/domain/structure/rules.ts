@@ -1,7 +1,6 @@
 import type { DraftPiece, EdgeId, PieceId } from '../draft/types'
 import { wholeEdge } from '../draft/roles'
 import { pathEnd, pathFlatten, pathStart } from '../geometry/path'
-import { pointDistance } from '../geometry/point'
 import type { Point } from '../geometry/types'
 import type { LaidBone } from './types'
 

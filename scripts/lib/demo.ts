@@ -115,6 +115,7 @@ const GARMENTS: readonly DemoGarment[] = [
   {
     code: 'LS-031',
     centreBack: 'lacing',
+    boned: true,
     name: 'Heron bodice, mock-up',
     wearer: 'Ilse Marenbach',
     dueOn: '2026-12-18',

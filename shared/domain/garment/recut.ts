@@ -83,6 +83,17 @@ function holdAt(ring: RingSolution, geometry: RingGeometry, cloth: number, setti
   return solved.ok ? solved.value : null
 }
 
+/** The same pieces in the final layers: what is rigid there lies on them as well, so their cloth is narrower by what more is rigid. */
+function copiedWidths(geometry: RingGeometry, ring: RingSolution): readonly Mm[] | null {
+  const onto = widthsOnto(geometry, ring)
+  const more = { front: geometry.rigidFront - ring.rigidFront, back: geometry.rigidBack - ring.rigidBack }
+  const cloth = (half: 'front' | 'back') =>
+    onto.reduce((sum, width, i) => (geometry.segments[i]!.half === half ? sum + width : sum), 0)
+  const left = { front: 1 - more.front / cloth('front'), back: 1 - more.back / cloth('back') }
+  if (!(left.front > 0) || !(left.back > 0)) return null
+  return onto.map((width, i) => mm(width * left[geometry.segments[i]!.half]))
+}
+
 /** Cloth that a little more hold takes away, mm, limits left out: how a ring answers an alteration. */
 function giveOf(geometry: RingGeometry, pressure: Pascal, settings: TextileSettings): number {
   const free = { ...settings, largestReduction: 0.9 }
@@ -181,7 +192,8 @@ export function recut(fittedInput: GarmentInput, final: GarmentInput): Result<Re
   if (!plain.ok) return plain
   const levels = fitted.value.rings.map((ring): RecutLevel => {
     const geometry = plain.value.ringInputs.find((one) => one.level === ring.level)
-    const copied = geometry ? solveRing(geometry, { solve: 'tension', widths: widthsOnto(geometry, ring) }, final.settings) : null
+    const widths = geometry ? copiedWidths(geometry, ring) : null
+    const copied = geometry && widths ? solveRing(geometry, { solve: 'tension', widths }, final.settings) : null
     return {
       level: ring.level,
       name: ring.name,

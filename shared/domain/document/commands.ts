@@ -115,12 +115,7 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
     case 'set-plans':
       return { ...document, plans: command.plans }
     case 'set-level':
-      return {
-        ...document,
-        levels: document.levels.map((level) =>
-          command.level === 'all' || level.level === command.level ? { ...level, ...command.patch } : level,
-        ),
-      }
+      return { ...document, levels: withLevel(document.levels, command.level, command.patch) }
     case 'set-style':
       return styled(document, command.patch)
     case 'acknowledge':
@@ -168,6 +163,16 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
     case 'take-over':
       return command.document
   }
+}
+
+/** A level that the document does not have yet is put in as a fresh one: a top edge before it is chosen. */
+function withLevel(
+  levels: readonly LevelChoice[],
+  level: LevelId | 'all',
+  patch: Partial<Omit<LevelChoice, 'level'>>,
+): readonly LevelChoice[] {
+  if (level !== 'all' && !levels.some((own) => own.level === level)) return [{ ...freshLevel(level), ...patch }, ...levels]
+  return levels.map((own) => (level === 'all' || own.level === level ? { ...own, ...patch } : own))
 }
 
 /** A style taken over; with a top edge the garment is strapless and has a level there. The level is kept for the day it is strapless again. */

@@ -1,3 +1,4 @@
+import { allPieces } from '#shared/domain/draft/roles'
 import { acknowledgementOf } from '#shared/domain/cautions/acknowledge'
 import type { Caution, Severity } from '#shared/domain/cautions/types'
 import type { GarmentDocument } from '#shared/domain/document/types'
@@ -98,7 +99,11 @@ export function benchSteps(facts: StepFacts): StepState[] {
       id: 'draft',
       name: 'Draft',
       state: state('draft', solution !== null && problem === null),
-      detail: problem ? 'cannot be drafted' : solution ? count('draft') || plural(solution.draft.pieces.length, 'piece') : 'not drafted',
+      detail: problem
+        ? 'cannot be drafted'
+        : solution
+          ? count('draft') || plural(allPieces(solution.draft).length, 'piece')
+          : 'not drafted',
     },
     {
       id: 'cut',

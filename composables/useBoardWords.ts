@@ -1,12 +1,12 @@
 import type { Alteration, DraftPiece, EdgeId, EdgeNode, PieceEdge, PieceId, PointRole, SeamComparison } from '#shared/domain/draft/types'
-import { edgeWords, pieceWords } from '#shared/domain/draft/roles'
+import { edgeWords, lowerFirst, pieceWords } from '#shared/domain/draft/roles'
 import { TRUE_WITHIN } from '#shared/domain/draft/truing'
 import type { Mm } from '#shared/domain/units/brand'
 import { formatLength } from '#shared/domain/units/format'
 
 export type BoardUnit = 'cm' | 'in'
 
-export const pieceName = (piece: PieceId): string => pieceWords(piece).replace(/^./, (first) => first.toLowerCase())
+export const pieceName = (piece: PieceId): string => lowerFirst(pieceWords(piece))
 
 /** An edge in the trade's words; a centre says which one. */
 export function edgeName(piece: Pick<DraftPiece, 'zone'>, edge: EdgeId): string {

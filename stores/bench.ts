@@ -1,3 +1,4 @@
+import { allPieces } from '#shared/domain/draft/roles'
 import { defineStore } from 'pinia'
 import { unsentKey } from '~/composables/useSession'
 import { applyCommand, invertDiff, replayDiff, type Command, type DocumentDiff } from '#shared/domain/document/commands'
@@ -75,7 +76,7 @@ export const useBench = defineStore('bench', () => {
 
   /** A move goes over to the mate where it is wished and there is one. */
   function carries(role: PointRole): boolean {
-    const piece = lastGood.value?.draft.pieces.find((one) => one.id === role.piece)
+    const piece = lastGood.value && allPieces(lastGood.value.draft).find((one) => one.id === role.piece)
     return carry.value && Boolean(piece?.edges.find((edge) => edge.id === role.edge)?.mate)
   }
 

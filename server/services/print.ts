@@ -8,6 +8,7 @@ import { paperOf } from '../../shared/domain/output/paper'
 import { placePoint } from '../../shared/domain/output/placing'
 import type { Placement } from '../../shared/domain/output/types'
 import { planTiles, type TilePlan } from '../../shared/domain/output/tiles'
+import { allPieces } from '../../shared/domain/draft/roles'
 import type { DraftPiece, PieceId } from '../../shared/domain/draft/types'
 import type { Point } from '../../shared/domain/geometry/types'
 import type { ParsedBody } from '../../shared/schemas/routes'
@@ -64,15 +65,15 @@ export async function printOfVersion(
 ): Promise<{ set: PrintSet; title: string; outlines: Point[][] }> {
   const { kept, facts, title } = await keptForPrint(room, id, unit)
   const only = pieces ? { only: pieces.split(',') as PieceId[] } : {}
-  const set = printSet({ ...facts, printer: await printerFor(room, printer) }, kept.draft.pieces, { ...query, ...only })
+  const set = printSet({ ...facts, printer: await printerFor(room, printer) }, allPieces(kept.draft), { ...query, ...only })
   if (!set.ok) return refuse('cannot-solve', { problem: set.problem })
-  return { set: set.value, outlines: outlinesOf(kept.draft.pieces, set.value.placements), title }
+  return { set: set.value, outlines: outlinesOf(allPieces(kept.draft), set.value.placements), title }
 }
 
 /** A version's pieces as one drawing, for other programs. */
 export async function patternOfVersion(room: Room, id: string, lines: PrintedLines, unit: LengthUnit) {
   const { kept, facts, title } = await keptForPrint(room, id, unit)
-  const { pieces } = kept.draft
+  const pieces = allPieces(kept.draft)
   return { pieces, facts, title, drawing: exchangeDrawing(facts, pieces, lines) }
 }
 

@@ -1,5 +1,6 @@
 import type { MeasuredValues } from '../../shared/domain/body/types'
 import type { GarmentDocument } from '../../shared/domain/document/types'
+import { allPieces } from '../../shared/domain/draft/roles'
 import { solveGarment } from '../../shared/domain/garment/solve'
 import type { GarmentInput, GarmentSolution } from '../../shared/domain/garment/types'
 import { garmentDocument } from '../../shared/schemas/garments'
@@ -79,7 +80,7 @@ export async function saveWorkingCopy(
   if (!saved) return refuse('stale', { theirs: await getWorkingCopy(room, garment) })
   const view = await getWorkingCopy(room, garment)
   if (!view.solution) return view
-  await keepGoodSolution(db, workroom, garment, saved.revision, view.solution, outlinesOf(view.solution.draft.pieces))
+  await keepGoodSolution(db, workroom, garment, saved.revision, view.solution, outlinesOf(allPieces(view.solution.draft)))
   return { ...view, lastGood: { revision: saved.revision, solution: view.solution } }
 }
 

@@ -7,7 +7,7 @@ import { figure, length, mirrors, point } from './base'
 
 export const levelId = z.enum(['top-edge', 'bust', 'underbust', 'waist', 'high-hip', 'hip'])
 const seamLetter = z.enum(['a', 'b', 'c', 'd'])
-export const pieceId = z.enum([
+const halfPieces = [
   'front-centre',
   'side-front',
   'side-back',
@@ -30,7 +30,8 @@ export const pieceId = z.enum([
   'back-centre-b',
   'back-centre-c',
   'back-centre-d',
-])
+] as const
+export const pieceId = z.enum([...halfPieces, ...halfPieces.map((id) => `right-${id}` as const)])
 export const edgeId = z.enum([
   'centre',
   'neckline',
@@ -138,6 +139,17 @@ export const bodiceStyle = mirrors<BodiceStyle>()(
   z.object({
     centreFront: centreKind,
     centreBack: centreKind,
+    right: z
+      .object({
+        panels: z.object({ front: halfPanels, back: halfPanels }),
+        princessAt: figure(0.1, 0.9),
+        princessEnd: z.object({ front: princessEnd, back: princessEnd }),
+        backPrincessAt: figure(0.1, 0.9),
+        neckline: z.object({ front: necklineForm, back: necklineForm }),
+        necklineWidth: length(0, 200),
+      })
+      .nullable()
+      .default(null),
     panels: z
       .object({ front: halfPanels, back: halfPanels })
       .default(() => ({ front: { princess: true, further: [] }, back: { princess: true, further: [] } })),
@@ -246,6 +258,7 @@ const seamSide = z.object({ piece: pieceId, edge: edgeId, length: length() })
 export const draft = mirrors<Draft>()(
   z.object({
     pieces: z.array(draftPiece).max(20),
+    right: z.array(draftPiece).max(20).nullable().default(null),
     seams: z.array(z.object({ name: z.string(), a: seamSide, b: seamSide, difference: length() })),
     findings: z.array(
       z.object({

@@ -45,6 +45,15 @@ test('a bodice is divided, pointed and closed as the drafter chooses, and what c
   await front.getByLabel('Panels, centre to side').selectOption('1')
   await expect.poll(async () => (await copyOf(page, id)).solution?.draft.pieces[0]?.id).toBe('front')
 
+  const differs = page.getByRole('switch', { name: 'The right half differs' })
+  await differs.click()
+  await expect(page.getByText(/✕ The right half differs from the left, so the centre front cannot lie on a fold/)).toBeVisible()
+  await page.getByLabel('Centre front', { exact: true }).selectOption('seam')
+  await page.getByRole('group', { name: 'Right front: panels and seams' }).getByLabel('Panels, centre to side').selectOption('2')
+  await expect.poll(async () => (await copyOf(page, id)).solution?.draft.right?.map((piece) => piece.id)).toContain('right-side-front')
+  await accessible(page)
+  await differs.click()
+
   await page.getByLabel('Ends above with').selectOption('top')
   await expect(page.getByText('the upper bust girth is not measured')).toBeVisible()
   await accessible(page)

@@ -1,6 +1,6 @@
 import type { LevelId } from '../body/types'
 import type { Acknowledged } from '../cautions/acknowledge'
-import { edgeWords, pieceWords } from '../draft/roles'
+import { edgeWords, lowerFirst, pieceWords } from '../draft/roles'
 import type { Alteration, BodiceStyle, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from '../draft/types'
 import type { Bone, ClosureChoice, StructureChoice } from '../structure/types'
 import type { Stiffness } from '../textile/stiffness'
@@ -68,7 +68,7 @@ export function sameRole(a: PointRole, b: PointRole): boolean {
 
 /** A point or handle in the trade's words: `side front, princess seam at the bust`. */
 export function roleWords(role: PointRole): string {
-  const piece = pieceWords(role.piece).replace(/^./, (first) => first.toLowerCase())
+  const piece = lowerFirst(pieceWords(role.piece))
   const edge = role.edge === 'centre' ? 'centre edge' : edgeWords(role.edge)
   const handle = role.handle ? `, curve ${role.handle}` : ''
   return `${piece}, ${edge} at ${role.node.replaceAll('-', ' ')}${handle}`

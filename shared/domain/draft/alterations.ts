@@ -5,9 +5,11 @@ import { mm } from '../units/brand'
 import type { Problem } from '../units/result'
 import { girthMoves, withMoves } from './alter-girth'
 import { heightsAfter, LEAST_BETWEEN, lengthened, mostShortened, stretchBelow } from './alter-length'
-import { armholeLength, levelHeightsOf, readFindings, withLevelHeights } from './bodice'
+import { armholeLength, levelHeightsOf, narrowFindings, readFindings, withLevelHeights } from './bodice'
 import { moveIn, placeOf, withEdges, type Place } from './edge-moves'
 import { outlineIsSound, readPiece, type LevelHeight } from './piece'
+import { rightSeams } from './right-half'
+import { inRightHalf, isRight } from './roles'
 import { compareSeams, matesTravelAlike, withNotches } from './seams'
 import type { Alteration, Draft, DraftPiece, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from './types'
 
@@ -154,6 +156,38 @@ function applyOne(now: Altered, alteration: Alteration): Step {
   }
 }
 
+/** An operation on the whole girth or length as the right half has it: on the same roles there. */
+const onRight = (alteration: Alteration): Alteration =>
+  alteration.kind === 'girth'
+    ? { ...alteration, seams: alteration.seams.map((seam) => ({ ...seam, piece: inRightHalf(seam.piece) })) }
+    : alteration
+
+/** Both halves, the right one where it differs. */
+interface AlteredHalves {
+  readonly left: Altered
+  readonly right: Altered | null
+}
+
+/**
+ * One operation on both halves: a move on the half that has its point, all others on both or on neither, so that no half is let out,
+ * taken in or lengthened alone.
+ */
+function applyOnHalves(now: AlteredHalves, alteration: Alteration): AlteredHalves & { readonly effect: AlterationEffect } {
+  if (alteration.kind === 'move' && isRight(alteration.role.piece) && now.right !== null) {
+    const { effect: done, ...right } = applyOne(now.right, alteration)
+    return { ...now, right, effect: done }
+  }
+  const { effect: done, ...left } = applyOne(now.left, alteration)
+  if (now.right === null || alteration.kind === 'move' || done.state !== 'applied') return { ...now, left, effect: done }
+  const { effect: other, ...right } = applyOne(now.right, onRight(alteration))
+  if (other.state !== 'applied') return { ...now, effect: { ...other, id: alteration.id } }
+  return { left, right, effect: { ...done, moved: [...done.moved, ...other.moved] } }
+}
+
+/** Altered pieces with everything on them read again. */
+const readAgain = (before: readonly DraftPiece[], { pieces, heights }: Altered): readonly DraftPiece[] =>
+  withNotches(pieces.map((piece, index) => (piece === before[index] ? piece : readPiece(piece, heights))))
+
 /**
  * A draft with named operations on its roles, in order. One whose role the draft no longer has is parked, never moved to a neighbour; one
  * that would make an outline cross itself is refused and says which piece. Seams, levels, notches, cutting lines, the armhole and what is
@@ -161,26 +195,31 @@ function applyOne(now: Altered, alteration: Alteration): Step {
  */
 export function applyAlterations(draft: Draft, alterations: readonly Alteration[]): AlteredDraft {
   const before = levelHeightsOf(draft)
-  let now: Altered = { pieces: draft.pieces, heights: before }
+  let now: AlteredHalves = {
+    left: { pieces: draft.pieces, heights: before },
+    right: draft.right === null ? null : { pieces: draft.right, heights: before },
+  }
   const effects: AlterationEffect[] = []
   for (const alteration of alterations) {
-    const { effect: done, ...next } = applyOne(now, alteration)
+    const { effect: done, ...next } = applyOnHalves(now, alteration)
     now = next
     effects.push(done)
   }
   const parked = alterations.filter((_, index) => effects[index]?.state === 'parked')
-  const { pieces, heights } = now
-  if (pieces === draft.pieces) return { draft, parked, effects }
-  const read = withNotches(pieces.map((piece, index) => (piece === draft.pieces[index] ? piece : readPiece(piece, heights))))
+  const { left, right } = now
+  if (left.pieces === draft.pieces && (right?.pieces ?? null) === draft.right) return { draft, parked, effects }
+  const read = readAgain(draft.pieces, left)
+  const readRight = right === null || draft.right === null ? null : readAgain(draft.right, right)
   const stays = draft.findings.filter(({ code }) => code !== 'armhole-aim-off' && code !== 'piece-narrow')
   return {
     draft: {
       ...draft,
       pieces: read,
-      seams: compareSeams(read),
-      findings: [...stays, ...readFindings(read, draft.armhole.aim)],
+      right: readRight,
+      seams: [...compareSeams(read), ...(readRight === null ? [] : rightSeams(compareSeams(readRight)))],
+      findings: [...stays, ...readFindings(read, draft.armhole.aim), ...narrowFindings(readRight ?? [])],
       armhole: { length: mm(armholeLength(read)), aim: draft.armhole.aim },
-      frame: heights === before ? draft.frame : withLevelHeights(draft.frame, heights),
+      frame: left.heights === before ? draft.frame : withLevelHeights(draft.frame, left.heights),
     },
     parked,
     effects,

@@ -12,6 +12,7 @@ import { outlineIsSound, readPiece } from './piece'
 import type { LevelHeight, PieceSketch } from './piece'
 import { drawnHalves, sketchPieces } from './pieces'
 import { degrees, millimetres } from './say'
+import { foldProblem, rightProblem, withRightHalf } from './right-half'
 import { halfOf, wholeEdge } from './roles'
 import { compareSeams, withNotches } from './seams'
 import { checkStyle } from './style'
@@ -244,6 +245,12 @@ export function readFindings(pieces: readonly DraftPiece[], aim: number): readon
       message: `The armhole is ${millimetres(Math.abs(off))} ${off > 0 ? 'longer' : 'shorter'} than its aim; ${off > 0 ? 'raise' : 'lower'} the underarm or measure the armscye again.`,
     })
   }
+  return [...findings, ...narrowFindings(pieces)]
+}
+
+/** Pieces that are very narrow at a level. */
+export function narrowFindings(pieces: readonly DraftPiece[]): readonly DraftFinding[] {
+  const findings: DraftFinding[] = []
   for (const piece of pieces) {
     const narrowest = piece.levels.reduce(
       (least, level) => (level.width < least.width ? level : least),
@@ -295,12 +302,8 @@ function crossedProblem(input: DraftInput, { id, name }: PieceSketch): Problem {
   }
 }
 
-/**
- * The bodice of one half of the body: its pieces with notches, grain, levels and cutting line, its seams compared, and
- * what had to be decided or held. Widths on the pieces are those of the rings, front and back together, to .5 mm at every
- * level that crosses all pieces. It is a draft: it says nothing of the fit.
- */
-export function draftBodice(input: DraftInput): Result<Draft> {
+/** The bodice with one style for both halves. */
+function draftHalf(input: DraftInput): Result<Draft> {
   const { body, style } = input
   const sketched = sketchBodice(input)
   if (!sketched.ok) {
@@ -317,6 +320,7 @@ export function draftBodice(input: DraftInput): Result<Draft> {
   const moved = wedgesOf(frame, style).sideMoved('waist')
   return succeed({
     pieces,
+    right: null,
     seams: compareSeams(pieces),
     findings: [
       ...frame.findings.map((finding) => placedFinding(finding, pieces)),
@@ -339,4 +343,21 @@ export function draftBodice(input: DraftInput): Result<Draft> {
     armhole: { length: mm(armholeLength(pieces)), aim: mm(aim) },
     frame: frameRecord(frame),
   })
+}
+
+/**
+ * The bodice of one half of the body: its pieces with notches, grain, levels and cutting line, its seams compared, and
+ * what had to be decided or held. Widths on the pieces are those of the rings, front and back together, to .5 mm at every
+ * level that crosses all pieces. A right half that differs is drafted from the same widths. It is a draft: it says nothing of the fit.
+ */
+export function draftBodice(input: DraftInput): Result<Draft> {
+  const { style } = input
+  if (style.right === null) return draftHalf(input)
+  const fold = (['front', 'back'] as const).find((half) => (half === 'front' ? style.centreFront : style.centreBack) === 'fold')
+  if (fold !== undefined) return fail(foldProblem(fold))
+  const left = draftHalf({ ...input, style: { ...style, right: null } })
+  if (!left.ok) return left
+  const right = draftHalf({ ...input, style: { ...style, ...style.right, right: null } })
+  if (!right.ok) return fail(rightProblem(right.problem))
+  return succeed(withRightHalf(left.value, right.value))
 }

@@ -1,4 +1,4 @@
-import type { BlockId, EdgeId, LineId, PieceId, SeamLetter } from './types'
+import type { BlockId, Draft, DraftPiece, EdgeId, HalfPieceId, LineId, PieceId, SeamLetter } from './types'
 
 /** From the centre front round to the centre back. */
 export const BLOCKS: readonly BlockId[] = ['front-centre', 'side-front', 'side-back', 'back-centre']
@@ -13,23 +13,45 @@ const BLOCK_NAMES: Readonly<Record<BlockId, string>> = {
 /** The letter of a further seam's edge or of the piece named after it. */
 const letterOf = (id: string): SeamLetter | null => (/-[a-d]$/.test(id) ? (id.at(-1) as SeamLetter) : null)
 
+const RIGHT = 'right-'
+
+/** Whether a piece is one of a right half that differs. */
+export const isRight = (piece: PieceId): boolean => piece.startsWith(RIGHT)
+
+/** A piece's role in its half, whichever that is. */
+export const roleInHalf = (piece: PieceId): HalfPieceId => (isRight(piece) ? piece.slice(RIGHT.length) : piece) as HalfPieceId
+
+/** The same role in the right half. */
+export const inRightHalf = (piece: PieceId): PieceId => `right-${roleInHalf(piece)}`
+
 /** The part of the half in which a piece lies; a half of one panel counts to its centre. */
 export function blockOf(piece: PieceId): BlockId {
-  if (piece === 'front') return 'front-centre'
-  if (piece === 'back') return 'back-centre'
-  return (letterOf(piece) === null ? piece : piece.slice(0, -2)) as BlockId
+  const own = roleInHalf(piece)
+  if (own === 'front') return 'front-centre'
+  if (own === 'back') return 'back-centre'
+  return (letterOf(own) === null ? own : own.slice(0, -2)) as BlockId
 }
 
 /** The half in which a piece lies. */
 export const halfOf = (piece: PieceId): 'front' | 'back' => (blockOf(piece).includes('front') ? 'front' : 'back')
 
-/** A piece in the trade's words: `Side front`, `Side front A`, `Front`. */
+/** A piece in the trade's words: `Side front`, `Side front A`, `Front`, `Right side front`. */
 export function pieceWords(piece: PieceId): string {
+  if (isRight(piece)) return `Right ${lowerFirst(pieceWords(roleInHalf(piece)))}`
   if (piece === 'front' || piece === 'back') return piece === 'front' ? 'Front' : 'Back'
   const letter = letterOf(piece)
   const name = BLOCK_NAMES[blockOf(piece)]
   return letter === null ? name : `${name} ${letter.toUpperCase()}`
 }
+
+/** Words within a sentence. */
+export const lowerFirst = (words: string): string => words.replace(/^./, (first) => first.toLowerCase())
+
+/** Every piece that is cut: of the drawn half, and of a right half that differs. Drafts kept before there was one have none. */
+export const allPieces = ({ pieces, right }: Pick<Draft, 'pieces'> & Partial<Pick<Draft, 'right'>>): readonly DraftPiece[] => [
+  ...pieces,
+  ...(right ?? []),
+]
 
 /** A further seam's edge. */
 export const lineOf = (letter: SeamLetter): LineId => `seam-${letter}`

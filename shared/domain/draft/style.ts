@@ -25,6 +25,7 @@ export function baseStyle(): BodiceStyle {
   return {
     centreFront: 'fold',
     centreBack: 'fold',
+    right: null,
     panels: { front: PRINCESS_PANELS, back: PRINCESS_PANELS },
     hem: { level: 'hip', below: mm(0) },
     hemShape: { form: 'straight', front: mm(0), back: mm(0), side: mm(0), curve: 0.4 },

@@ -3,6 +3,7 @@ import { pointScale, pointSubtract, pointTurn, vectorCross, vectorDot } from '..
 import type { Point } from '../geometry/types'
 import { mm, type Mm } from '../units/brand'
 import { applyAlterations } from './alterations'
+import { allPieces } from './roles'
 import type { Alteration, Draft, DraftPiece, MoveAlteration, PieceEdge, PointRole, SeamComparison, SeamRole } from './types'
 
 /** Mates may differ by this much and still be true, mm. Invariant of the draft. */
@@ -148,8 +149,9 @@ export function mendSeam(plain: Draft, alterations: readonly Alteration[], seam:
 
 function mendByEnd(plain: Draft, alterations: readonly Alteration[], seam: SeamComparison): Mend | null {
   const altered = applyAlterations(plain, alterations).draft
-  const edge = edgeAt(altered.pieces, seam.b)
-  const piece = altered.pieces.find(({ id }) => id === seam.b.piece)
+  const pieces = allPieces(altered)
+  const edge = edgeAt(pieces, seam.b)
+  const piece = pieces.find(({ id }) => id === seam.b.piece)
   if (!edge || !piece) return null
   const end = freeEnd(edge)
   const node = (end === 'end' ? edge.nodes.at(-1) : edge.nodes[0])!.name

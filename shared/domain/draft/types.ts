@@ -12,7 +12,10 @@ export type BlockId = 'front-centre' | 'side-front' | 'side-back' | 'back-centre
  * A piece by its role. A half of one panel is `front` or `back`. A further seam beside the centre has its letter on the
  * piece away from the centre, one beside the side seam on the piece towards it: the pieces at centre and side keep theirs.
  */
-export type PieceId = BlockId | 'front' | 'back' | `${BlockId}-${SeamLetter}`
+export type HalfPieceId = BlockId | 'front' | 'back' | `${BlockId}-${SeamLetter}`
+
+/** A piece of the drawn half, or of a right half that differs from it. */
+export type PieceId = HalfPieceId | `right-${HalfPieceId}`
 
 /** Seams from hem to top that part the pieces of a half. */
 export type LineId = 'princess' | `seam-${SeamLetter}`
@@ -101,10 +104,15 @@ export interface TopEdge {
 
 export type NecklineForm = 'round' | 'square' | 'v'
 
+/** What may be otherwise in the right half: its division, its seams' ends, its neckline's form and its strap. The centres are shared. */
+export type RightHalf = Pick<BodiceStyle, 'panels' | 'princessAt' | 'princessEnd' | 'backPrincessAt' | 'neckline' | 'necklineWidth'>
+
 /** What the drafter chooses about the bodice, apart from the body and the ease. */
 export interface BodiceStyle {
   readonly centreFront: CentreKind
   readonly centreBack: CentreKind
+  /** Null: the right half mirrors the left. */
+  readonly right: RightHalf | null
   readonly panels: { readonly front: HalfPanels; readonly back: HalfPanels }
   /** Level at which the bodice ends, and how far below it (negative: above). */
   readonly hem: { readonly level: 'underbust' | 'waist' | 'high-hip' | 'hip'; readonly below: Mm }
@@ -246,7 +254,10 @@ export interface DraftFinding {
 }
 
 export interface Draft {
+  /** The pieces of the half that is drawn: of both halves, or of the left one where the right one differs. */
   readonly pieces: readonly DraftPiece[]
+  /** The pieces of a right half that differs, drawn in the same frame; on the cloth they lie mirrored. */
+  readonly right: readonly DraftPiece[] | null
   readonly seams: readonly SeamComparison[]
   readonly findings: readonly DraftFinding[]
   /** Degrees. */

@@ -1,5 +1,6 @@
 import { cautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
+import { allPieces } from '../draft/roles'
 import type { AlterationEffect } from '../draft/alterations'
 import { bentFolds, CORNER_WITHIN, edgeCorners, TRUE_WITHIN } from '../draft/truing'
 import type { Alteration, Draft, DraftFinding } from '../draft/types'
@@ -50,7 +51,7 @@ export function draftCautions(facts: {
       ),
     )
   }
-  for (const corner of edgeCorners(draft.pieces, draft.seams)) {
+  for (const corner of edgeCorners(allPieces(draft), draft.seams)) {
     if (Math.abs(corner.angle) <= CORNER_WITHIN) continue
     found.push(
       cautions.edgeCorner(
@@ -64,7 +65,7 @@ export function draftCautions(facts: {
       ),
     )
   }
-  for (const { role, off } of bentFolds(draft.pieces)) {
+  for (const { role, off } of bentFolds(allPieces(draft))) {
     found.push(
       cautions.foldBent(
         { kind: 'piece', piece: role.piece, edge: role.edge, node: role.node },

@@ -40,8 +40,7 @@ export const NECK_EDGE = 'neck-edge'
 export function neckEdge(solution: Pick<GarmentSolution, 'draft' | 'plans' | 'ringInputs'>): EdgeRing | null {
   const bust = solution.ringInputs.find((one) => one.level === 'bust')
   const length = (half: 'front' | 'back') =>
-    2 *
-    solution.draft.pieces
+    [...solution.draft.pieces, ...(solution.draft.right ?? solution.draft.pieces)]
       .filter((piece) => piece.zone === half)
       .flatMap((piece) => piece.edges.filter((edge) => wholeEdge(edge.id) === 'neckline'))
       .reduce((sum, edge) => sum + pathLength(edge.path), 0)

@@ -296,13 +296,14 @@ const sumOf = (widths: readonly Mm[]): number => widths.reduce((sum, width) => s
  */
 function widthsRead(draft: Draft, level: Level): readonly Mm[] | null {
   const onPieces = new Map<string, number>()
-  for (const piece of draft.pieces) {
+  // The right half lies once round the body beside the left one; where it mirrors it, the left one stands for both.
+  for (const piece of [...draft.pieces, ...(draft.right ?? draft.pieces)]) {
     const crossing = piece.levels.find((one) => one.level === level.body.id)
     if (!crossing) return null
     const part = blockOf(piece.id)
     onPieces.set(part, (onPieces.get(part) ?? 0) + crossing.width)
   }
-  const paper = level.parts.map((part) => 2 * part.pieces.reduce((sum, piece) => sum + (onPieces.get(piece) ?? 0), 0))
+  const paper = level.parts.map((part) => part.pieces.reduce((sum, piece) => sum + (onPieces.get(piece) ?? 0), 0))
   const half = (side: 'front' | 'back') => paper.reduce((sum, width, i) => (level.parts[i]!.half === side ? sum + width : sum), 0)
   const cloth = {
     front: 1 - level.geometry.rigidFront / half('front'),

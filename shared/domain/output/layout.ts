@@ -1,16 +1,17 @@
-import { BLOCKS, blockOf } from '../draft/roles'
+import { BLOCKS, blockOf, isRight } from '../draft/roles'
 import type { DraftPiece } from '../draft/types'
 import { insideAtHeight } from './crossings'
 import { boundsOfPoints, placePoint } from './placing'
 import type { Placement } from './types'
 
-/** Where a piece lies from the centre front round to the centre back; pieces of one part keep the order of the draft. */
-const wearingPlace = (piece: DraftPiece): number => BLOCKS.indexOf(blockOf(piece.id))
+/** Where a piece lies from the centre front round to the centre back; pieces of one part keep the order of the draft, a right half comes last. */
+const wearingPlace = (piece: DraftPiece): number => BLOCKS.indexOf(blockOf(piece.id)) + (isRight(piece.id) ? BLOCKS.length : 0)
 
 /** Height between the level lines on which two cutting lines are compared when pieces are pushed together, mm. */
 const ROW = 2
 
-const isMirrored = (piece: DraftPiece) => piece.zone === 'back'
+/** Back pieces are drawn with the centre on the other side; those of a right half that differs lie the other way round again. */
+export const isMirrored = (piece: Pick<DraftPiece, 'id' | 'zone'>): boolean => (piece.zone === 'back') !== isRight(piece.id)
 const upright = (piece: DraftPiece): Placement => ({ piece: piece.id, mirrored: isMirrored(piece), offset: { x: 0, y: 0 } })
 
 /**

@@ -13,6 +13,7 @@ const seam = (name: string, a: [PieceId, EdgeId, number], b: [PieceId, EdgeId, n
 export function drawnDraft(change: (piece: DraftPiece) => DraftPiece = (piece) => piece): Draft {
   return {
     pieces: printPieces().map(change),
+    right: null,
     seams: [
       seam('front princess', ['front-centre', 'princess', 524.2], ['side-front', 'princess', 525.4]),
       seam('side', ['side-front', 'side', 331.6], ['side-back', 'side', 331.4]),

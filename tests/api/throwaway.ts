@@ -46,7 +46,17 @@ export async function throwawayDatabase(now: Date): Promise<Throwaway> {
   const urls = databaseUrls()
   const name = `tf_test_${randomBytes(6).toString('hex')}`
   await run(urls.owner, `create database ${name} template template0 encoding 'UTF8'`)
-  const drop = () => run(urls.owner, `drop database if exists ${name} with (force)`)
+  /** The owner may not end sessions of the app role: the server's own are given a moment to close. */
+  const drop = async () => {
+    for (let tries = 0; ; tries++) {
+      try {
+        return await run(urls.owner, `drop database if exists ${name}`)
+      } catch (error) {
+        if (tries === 20) throw error
+        await new Promise((wait) => setTimeout(wait, 150))
+      }
+    }
+  }
   try {
     const owner = withDatabase(urls.owner, name)
     await migrateDatabase(owner)

@@ -59,5 +59,6 @@ test('a bodice is divided, pointed and closed as the drafter chooses, and what c
   await accessible(page)
   await page.getByRole('button', { name: 'Undo' }).click()
   await expect(page.getByLabel('Ends above with')).toHaveValue('shoulders')
+  await expect.poll(async () => (await copyOf(page, id)).solution).not.toBeNull()
   expect(before.document.style.panels.front.further).toEqual([])
 })

@@ -77,9 +77,10 @@ function pointsWithTrueEnds(path: Path): readonly Point[] {
   return [...points.slice(0, 1), ...start, ...points.slice(1, -1), ...end, ...points.slice(-1)]
 }
 
-/** The cutting line: each edge outwards by its own allowance, corners mitred, folds left. */
+/** The cutting line: each edge outwards by its own allowance, corners mitred, those of the hem right for turning, folds left. */
 export function cuttingLineOf(edges: readonly PieceEdge[]): readonly Point[] {
-  return outlineOffset(edges.map((edge) => ({ points: pointsWithTrueEnds(edge.path), allowance: edge.allowance }))) ?? []
+  const runs = edges.map((edge) => ({ points: pointsWithTrueEnds(edge.path), allowance: edge.allowance, turned: edge.id === 'hem' }))
+  return outlineOffset(runs) ?? []
 }
 
 function middleAt(edges: readonly PieceEdge[], y: number): { readonly x: number; readonly width: number } | null {

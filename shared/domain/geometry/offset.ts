@@ -10,6 +10,8 @@ export interface OffsetRun {
   readonly points: readonly Point[]
   /** Distance outwards, mm; 0 keeps the line where it is. */
   readonly allowance: number
+  /** Its allowance is turned under along it: the lines beside it are mirrored across it, so that they lie on each other once it is turned. */
+  readonly turned?: boolean
 }
 
 /** Decimals of a millimetre that the clipping keeps. */
@@ -22,16 +24,17 @@ interface Side {
   readonly along: Point
   readonly out: Point
   readonly allowance: number
+  readonly turned: boolean
 }
 
-function sidesOf({ points, allowance }: OffsetRun): readonly Side[] {
+function sidesOf({ points, allowance, turned = false }: OffsetRun): readonly Side[] {
   const sides: Side[] = []
   for (let index = 1; index < points.length; index += 1) {
     const from = points[index - 1] as Point
     const to = points[index] as Point
     if (pointDistance(from, to) <= POINT_TOLERANCE) continue
     const along = vectorUnit(pointSubtract(to, from))
-    sides.push({ from, to, along, out: vectorRight(along), allowance })
+    sides.push({ from, to, along, out: vectorRight(along), allowance, turned })
   }
   return sides
 }
@@ -54,6 +57,31 @@ function corner(before: Side, after: Side, mitreLimit: number): readonly Point[]
   }
   const short = -meet.alongU <= pointDistance(before.from, before.to) && meet.alongV <= pointDistance(after.from, after.to)
   return short && straightOn ? [mitre] : [first, at, second]
+}
+
+/**
+ * The corner where a turned edge meets another: the other's cutting line up to the turned edge's own line, then mirrored across it out to
+ * the turned edge's cutting line. Null where a mitre has to do.
+ */
+function turnedCorner(before: Side, after: Side, reach: number): readonly Point[] | null {
+  if (before.turned === after.turned) return null
+  const [plain, hem] = before.turned ? [after, before] : [before, after]
+  if (!(hem.allowance > 0)) return null
+  const at = after.from
+  // Into the piece along the plain edge, and its mirror image across the hem, out of the piece.
+  const inwards = before.turned ? plain.along : { x: -plain.along.x, y: -plain.along.y }
+  const share = 2 * vectorDot(inwards, hem.along)
+  const outwards = { x: share * hem.along.x - inwards.x, y: share * hem.along.y - inwards.y }
+  const onPlain = pointAlong(at, plain.out, plain.allowance)
+  const onHem = pointAlong(at, hem.out, hem.allowance)
+  const first = linesMeet(onPlain, plain.along, at, hem.along)
+  if (first === null) return null
+  const turn = pointAlong(onPlain, plain.along, first.alongU)
+  const second = linesMeet(turn, outwards, onHem, hem.along)
+  if (second === null || second.alongU <= 0) return null
+  const end = pointAlong(turn, outwards, second.alongU)
+  if (pointDistance(at, turn) > reach || pointDistance(at, end) > reach) return null
+  return before.turned ? [end, turn] : [turn, end]
 }
 
 /**
@@ -106,7 +134,7 @@ export function outlineOffset(runs: readonly OffsetRun[], mitreLimit = MITRE_LIM
         return []
       }
     }
-    return corner(before, after, mitreLimit)
+    return (turn >= NEARLY_STRAIGHT ? turnedCorner(before, after, reach) : null) ?? corner(before, after, mitreLimit)
   })
   const raw = lines.flatMap((line, index) => [...line, ...(joints[index] as readonly Point[])])
   const loops = booleanOpD(ClipType.Union, [raw], null, FillRule.Positive, CLIPPING_PRECISION)

@@ -141,12 +141,15 @@ export function writeLabels(pen: Pen, view: BoardView, pieces: readonly Labelled
     operations.flatMap((operation) => (operation.kind === 'text' ? [{ operation, points, bounds }] : [])),
   )
   const inside = texts.every(({ operation, points }) => operation.role !== 'label' || layText(pen, view, operation, points).clear)
+  const written: Words[] = []
   for (const { operation, points, bounds } of texts) {
     const { px, width, left, y, clear } = layText(pen, view, operation, points)
     if (operation.role === 'label' && !inside) {
       const under = toScreen(view, { x: (bounds.left + bounds.right) / 2, y: bounds.bottom })
+      const place = freeRow(written, { left: under.x - width / 2, width, y: under.y + NAME_UNDER, height: px * 1.25 })
+      written.push(place)
       pen.fillStyle = palette.oakgall
-      pen.fillText(operation.text, under.x - width / 2, under.y + NAME_UNDER)
+      pen.fillText(operation.text, place.left, place.y)
     } else if (clear) {
       pen.fillStyle = ground
       pen.fillRect(left - 2, y - px * 0.95, width + 4, px * 1.25)
@@ -154,6 +157,27 @@ export function writeLabels(pen: Pen, view: BoardView, pieces: readonly Labelled
       pen.fillText(operation.text, left, y)
     }
   }
+}
+
+/** Words as they stand on the screen, px; `y` is their base line. */
+interface Words {
+  readonly left: number
+  readonly width: number
+  readonly y: number
+  readonly height: number
+}
+
+const BETWEEN_WORDS = 6
+
+/** The same words one line lower for every name already written that they would run into. */
+function freeRow(written: readonly Words[], words: Words): Words {
+  const meets = (one: Words, y: number) =>
+    Math.abs(one.y - y) < words.height &&
+    one.left < words.left + words.width + BETWEEN_WORDS &&
+    words.left < one.left + one.width + BETWEEN_WORDS
+  let { y } = words
+  while (written.some((one) => meets(one, y))) y += words.height
+  return { ...words, y }
 }
 
 function isClear(view: BoardView, outline: readonly Point[], height: number, left: number, right: number): boolean {

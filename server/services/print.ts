@@ -48,7 +48,7 @@ async function keptForPrint(room: Room, id: string, unit: LengthUnit) {
   const kept = fromJson<VersionKept>(found(await findVersionKept(room.db, room.workroom, id)).kept)
   const marks = [row.clearedAt ? 'cleared for cutting' : 'not cleared for cutting', ...(row.erasedAt ? ['body erased'] : [])]
   const version = `version ${row.number}, ${marks.join(', ')}`
-  const { bones } = laidBones(kept.document, kept.draft.pieces)
+  const { bones } = laidBones(kept.document, allPieces(kept.draft))
   return {
     kept,
     facts: { ...factsOf(kept, row.garmentCode, version, room.today, unit), bones },

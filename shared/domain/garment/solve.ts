@@ -6,7 +6,7 @@ import type { LevelChoice } from '../document/types'
 import { DEFAULT_HOLD, freshLevel } from '../document/fresh'
 import { applyAlterations } from '../draft/alterations'
 import { draftBodice } from '../draft/bodice'
-import { blockOf } from '../draft/roles'
+import { allPieces, blockOf } from '../draft/roles'
 import { checkStyle } from '../draft/style'
 import type { Draft, LevelWidths } from '../draft/types'
 import { cappedHold } from '../textile/hold'
@@ -87,7 +87,7 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
     const drafted = draftFrom(input, body.value, levels, new Map(levels.map((level) => [level.body.id, clothWidths(level.solved)])))
     if (!drafted.ok) return atStep('draft', drafted.problem)
     const split = dividesHalves(plans) ? bustSplit(drafted.value) : EVEN_SPLIT
-    const again = solveLevels(input, body.value, plansAt, split, rigidOf(document, drafted.value.pieces, idsOf(levels)))
+    const again = solveLevels(input, body.value, plansAt, split, rigidOf(document, allPieces(drafted.value), idsOf(levels)))
     if (!again.ok) return again
     levels = again.value
   }
@@ -97,7 +97,7 @@ export function solveGarment(input: GarmentInput): Result<GarmentSolution, Garme
   // Channels lean as the pieces do: once the pieces stand, the rigid widths are read again, until they stay.
   for (let round = 1; structured && round <= MOST_STRUCTURE_ROUNDS; round++) {
     const before = levels.flatMap(({ stiff }) => stiff ?? [])
-    const read = rigidOf(document, settled.value.draft.pieces, idsOf(levels))
+    const read = rigidOf(document, allPieces(settled.value.draft), idsOf(levels))
     const now = round === 1 ? read : rigidLargest(before, read)
     if (rigidMoved(before, now) <= RIGID_TOLERANCE) break
     const again = solveLevels(input, body.value, plansAt, dividesHalves(plans) ? bustSplit(settled.value.draft) : EVEN_SPLIT, now)

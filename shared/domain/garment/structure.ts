@@ -1,3 +1,4 @@
+import { allPieces } from '../draft/roles'
 import type { LevelId } from '../body/types'
 import { cautions } from '../cautions/registry'
 import type { Caution } from '../cautions/types'
@@ -116,7 +117,7 @@ export function structureCautions(facts: {
   readonly plans: readonly LayerPlan[]
 }): readonly Caution[] {
   const { document, draft, rings, plans } = facts
-  const { bones, faults } = laidBones(document, draft.pieces)
+  const { bones, faults } = laidBones(document, allPieces(draft))
   const found: Caution[] = faults.map((fault) => cautions.boneNotLaid({ kind: 'garment' }, fault))
   const makers = {
     'bone-near-armhole': cautions.boneNearArmhole,
@@ -124,7 +125,7 @@ export function structureCautions(facts: {
     'bones-close': cautions.bonesClose,
     'bone-bends-tight': cautions.boneBendsTight,
   } as const
-  for (const { code, piece, edge, ...rest } of boneFindings(bones, draft.pieces))
+  for (const { code, piece, edge, ...rest } of boneFindings(bones, allPieces(draft)))
     found.push(makers[code]({ kind: 'piece', piece, ...(edge ? { edge } : {}) }, rest))
   for (const bone of bones) {
     const cover = coverOf(bone, plans)

@@ -205,6 +205,8 @@ export function layBone(bone: Bone, pieces: readonly DraftPiece[], stock: readon
   const channel = channelWidth(own)
   const mate = edge?.mate ?? null
   const atCentre = (place.kind === 'seam' && edge!.id === 'centre') || (place.kind === 'panel' && piece.onFold && place.at <= 0) || false
+  // A piece cut once by itself is one of a half that differs from the other.
+  const once = atCentre || (piece.quantity === 1 && !piece.onFold)
   const length = pathLength(path)
   return succeed({
     id: bone.id,
@@ -216,7 +218,7 @@ export function layBone(bone: Bone, pieces: readonly DraftPiece[], stock: readon
     channel: mm(length),
     channelWidth: channel,
     cut: mm(Math.max(0, length - 2 * TIP_CLEARANCE)),
-    count: atCentre ? 1 : 2,
+    count: once ? 1 : 2,
     inSideSeam: place.kind === 'seam' && edge!.id === 'side' && mate !== null,
     crossings: crossingsOf(piece, path, channel),
     radius: tightestRadius(path),

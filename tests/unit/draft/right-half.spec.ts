@@ -8,6 +8,7 @@ import type { Alteration, BodiceStyle, DraftInput, RightHalf } from '../../../sh
 import { solveGarment } from '../../../shared/domain/garment/solve'
 import { layoutPieces } from '../../../shared/domain/output/layout'
 import { DEFAULT_PRINT, printSet } from '../../../shared/domain/output/print-set'
+import type { Bone } from '../../../shared/domain/structure/types'
 import { mm } from '../../../shared/domain/units/brand'
 import { bodiceStyle, draft as draftSchema } from '../../../shared/schemas/draft'
 import { bodyOf, draftOf, widthsOf } from '../../fixtures/draft-inputs'
@@ -128,5 +129,33 @@ describe('a right half that differs', () => {
       const asked = whole.document.levels.find(({ level }) => level === ring.level)!.hold
       expect(Math.abs(ring.pressure / asked - 1)).toBeLessThan(0.02)
     }
+  })
+
+  it('carries bones of its own, each once: those of the left half are not doubled', () => {
+    const bone = (piece: 'side-front' | 'right-side-front'): Bone => ({
+      id: piece,
+      name: piece,
+      stock: 'spiral-steel-6',
+      place: { kind: 'panel', piece, at: 0.5 },
+      bottom: { kind: 'edge', clear: mm(13) },
+      top: { kind: 'level', level: 'underbust', above: mm(20) },
+      channelOn: null,
+      under: null,
+      on: true,
+    })
+    const rigidAt = (style: BodiceStyle, bones: readonly Bone[]) => {
+      const whole = inventedInput()
+      const structure = { bones, closures: { front: null, back: null } }
+      const solved = solveGarment({ ...whole, document: { ...whole.document, style, structure } })
+      if (!solved.ok) throw new Error(solved.problem.message)
+      return solved.value.ringInputs.find(({ level }) => level === 'waist')!.rigidFront
+    }
+    const style: BodiceStyle = { ...base, necklineFrontDepth: mm(60) }
+    const alike = rigidAt(style, [bone('side-front')])
+    const left = rigidAt({ ...style, right: RIGHT }, [bone('side-front')])
+    const both = rigidAt({ ...style, right: RIGHT }, [bone('side-front'), bone('right-side-front')])
+    expect(alike).toBeGreaterThan(10)
+    expect(left).toBeCloseTo(alike / 2, 1)
+    expect(both).toBeCloseTo(alike, 0)
   })
 })

@@ -1,106 +1,20 @@
-import { pathEnd, pathEndTangent, pathLength, pathReverse } from '../geometry/path'
+import { pathEnd, pathEndTangent } from '../geometry/path'
 import { lineSegment } from '../geometry/segment'
 import { moveBy, turnAbout } from '../geometry/transform'
-import type { Transform } from '../geometry/transform'
-import type { Path, Point, Segment } from '../geometry/types'
-import { fairBustCorner } from './bust-angle'
-import type { BustAngle } from './bust-angle'
+import type { Point } from '../geometry/types'
 import { princessAbove, seamAbove, shoulderOf } from './edges'
-import type { Frame, HalfFrame } from './frame'
+import { drawnUpper, openingOf } from './opening'
+import { bustOf, turnedEdge } from './panel-rails'
+import type { PanelRails, UpperHalf, UpperInput } from './panel-rails'
 import { fillEvenly } from './panels'
-import type { SeamLine, Zone } from './panels'
-import { edgeAcross, heightLine } from './shapes'
-import { armholeStretch, cutStretch, necklineStretch, nearestOn, turnArmholeEnd, turnStretch } from './stretches'
+import type { SeamLine } from './panels'
+import { armholeStretch, cutStretch, nearestOn, turnArmholeEnd, turnStretch } from './stretches'
 import type { Stretch } from './stretches'
 import type { BodiceStyle, EdgeNode } from './types'
-import { railAboveBust, railOf, railReverse, railThen } from './wedges'
+import { railOf, railReverse, railThen } from './wedges'
 import type { Rail } from './wedges'
 
 const STAYS = moveBy(0, 0)
-
-/** The two edges of a panel from the hem up. */
-export interface PanelRails {
-  readonly left: Rail
-  readonly right: Rail
-}
-
-/** Panels with their edges up to the end and what bounds each of them above, from the centre outwards. */
-export interface UpperHalf {
-  readonly rails: readonly PanelRails[]
-  readonly uppers: readonly (readonly Stretch[])[]
-}
-
-/** What the upper part of a half is drawn from. */
-export interface UpperInput {
-  readonly frame: Frame
-  readonly style: BodiceStyle
-  readonly zone: Zone
-  readonly lines: readonly SeamLine[]
-  /** Edges of the panels from the hem up to the bust. */
-  readonly below: readonly PanelRails[]
-  /** The edges above as drawn; not used under a top edge. */
-  readonly drawn: DrawnUpper | null
-}
-
-const bustOf = (rail: Rail): Point => (rail.nodes.at(-1) as EdgeNode).at
-
-/** Where the bust angle opens: at a share of an edge; the princess seam's end, or a dart's. */
-export interface Opening {
-  readonly edge: 'neckline' | 'shoulder' | 'armhole'
-  readonly share: number
-}
-
-/** Edges of a half above the bust as drawn, unturned, the armhole down to the underarm turned back. */
-export interface DrawnUpper {
-  readonly neckline: Stretch
-  readonly shoulder: Stretch
-  readonly armhole: Stretch
-}
-
-/** Draws the edges above the bust of a half in the frame in which its armhole is drawn. */
-export function drawnUpper(half: HalfFrame, zone: Zone, style: BodiceStyle): DrawnUpper {
-  const shoulder = shoulderOf(half, style)
-  const depth = zone === 'front' ? style.necklineFrontDepth : style.necklineBackDepth
-  const centre = { x: half.centreX, y: half.neckCentre.y - depth }
-  return {
-    neckline: necklineStretch(shoulder, centre, style.neckline[zone]),
-    shoulder: {
-      edge: 'shoulder',
-      id: 'shoulder',
-      part: 'whole',
-      rail: railOf(['neck', 'tip'], [lineSegment(shoulder.neck, shoulder.end)]),
-    },
-    armhole: armholeStretch({ ...half, underarm: half.underarmDrawn }, shoulder, STAYS),
-  }
-}
-
-/** A dart keeps this far from the ends of the edge it opens into, as a share of that edge. */
-const DART_FROM_END = 0.12
-
-/** Where a dart from the bust point opens: in the nearest of neckline and armhole. */
-export function dartOpening(frame: Frame, drawn: DrawnUpper): Opening {
-  const clear = (share: number) => Math.min(1 - DART_FROM_END, Math.max(DART_FROM_END, share))
-  // Of a square neckline only the level part: a dart does not open in its corner.
-  const cornered = drawn.neckline.rail.nodes.some(({ name }) => name === 'corner')
-  const level = cornered
-    ? { ...drawn.neckline, rail: { ...drawn.neckline.rail, path: drawn.neckline.rail.path.slice(0, 1) } }
-    : drawn.neckline
-  const part = cornered ? pathLength(level.rail.path) / pathLength(drawn.neckline.rail.path) : 1
-  const [neckline, armhole] = [nearestOn(level, frame.bust.bustPoint), nearestOn(drawn.armhole, frame.bust.bustPoint)]
-  return neckline.distance < armhole.distance
-    ? { edge: 'neckline', share: clear(neckline.share) * part }
-    : { edge: 'armhole', share: clear(armhole.share) }
-}
-
-/** Where the half's upper edges part at the bust point: at the princess seam, at a dart, or nowhere. */
-export function openingOf(input: Pick<UpperInput, 'frame' | 'style' | 'zone'>, drawn: DrawnUpper): Opening | null {
-  const { frame, style, zone } = input
-  if (style.panels[zone].princess) {
-    const { edge, at } = style.princessEnd[zone]
-    return { edge, share: edge === 'shoulder' ? style.princessAt : at }
-  }
-  return zone === 'front' && frame.bust.angle > 0 ? dartOpening(frame, drawn) : null
-}
 
 /** Whether the shoulder is parted: where a princess seam of either half meets it. */
 const shoulderParted = ({ panels, princessEnd }: BodiceStyle): boolean =>
@@ -113,24 +27,6 @@ function shoulderParts(shoulder: Stretch, style: BodiceStyle): readonly Stretch[
     { ...inner, part: 'inner' },
     { ...outer, part: 'outer' },
   ]
-}
-
-/** The side panel's princess edge from the hem up: faired at the bust, turned above it. `above` is given unturned. */
-function turnedEdge(below: Rail, above: Rail, bust: BustAngle): { readonly rail: Rail; readonly turned: Transform } {
-  if (bust.angle === 0)
-    return { rail: { path: [...below.path, ...above.path], nodes: [...below.nodes, ...above.nodes.slice(1)] }, turned: STAYS }
-  const edge = fairBustCorner(bust, above.path, pathReverse(below.path))
-  const downwards = pathReverse(edge.down)
-  const names = [...below.nodes.slice(0, -1), { name: 'fairing-below', at: (downwards.at(-1) as Segment).from, level: null }]
-  const rail: Rail = { path: downwards, nodes: [...names, below.nodes.at(-1) as EdgeNode] }
-  const upNodes = [{ name: 'fairing-above', level: null }, ...above.nodes.slice(1).map(({ name, level }) => ({ name, level }))]
-  return {
-    turned: edge.turned,
-    rail: railThen(
-      rail,
-      edge.up.map((segment, index) => ({ segment, ...(upNodes[index] as Pick<EdgeNode, 'name' | 'level'>) })),
-    ),
-  }
 }
 
 /** Cuts a stretch at several shares of its length, rising; parts from the centre outwards. */
@@ -278,72 +174,4 @@ function named(stretches: readonly Stretch[]): readonly Stretch[] {
     const by = stretch.edge === 'shoulder' ? 'princess' : parted
     return { ...stretch, id: `${stretch.edge}-${by}` as Stretch['id'] }
   })
-}
-
-/** A half under a top edge: its seams go on through the level above the bust, the front turned beyond the bust point. */
-export function upperStrapless(input: UpperInput, wedgeAbove: (place: 'centre' | 'side' | SeamLine['id']) => number): UpperHalf {
-  const { frame, style, zone, lines, below } = input
-  const top = style.top as NonNullable<BodiceStyle['top']>
-  const half = frame[zone]
-  const level = frame.above as NonNullable<Frame['above']>
-  const bustHeight = frame.heightOf('bust')
-  const turns = zone === 'front' && frame.bust.angle > 0
-  const dart = turns && lines.length === 0
-
-  const xs = [wedgeAbove('centre'), ...lines.map(({ x }) => x), half.underarm.x - wedgeAbove('side')]
-  const halfWedges = [0, ...lines.map(({ id }) => wedgeAbove(id)), 0]
-  const panels = lines.length + 1
-  const widths = Array.from(
-    { length: panels },
-    (_, i) => (xs[i + 1] as number) - (halfWedges[i + 1] as number) - (xs[i] as number) - (halfWedges[i] as number),
-  )
-  const whole = widths.reduce((sum, width) => sum + width, 0)
-  const stations = [0]
-  widths.forEach((width) => stations.push((stations.at(-1) as number) + width / whole))
-  const line = heightLine(top.form, zone === 'front' ? top.front : top.back, top.side, top.curve)
-  const heightAt = (share: number) => bustHeight + line.at(share)
-  const slopeAt = (share: number) => line.slope(share) / whole
-
-  const up = (rail: Rail, x: number, height: number): Rail => {
-    const from = bustOf(rail)
-    const above = railAboveBust(from, { x, y: level.y }, height)
-    return { path: above.path, nodes: [rail.nodes.at(-1) as EdgeNode, ...above.nodes] }
-  }
-  const joined = (rail: Rail, above: Rail): Rail => ({
-    path: [...rail.path, ...above.path],
-    nodes: [...rail.nodes, ...above.nodes.slice(1)],
-  })
-  const rails = below.map(({ left, right }, index): PanelRails => {
-    const leftUp = up(left, (xs[index] as number) + (halfWedges[index] as number), heightAt(stations[index] as number))
-    const rightUp = up(right, (xs[index + 1] as number) - (halfWedges[index + 1] as number), heightAt(stations[index + 1] as number))
-    const turn = turns && index > 0 && lines[index - 1]?.id === 'princess'
-    return { left: turn ? turnedEdge(left, leftUp, frame.bust).rail : joined(left, leftUp), right: joined(right, rightUp) }
-  })
-  const across = (left: Path, right: Path, from: number, to: number) =>
-    edgeAcross(pathReverse(left), pathReverse(right), [slopeAt(from), slopeAt(to)], false)
-  const names = ['centre', ...lines.map(({ id }) => id), 'side']
-  const uppers = rails.map(({ left, right }, index): readonly Stretch[] => {
-    const [from, to] = [stations[index] as number, stations[index + 1] as number]
-    if (!dart) {
-      return [
-        {
-          edge: 'top',
-          id: 'top',
-          rail: railOf([names[index] as string, names[index + 1] as string], [across(left.path, right.path, from, to)]),
-        },
-      ]
-    }
-    const bust = frame.bust.bustPoint
-    const share = (bust.x - (xs[0] as number)) / whole
-    const leg = lineSegment(bust, { x: bust.x, y: heightAt(share) })
-    const turned = turnAbout(bust, -frame.bust.angle)
-    const beyond = turnStretch({ edge: 'dart', id: 'dart-beyond', rail: railOf(['point', 'mouth'], [leg]) }, turned)
-    return [
-      { edge: 'top', id: 'top', rail: railOf(['centre', 'dart'], [across(left.path, [leg], from, share)]) },
-      { edge: 'dart', id: 'dart', rail: railReverse(railOf(['point', 'mouth'], [leg])) },
-      beyond,
-      { edge: 'top', id: 'top-dart', rail: railOf(['dart', 'side'], [across(beyond.rail.path, right.path, share, to)]) },
-    ]
-  })
-  return { rails, uppers }
 }

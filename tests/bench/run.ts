@@ -18,6 +18,9 @@ import { layOutBones } from '../../shared/domain/structure/lay-out'
 import { DEFAULT_STOCK } from '../../shared/domain/structure/stock'
 import type { LevelWidths } from '../../shared/domain/draft/types'
 import { mm, pascal } from '../../shared/domain/units/brand'
+import { completeBody } from '../../shared/domain/body/complete'
+import { generatedBody, seeded } from '../fixtures/bodies'
+import { measuredOf, widthsOf } from '../fixtures/draft-inputs'
 import { inventedInput } from '../fixtures/garment-inputs'
 import { medianOfFresh } from './wide-rings'
 
@@ -67,6 +70,23 @@ const sewnTime = medianOfFresh(8, 12)
 const runTime = medianOfFresh(200)
 const wholeTime = median(() => solveGarment(input))
 const bonedTime = median(() => solveGarment(boned))
+
+/** 2,000 bodies solved by reductions, drafted, trued and offset; the last tenth over the first says whether earlier drafts cost anything. */
+const random = seeded(20_261_201)
+const many = Array.from({ length: 2000 }, () => completeBody(measuredOf(generatedBody(random).values))).flatMap((found) =>
+  found.ok ? [found.value] : [],
+)
+const draftMany = (bodies: typeof many): number => {
+  const began = performance.now()
+  for (const own of bodies)
+    draftBodice({ body: own, style: input.document.style, widths: widthsOf(own, { front: 0.1, back: 0.1, gapBack: 50 }) })
+  return performance.now() - began
+}
+draftMany(many.slice(0, 200))
+const tenth = Math.floor(many.length / 10)
+const firstTenth = draftMany(many.slice(0, tenth))
+const between = draftMany(many.slice(tenth, -tenth))
+const lastTenth = draftMany(many.slice(-tenth))
 
 /** A machine's file of 100,000 rows, five cycles. Invented. */
 const lines = ['Time (s),Extension (mm),Load (N)']
@@ -125,6 +145,12 @@ for (const { what, time, most } of rows) {
   failed ||= over
   console.log(`${time.toFixed(3)} ms  ×${ratio.toFixed(1)}${most < Infinity ? ` (guard ×${most})` : ''}  ${what}${over ? '  OVER' : ''}`)
 }
+const drift = lastTenth / firstTenth
+const drifts = drift > 2
+failed ||= drifts
+console.log(
+  `${((firstTenth + between + lastTenth) / 1000).toFixed(1)} s  ${many.length} bodies drafted, trued, offset (under 15 s); the last tenth ×${drift.toFixed(2)} of the first (guard ×2)${drifts ? '  OVER' : ''}`,
+)
 const fileRatio = fileTime / bareParse
 const fileOver = fileRatio > 4 || held > MOST_HELD
 failed ||= fileOver

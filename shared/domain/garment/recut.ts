@@ -87,8 +87,7 @@ function holdAt(ring: RingSolution, geometry: RingGeometry, cloth: number, setti
 function copiedWidths(geometry: RingGeometry, ring: RingSolution): readonly Mm[] | null {
   const onto = widthsOnto(geometry, ring)
   const more = { front: geometry.rigidFront - ring.rigidFront, back: geometry.rigidBack - ring.rigidBack }
-  const cloth = (half: 'front' | 'back') =>
-    onto.reduce((sum, width, i) => (geometry.segments[i]!.half === half ? sum + width : sum), 0)
+  const cloth = (half: 'front' | 'back') => onto.reduce((sum, width, i) => (geometry.segments[i]!.half === half ? sum + width : sum), 0)
   const left = { front: 1 - more.front / cloth('front'), back: 1 - more.back / cloth('back') }
   if (!(left.front > 0) || !(left.back > 0)) return null
   return onto.map((width, i) => mm(width * left[geometry.segments[i]!.half]))

@@ -7,7 +7,8 @@ import type { PrintSet } from '../../shared/domain/output/print-set'
 import type { Sheet } from '../../shared/domain/output/sheet'
 import type { PrintFont } from './fonts'
 import { drawOperation, POINTS } from './pdf-draw'
-import { placeForm, writeForm, type PdfForm } from './pdf-form'
+import { placeForm, type PdfForm } from './pdf-form'
+import { catalogue, writeLayers } from './pdf-layers'
 
 export interface PatternPdfInput {
   readonly set: PrintSet
@@ -18,13 +19,14 @@ export interface PatternPdfInput {
 }
 
 /**
- * A print set as a PDF at true scale, streamed page by page. The pieces are written once and placed on every tile. Between two
- * pages the server answers others; when the reader goes away the rest is not drawn. Readers that heed it print without scaling.
+ * A print set as a PDF at true scale, streamed page by page. The pieces are written once, a form a layer, and placed on every tile.
+ * Between two pages the server answers others; when the reader goes away the rest is not drawn. Readers that heed it print without scaling.
  */
 export function renderPatternPdf({ set, title, createdAt }: PatternPdfInput, fonts: readonly PrintFont[]): Readable {
   const { width, height } = set.plan.page
   const { scale } = set
   const document = new PDFDocument({
+    pdfVersion: '1.5',
     autoFirstPage: false,
     size: [width * scale.x * POINTS, height * scale.y * POINTS],
     margin: 0,
@@ -52,7 +54,7 @@ interface Pen {
 
 async function drawSheets(document: PDFKit.PDFDocument, set: PrintSet, pen: Pen): Promise<void> {
   await nextTurn()
-  const forms = set.drawing.length === 0 ? [] : [writeForm(document, 'Pieces', set.drawing, pen.fonts)]
+  const forms = writeLayers(document, set.drawing, pen.fonts)
   for (const sheet of set.sheets) {
     if (!pen.isOpen()) return
     document.addPage()
@@ -80,6 +82,6 @@ function drawSheet(document: PDFKit.PDFDocument, sheet: Sheet, forms: readonly P
 
 /** Readers that heed it print without scaling to the page (ISO 32000-1, viewer preferences, PrintScaling). */
 function askForNoScaling(document: PDFKit.PDFDocument): void {
-  const root = (document as unknown as { _root: { data: { ViewerPreferences?: { data: Record<string, unknown> } } } })._root
-  if (root.data.ViewerPreferences) root.data.ViewerPreferences.data.PrintScaling = 'None'
+  const { ViewerPreferences } = catalogue(document)
+  if (ViewerPreferences) ViewerPreferences.data.PrintScaling = 'None'
 }

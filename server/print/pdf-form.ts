@@ -20,18 +20,20 @@ export interface PdfForm {
 
 /**
  * Writes a drawing once, as a form object with its own box and resources (ISO 32000-1, form XObjects). One unit is a point, y down
- * from the upper left corner of its bounds, as pages are drawn here. Curves and letters are the same wherever it is placed.
+ * from the upper left corner of its bounds, as pages are drawn here. With a layer it is shown only while that is.
  */
 export function writeForm(
   document: PDFKit.PDFDocument,
   name: string,
   operations: readonly DrawingOperation[],
   fonts: readonly PrintFont[],
+  layer: PDFKit.PDFKitReference | null = null,
 ): PdfForm {
   const bounds = joinBounds(operations.map(reachOf))
   const [width, height] = [(bounds.right - bounds.left) * POINTS, (bounds.top - bounds.bottom) * POINTS]
   const resources = { ProcSet: ['PDF', 'Text'], Font: {} }
-  const reference = document.ref({ Type: 'XObject', Subtype: 'Form', BBox: [0, 0, width, height], Resources: resources })
+  const shown = layer ? { OC: layer } : {}
+  const reference = document.ref({ Type: 'XObject', Subtype: 'Form', BBox: [0, 0, width, height], Resources: resources, ...shown })
   const place = ({ x, y }: Point): Point => ({ x: (x - bounds.left) * POINTS, y: (bounds.top - y) * POINTS })
   drawnInto(document, { width, height, fonts: resources.Font, write: (chunk) => reference.write(chunk) }, () => {
     for (const operation of operations) drawOperation(document, operation, place, fonts)

@@ -5,6 +5,7 @@ import { bodyLevels } from '../../../shared/domain/body/levels'
 import type { DraftBody, MeasurementKey } from '../../../shared/domain/body/types'
 import { draftBodice } from '../../../shared/domain/draft/bodice'
 import { pieceOutline } from '../../../shared/domain/draft/piece'
+import { isRight } from '../../../shared/domain/draft/roles'
 import { baseStyle } from '../../../shared/domain/draft/style'
 import type {
   BodiceStyle,
@@ -138,6 +139,18 @@ function strapless(input: DraftInput, random: () => number): DraftInput {
   }
 }
 
+/** A right half of its own, with centres that can be parted. */
+function withRight(style: BodiceStyle, random: () => number): BodiceStyle {
+  const parted = (kind: CentreKind): CentreKind => (kind === 'fold' ? 'busk' : kind)
+  const { panels, princessAt, princessEnd, backPrincessAt, neckline } = randomStyle(random)
+  return {
+    ...style,
+    centreFront: parted(style.centreFront),
+    centreBack: parted(style.centreBack),
+    right: { panels, princessAt, princessEnd, backPrincessAt, neckline, necklineWidth: style.necklineWidth },
+  }
+}
+
 /** Reductions 0 to 25 % that differ front and back and a little from level to level; gaps where a centre is laced. */
 function randomInput(body: DraftBody, random: () => number): DraftInput {
   const style = randomStyle(random)
@@ -153,7 +166,7 @@ function randomInput(body: DraftBody, random: () => number): DraftInput {
     back: mm(own.back * between(random, 0.98, 1.02)),
     gapBack: mm(own.gapBack * between(random, 0.8, 1.2)),
   }))
-  const input = { body, style, widths }
+  const input = { body, style: random() < 0.1 ? withRight(style, random) : style, widths }
   return random() < 0.15 ? strapless(input, random) : input
 }
 
@@ -164,12 +177,23 @@ interface Tally {
   /** Why: problems of style and how often. */
   misfits: Map<string, number>
   plausible: number
+  /** Drafted with a right half that differs. */
+  twoHalves: number
   refusals: Map<string, number>
   broken: string[]
   checked: number
 }
 
-const tally = (): Tally => ({ drafted: 0, restyled: 0, misfits: new Map(), plausible: 0, refusals: new Map(), broken: [], checked: 0 })
+const tally = (): Tally => ({
+  drafted: 0,
+  restyled: 0,
+  misfits: new Map(),
+  plausible: 0,
+  twoHalves: 0,
+  refusals: new Map(),
+  broken: [],
+  checked: 0,
+})
 
 /** A style that a body cannot wear is the drafter's to change, not a refusal of the body: it is counted and drafted in the base style. */
 function draftWorn(count: Tally, asked: DraftInput): { readonly input: DraftInput; readonly result: Result<Draft> } {
@@ -180,6 +204,19 @@ function draftWorn(count: Tally, asked: DraftInput): { readonly input: DraftInpu
   count.misfits.set(first.problem.code, (count.misfits.get(first.problem.code) ?? 0) + 1)
   const input = { widths, style: { ...baseStyle(), princessAt: 0.4, centreFront: style.centreFront, centreBack: style.centreBack }, body }
   return { input, result: draftBodice(input) }
+}
+
+/** Each half that was drafted with what it was drafted from. */
+function halvesOf(draft: Draft, input: DraftInput): readonly { readonly half: Draft; readonly own: DraftInput }[] {
+  if (draft.right === null) return [{ half: draft, own: input }]
+  const seamsOf = (right: boolean) => draft.seams.filter(({ a }) => isRight(a.piece) === right)
+  return [
+    { half: { ...draft, seams: seamsOf(false) }, own: input },
+    {
+      half: { ...draft, pieces: draft.right, seams: seamsOf(true) },
+      own: { ...input, style: { ...input.style, ...input.style.right } },
+    },
+  ]
 }
 
 function run(count: Tally, { values, plausible }: GeneratedBody, inputOf: (body: DraftBody) => DraftInput): void {
@@ -201,16 +238,19 @@ function run(count: Tally, { values, plausible }: GeneratedBody, inputOf: (body:
   if (input === null || !('pieces' in result.value)) return
   count.drafted += 1
   const draft = result.value
-  const allowances = wrongAllowances(draft)
-  count.checked += allowances.checked
-  const broken = [
-    ...brokenOutlines(draft),
-    ...untrueSeams(draft),
-    ...wrongWidths(draft, input),
-    ...wrongWidthAbove(draft, input),
-    ...cornersAcrossSeams(draft, input),
-    ...allowances.broken,
-  ]
+  const broken = halvesOf(draft, input).flatMap(({ half, own }) => {
+    const allowances = wrongAllowances(half)
+    count.checked += allowances.checked
+    return [
+      ...brokenOutlines(half),
+      ...untrueSeams(half),
+      ...wrongWidths(half, own),
+      ...wrongWidthAbove(half, own),
+      ...cornersAcrossSeams(half, own),
+      ...allowances.broken,
+    ]
+  })
+  if (draft.right !== null) count.twoHalves += 1
   if (broken.length > 0)
     count.broken.push(`${broken.join('; ')} <- ${JSON.stringify({ values, style: input.style, widths: input.widths })}`)
 }
@@ -218,7 +258,7 @@ function run(count: Tally, { values, plausible }: GeneratedBody, inputOf: (body:
 function report(name: string, count: Tally): void {
   const refused = [...count.refusals.values()].reduce((sum, own) => sum + own, 0)
   console.log(
-    `${name}: ${count.drafted} drafted, ${count.restyled} of them restyled ${JSON.stringify(Object.fromEntries(count.misfits))}; of ${count.plausible} plausible bodies ${refused} refused ${JSON.stringify(Object.fromEntries(count.refusals))}`,
+    `${name}: ${count.drafted} drafted, ${count.twoHalves} with a right half of its own, ${count.restyled} of them restyled ${JSON.stringify(Object.fromEntries(count.misfits))}; of ${count.plausible} plausible bodies ${refused} refused ${JSON.stringify(Object.fromEntries(count.refusals))}`,
   )
   expect(count.broken.slice(0, 3)).toEqual([])
   expect(count.drafted).toBeGreaterThan(0)
@@ -264,7 +304,8 @@ describe('invariants 1, 2, 3, 5 and 8', () => {
                 gapFront: centreFront === 'lacing' ? 20 : 0,
                 gapBack: centreBack === 'lacing' ? 70 : 0,
               })
-              return { ...input, widths, style: { ...input.style, centreFront, centreBack } }
+              const right = centreFront === 'fold' || centreBack === 'fold' ? null : input.style.right
+              return { ...input, widths, style: { ...input.style, right, centreFront, centreBack } }
             })
           }
         }

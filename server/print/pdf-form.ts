@@ -38,7 +38,7 @@ export function writeForm(
   drawnInto(document, { width, height, fonts: resources.Font, write: (chunk) => reference.write(chunk) }, () => {
     for (const operation of operations) drawOperation(document, operation, place, fonts)
   })
-  reference.end()
+  reference.end('')
   return { name, reference, bounds }
 }
 

@@ -33,7 +33,7 @@ export function writeLayers(document: PDFKit.PDFDocument, drawing: readonly Draw
     if (title === null) return [writeForm(document, form, operations, fonts)]
     // The writer takes a boxed string for a text and a bare one for a name.
     const group = document.ref({ Type: 'OCG', Name: new String(title) })
-    group.end()
+    group.end('')
     groups.push(group)
     return [writeForm(document, form, operations, fonts, group)]
   })

@@ -11,6 +11,7 @@ import { mm, newton, pascal } from '../../shared/domain/units/brand'
 import { DEMO_ACCOUNTS, DEMO_ZONE } from '../../shared/demo'
 import { enterWorkroom, type Database, type Work } from '../../server/db/client'
 import { createClient } from '../../server/services/clients'
+import { keepBoneStock } from '../../server/services/bone-stock'
 import { archiveCloth, createCloth, createTest } from '../../server/services/cloths'
 import { recordFitting } from '../../server/services/fittings'
 import { createGarment } from '../../server/services/garments'
@@ -308,6 +309,17 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
         note: null,
       })
       await archiveCloth(room, remnant.id, true)
+      await keepBoneStock(room, {
+        name: 'Spiral steel 8 mm, stainless',
+        kind: 'spiral-steel',
+        width: mm(8),
+        thickness: mm(1.6),
+        modulus: 190,
+        stiffness: 0.0045,
+        rusts: false,
+        leastRadius: mm(70),
+        lengths: [],
+      })
       await measurePrinter(room, { name: 'Office printer', acrossMm: 99.4, alongMm: 99.8 })
     }
 
@@ -342,6 +354,17 @@ export function seedDemo(owner: Database, now: Date): Promise<{ readonly first: 
         fittedOn: '2026-11-20',
         note: null,
         levels: [{ level: 'waist', gap: null, feel: 'right', pull: null }],
+      })
+      await keepBoneStock(room, {
+        name: 'Plastic 8 mm',
+        kind: 'plastic',
+        width: mm(8),
+        thickness: mm(1.5),
+        modulus: 2.5,
+        stiffness: null,
+        rusts: false,
+        leastRadius: mm(300),
+        lengths: [],
       })
       await measurePrinter(room, { name: 'Loft plotter', acrossMm: 100.2, alongMm: 100 })
     }

@@ -34,6 +34,15 @@ export interface Account {
   unit: Generated<string>
 }
 
+export interface BoneStock {
+  archivedAt: Timestamp | null
+  id: Generated<string>
+  name: string
+  savedBy: string | null
+  stock: Json
+  workroomId: string
+}
+
 export interface Clearance {
   byName: string | null
   clearedAt: Timestamp
@@ -255,6 +264,7 @@ export interface Workroom {
 
 export interface DB {
   account: Account
+  boneStock: BoneStock
   clearance: Clearance
   client: Client
   cloth: Cloth

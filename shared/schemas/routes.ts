@@ -8,6 +8,7 @@ import { garmentBody, garmentSummary, garmentUpdate, garmentWhole, workingCopy, 
 import { runAnswer, runQuery, runUpload } from './machine-file'
 import { measuring, measuringBody, measuringUpdate } from './measuring'
 import { exchangeQuery, printer, printerBody, printQuery, tileMap, tilePlan } from './print'
+import { boneStock, boneStockBody } from './structure'
 import { me, preferencesBody, signInBody, type Role } from './session'
 import {
   solveCurveAnswer,
@@ -32,7 +33,7 @@ import { member, workroom, workroomPatch } from './workroom'
 export type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE'
 
 /** What the `id` of an address names. */
-export type ResourceKind = 'client' | 'wearer' | 'measuring' | 'cloth' | 'test' | 'garment' | 'version' | 'printer'
+export type ResourceKind = 'client' | 'wearer' | 'measuring' | 'cloth' | 'test' | 'garment' | 'version' | 'printer' | 'stock'
 
 /** Who may: anyone, whoever is signed in, or the roles listed. */
 export type Access = 'public' | 'signed-in' | readonly Role[]
@@ -583,6 +584,36 @@ export const routes = {
     media: 'image/png',
     group: 'Print',
     summary: 'A preview of the pieces, not to measure.',
+  },
+
+  'stock.list': {
+    ...plain,
+    method: 'GET',
+    path: '/api/bone-stock',
+    access: everyone,
+    response: list(boneStock),
+    group: 'Structure',
+    summary: 'What the bones of the workroom are cut from, beside the list the product comes with.',
+  },
+  'stock.save': {
+    ...plain,
+    method: 'POST',
+    path: '/api/bone-stock',
+    access: drafting,
+    body: boneStockBody,
+    response: boneStock,
+    status: 201,
+    group: 'Structure',
+    summary: 'Keep a stock of bones under its name; kept again under it, it is changed.',
+  },
+  'stock.remove': {
+    ...of('stock'),
+    method: 'DELETE',
+    path: '/api/bone-stock/:id',
+    access: drafting,
+    response: done,
+    group: 'Structure',
+    summary: 'Put a stock away. Garments that use it keep it.',
   },
 
   'printers.list': {

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import type { StructureChoice } from '../domain/structure/types'
+import type { BoneStock, StructureChoice } from '../domain/structure/types'
 import { figure, length, mirrors } from './base'
 import { edgeId, levelId, pieceId } from './draft'
 
@@ -25,8 +25,26 @@ const bone = z.object({
   on: z.boolean(),
 })
 
+/** A stock as it is typed. Lengths mm, modulus GPa, stiffness N m². */
+export const boneStockBody = z.object({
+  name: z.string().trim().min(1, 'Name the stock.').max(60),
+  kind: z.enum(['flat-steel', 'spiral-steel', 'plastic', 'wire']),
+  width: length(1, 40),
+  thickness: length(0.1, 10),
+  modulus: figure(0.1, 400),
+  stiffness: figure(0, 5).nullable(),
+  rusts: z.boolean(),
+  leastRadius: length(1, 5000),
+  lengths: z.array(length(20, 2000)).max(60),
+})
+export const boneStock = mirrors<BoneStock>()(boneStockBody.extend({ id: z.string().max(60) }))
+
 const closure = z.object({ rigid: length(0, 200), pitch: length(0, 200), waistPitch: length(0, 200), ends: length(0, 2000) }).nullable()
 
 export const structureChoice = mirrors<StructureChoice>()(
-  z.object({ bones: z.array(bone).max(120), closures: z.object({ front: closure, back: closure }) }),
+  z.object({
+    bones: z.array(bone).max(120),
+    closures: z.object({ front: closure, back: closure }),
+    stock: z.array(boneStock).max(60).optional(),
+  }),
 )

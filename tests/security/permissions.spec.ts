@@ -14,6 +14,7 @@ const tables: Readonly<Record<ResourceKind, string>> = {
   garment: 'garment',
   version: 'version',
   printer: 'printer',
+  stock: 'bone_stock',
 }
 
 /** Routes that end the session they are called with. */

@@ -49,6 +49,7 @@ describe('workrooms in SQL, as the role that serves', () => {
 
   it('finds every table of a workroom forced under its policy', async () => {
     expect(tables).toEqual([
+      'bone_stock',
       'clearance',
       'client',
       'cloth',

@@ -10,6 +10,7 @@ const tables = {
   garment: 'garment',
   version: 'version',
   printer: 'printer',
+  stock: 'boneStock',
 } as const satisfies Record<ResourceKind, string>
 
 /** Whether the workroom has such a row. */

@@ -2,7 +2,7 @@ import type { LevelId } from '../body/types'
 import type { Acknowledged } from '../cautions/acknowledge'
 import { edgeWords, lowerFirst, pieceWords } from '../draft/roles'
 import type { Alteration, BodiceStyle, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from '../draft/types'
-import type { Bone, ClosureChoice, StructureChoice } from '../structure/types'
+import type { Bone, BoneStock, ClosureChoice, StructureChoice } from '../structure/types'
 import type { Stiffness } from '../textile/stiffness'
 import type { ClothState } from '../textile/types'
 import { mm, type Mm } from '../units/brand'
@@ -40,7 +40,7 @@ export type Command =
   | { readonly kind: 'remove-alteration'; readonly id: string }
   | { readonly kind: 'order-alteration'; readonly id: string; readonly to: number }
   /** Bones added or, by their ids, in place of those that stand. */
-  | { readonly kind: 'set-bones'; readonly bones: readonly Bone[]; readonly label: string }
+  | { readonly kind: 'set-bones'; readonly bones: readonly Bone[]; readonly label: string; readonly stock?: readonly BoneStock[] }
   | { readonly kind: 'remove-bone'; readonly id: string }
   | { readonly kind: 'set-closure'; readonly half: 'front' | 'back'; readonly closure: ClosureChoice | null }
   /** A whole document in place of this one: a recut, a trial. */
@@ -150,7 +150,10 @@ function changed(document: GarmentDocument, command: Command): GarmentDocument {
     case 'order-alteration':
       return { ...document, alterations: ordered(document.alterations, command.id, command.to) }
     case 'set-bones':
-      return withStructure(document, ({ bones }) => ({
+      return withStructure(document, ({ bones, stock = [] }) => ({
+        ...(command.stock?.length
+          ? { stock: [...stock.filter((one) => !command.stock!.some(({ id }) => id === one.id)), ...command.stock] }
+          : {}),
         bones: [
           ...bones.map((one) => command.bones.find((next) => next.id === one.id) ?? one),
           ...command.bones.filter((next) => !bones.some((one) => one.id === next.id)),

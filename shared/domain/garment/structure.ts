@@ -9,7 +9,7 @@ import { mostTensionAt, opensAt, readClosure, type ClosureReading } from '../str
 import { rigidWidths, type RigidWidths } from '../structure/rigid'
 import { boneFindings } from '../structure/rules'
 import { DEFAULT_STOCK } from '../structure/stock'
-import type { BoneFault, LaidBone, StructureChoice } from '../structure/types'
+import type { BoneFault, BoneStock, LaidBone, StructureChoice } from '../structure/types'
 import type { LayerPlan, RingSolution } from '../textile/types'
 import { mm } from '../units/brand'
 
@@ -17,6 +17,12 @@ const NOTHING: StructureChoice = { bones: [], closures: { front: null, back: nul
 
 /** What is stiff of a document; nothing in documents older than it. */
 export const structureOf = (document: Pick<GarmentDocument, 'structure'>): StructureChoice => document.structure ?? NOTHING
+
+/** What the bones of a document may be cut from: the list that comes with the product, and the workroom's own that it keeps. */
+export const stockOf = (document: Pick<GarmentDocument, 'structure'>): readonly BoneStock[] => [
+  ...DEFAULT_STOCK,
+  ...(structureOf(document).stock ?? []),
+]
 
 /** Whether bones or closures of the document take anything of its rings. */
 export function isStructured(document: Pick<GarmentDocument, 'structure' | 'style'>): boolean {
@@ -42,7 +48,7 @@ export function laidBones(
   const faults: BoneFault[] = []
   for (const bone of structureOf(document).bones) {
     if (!bone.on) continue
-    const laid = layBone(bone, pieces, DEFAULT_STOCK)
+    const laid = layBone(bone, pieces, stockOf(document))
     if (laid.ok) bones.push(laid.value)
     else faults.push(laid.problem)
   }

@@ -74,6 +74,8 @@ export interface ClosureChoice {
 export interface StructureChoice {
   readonly bones: readonly Bone[]
   readonly closures: { readonly front: ClosureChoice | null; readonly back: ClosureChoice | null }
+  /** Stocks of the workroom that its bones use, as they were when the bones were laid. */
+  readonly stock?: readonly BoneStock[]
 }
 
 /** Why a bone cannot lie where it is asked for. */

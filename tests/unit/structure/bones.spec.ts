@@ -217,6 +217,23 @@ describe('bones and closures in the rings', () => {
 })
 
 describe('structure in a document', () => {
+  it('keeps a copy of the stock of the workroom that its bones use', () => {
+    const own = { ...DEFAULT_STOCK[1]!, id: 'own', name: 'Own spiral', width: mm(10) }
+    const start = inventedDocument()
+    const { document: one } = applyCommand(start, { kind: 'set-bones', bones: [bone({ stock: 'own' })], label: 'bone', stock: [own] })
+    const { document: two } = applyCommand(one, {
+      kind: 'set-bones',
+      bones: [bone({ stock: 'own', id: 'b2' })],
+      label: 'bone',
+      stock: [own],
+    })
+    expect(two.structure!.stock).toEqual([own])
+    const found = laidBones(two, pieces)
+    expect(found.faults).toEqual([])
+    expect(found.bones[0]!.channelWidth).toBe(12)
+    expect(laidBones({ structure: { ...two.structure!, stock: [] } }, pieces).faults[0]!.code).toBe('stock-gone')
+  })
+
   it('is added, changed, removed and undone by commands, and read from documents older than it', () => {
     const start = inventedDocument()
     const { document: one } = applyCommand(start, { kind: 'set-bones', bones: [bone()], label: 'bone' })

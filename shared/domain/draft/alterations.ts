@@ -9,7 +9,7 @@ import { levelHeightsOf, withLevelHeights } from './draft-levels'
 import { armholeLength, narrowFindings, readFindings } from './findings'
 import { moveIn, placeOf, withEdges, type Place } from './edge-moves'
 import { outlineIsSound, readPiece, type LevelHeight } from './piece'
-import { rightSeams } from './right-half'
+import { centreSeams, rightSeams } from './right-half'
 import { inRightHalf, isRight } from './roles'
 import { compareSeams, matesTravelAlike, withNotches } from './seams'
 import type { Alteration, Draft, DraftPiece, GirthAlteration, LengthAlteration, MoveAlteration, PointRole } from './types'
@@ -217,7 +217,10 @@ export function applyAlterations(draft: Draft, alterations: readonly Alteration[
       ...draft,
       pieces: read,
       right: readRight,
-      seams: [...compareSeams(read), ...(readRight === null ? [] : rightSeams(compareSeams(readRight)))],
+      seams: [
+        ...compareSeams(read),
+        ...(readRight === null ? [] : [...rightSeams(compareSeams(readRight)), ...centreSeams(read, readRight)]),
+      ],
       findings: [...stays, ...readFindings(read, draft.armhole.aim), ...narrowFindings(readRight ?? [])],
       armhole: { length: mm(armholeLength(read)), aim: draft.armhole.aim },
       frame: left.heights === before ? draft.frame : withLevelHeights(draft.frame, left.heights),

@@ -10,6 +10,7 @@ import { frameProblem, princessProblem, widthProblem } from './frame-limits'
 import { heldFrame } from './held-angle'
 import { necklineProblem } from './neckline-limits'
 import { panelProblem } from './panel-limits'
+import { centreSharesOf } from './panels'
 import { outlineIsSound, readPiece } from './piece'
 import type { LevelHeight, PieceSketch } from './piece'
 import { drawnHalves, sketchPieces } from './pieces'
@@ -153,7 +154,7 @@ export function draftBodice(input: DraftInput): Result<Draft> {
   if (fold !== undefined) return fail(foldProblem(fold))
   const left = draftHalf({ ...input, style: { ...style, right: null } })
   if (!left.ok) return left
-  const right = draftHalf({ ...input, style: { ...style, ...style.right, right: null } })
+  const right = draftHalf({ ...input, centreShares: centreSharesOf(style), style: { ...style, ...style.right, right: null } })
   if (!right.ok) return fail(rightProblem(right.problem))
   return succeed(withRightHalf(left.value, right.value))
 }

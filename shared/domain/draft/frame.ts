@@ -46,6 +46,8 @@ export interface Frame {
   readonly bust: BustAngle
   /** The level above the bust: its height on the pieces and what the seams take in there; in front less the bust angle's own opening. */
   readonly above: { readonly y: number; readonly takenFront: number; readonly takenBack: number } | null
+  /** What the centres take where another half says it. */
+  readonly centreShares: DraftInput['centreShares']
   /** k_u: what shoulder length, across back and across front are multiplied by. */
   readonly milder: number
   readonly findings: readonly DraftFinding[]
@@ -75,7 +77,7 @@ function acrossFinding(half: 'front' | 'back', heldBy: number): readonly DraftFi
  * The frame by the drafting notes. Heights times the vertical factor; shoulder length, across back and across front times
  * the milder factor; widths at the bust as given. `mostAngle` (radians) holds the bust angle lower than the notes do. The front shoulder stands 3 mm nearer to the neck than the back's.
  */
-export function draftFrame({ body, style, widths, above }: DraftInput, mostAngle?: number): Frame {
+export function draftFrame({ body, style, widths, above, centreShares }: DraftInput, mostAngle?: number): Frame {
   const { values } = body
   const v = style.verticalFactor
   const levels = bodyLevels(body)
@@ -126,6 +128,7 @@ export function draftFrame({ body, style, widths, above }: DraftInput, mostAngle
     heightOf,
     widthsOf,
     milder,
+    centreShares,
     bust: angle,
     above:
       above === undefined

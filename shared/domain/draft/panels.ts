@@ -124,16 +124,42 @@ function placeShares(
 }
 
 /** Shares of a half by whether it is taken in or let out. */
-export function sharesByPlace(
-  zone: Zone,
-  style: BodiceStyle,
-): { readonly takeIn: ReadonlyMap<WedgePlace, number>; readonly letOut: ReadonlyMap<WedgePlace, number> } {
+export interface PlaceShares {
+  readonly takeIn: ReadonlyMap<WedgePlace, number>
+  readonly letOut: ReadonlyMap<WedgePlace, number>
+}
+
+/** Shares with the centre's held, so that two halves which differ meet there: the others make up the rest in proportion. */
+function withCentre(shares: ReadonlyMap<WedgePlace, number>, centre: number): ReadonlyMap<WedgePlace, number> {
+  const others = 1 - (shares.get('centre') ?? 0)
+  const scale = others > 0 ? (1 - centre) / others : 0
+  return new Map([...shares].map(([place, share]) => [place, place === 'centre' ? centre : share * scale] as const))
+}
+
+/** What the centre of a half takes, taken in and let out. */
+export interface CentreShare {
+  readonly takeIn: number
+  readonly letOut: number
+}
+
+/** Shares of a half; with `centre` its centre takes what that of the other half takes. */
+export function sharesByPlace(zone: Zone, style: BodiceStyle, centre?: CentreShare): PlaceShares {
   const front = zone === 'front'
   const panels = style.panels[zone]
   const takes = centreTakes(front ? style.centreFront : style.centreBack, style.openingsTake[zone])
   const takeIn = front ? style.frontShares : style.backShares
-  return {
+  const own = {
     takeIn: placeShares(takeIn, panels, takes, ({ share }) => share),
     letOut: placeShares(style.letOut[zone] ?? takeIn, panels, takes, ({ share, letOut }) => letOut ?? share),
   }
+  return centre === undefined ? own : { takeIn: withCentre(own.takeIn, centre.takeIn), letOut: withCentre(own.letOut, centre.letOut) }
+}
+
+/** What both centres take in a style. */
+export function centreSharesOf(style: BodiceStyle): Readonly<Record<Zone, CentreShare>> {
+  const of = (zone: Zone): CentreShare => {
+    const { takeIn, letOut } = sharesByPlace(zone, style)
+    return { takeIn: takeIn.get('centre') ?? 0, letOut: letOut.get('centre') ?? 0 }
+  }
+  return { front: of('front'), back: of('back') }
 }

@@ -1,3 +1,5 @@
+import { pathLength } from '../geometry/path'
+import { mm } from '../units/brand'
 import type { Problem } from '../units/result'
 import { inRightHalf, lowerFirst } from './roles'
 import type { Draft, DraftFinding, DraftPiece, SeamComparison } from './types'
@@ -45,12 +47,31 @@ function rightFindings(left: Draft, right: Draft): readonly DraftFinding[] {
 export const rightSeams = (seams: readonly SeamComparison[]): readonly SeamComparison[] =>
   seams.map((seam) => ({ ...seam, name: `${seam.name}, right` }))
 
+/** Both halves compared where they meet at the centres, mm: what is moved on one of them alone shows there. */
+export function centreSeams(left: readonly DraftPiece[], right: readonly DraftPiece[]): readonly SeamComparison[] {
+  return (['front', 'back'] as const).flatMap((zone) => {
+    const sides = [left, right].map((pieces) =>
+      pieces.flatMap((piece) =>
+        piece.zone === zone
+          ? piece.edges
+              .filter(({ id }) => id === 'centre')
+              .map(({ id, path }) => ({ piece: piece.id, edge: id, length: mm(pathLength(path)) }))
+          : [],
+      ),
+    )
+    const [a, b] = [sides[0]?.[0], sides[1]?.[0]]
+    if (a === undefined || b === undefined) return []
+    return [{ name: zone === 'front' ? 'Centre front' : 'Centre back', a, b, difference: mm(a.length - b.length) }]
+  })
+}
+
 /** Two drafts of the same body, widths and centres as the left and the right half of one bodice; every piece is cut once. */
 export function withRightHalf(left: Draft, right: Draft): Draft {
+  const own = right.pieces.map(toRight)
   return {
     ...left,
     pieces: left.pieces.map((piece) => named(piece, 'Left')),
-    right: right.pieces.map(toRight),
+    right: own,
     seams: [
       ...left.seams,
       ...rightSeams(
@@ -60,6 +81,7 @@ export function withRightHalf(left: Draft, right: Draft): Draft {
           b: { ...seam.b, piece: inRightHalf(seam.b.piece) },
         })),
       ),
+      ...centreSeams(left.pieces, own),
     ],
     findings: [...left.findings, ...rightFindings(left, right)],
   }

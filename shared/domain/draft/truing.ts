@@ -79,9 +79,10 @@ function sideAt(piece: DraftPiece, edge: PieceEdge, node: string): CornerSide | 
   return { edge: joined, leaves, inside: Math.PI - angleBetween(into, out) }
 }
 
-/** Every corner that a seam leaves in an edge it joins, at both its ends. */
+/** Every corner that a seam leaves in an edge it joins, at both its ends. At a centre a point may be asked for. */
 export function edgeCorners(pieces: readonly DraftPiece[], seams: readonly SeamComparison[]): readonly EdgeCorner[] {
   return seams.flatMap((seam) => {
+    if (seam.a.edge === 'centre') return []
     const [first, second] = [pieces.find(({ id }) => id === seam.a.piece), pieces.find(({ id }) => id === seam.b.piece)]
     const [own, other] = [edgeAt(pieces, seam.a), edgeAt(pieces, seam.b)]
     if (!first || !second || !own || !other) return []

@@ -171,6 +171,8 @@ export interface DraftInput {
   readonly widths: readonly LevelWidths[]
   /** Half widths on the pieces at the level above the bust that a strapless bodice hangs from; the gaps are those of the bust. */
   readonly above?: AboveWidths
+  /** What the centres take of the wedge, from another half that this one meets there; absent: by the style's own shares. */
+  readonly centreShares?: Readonly<Record<'front' | 'back', { readonly takeIn: number; readonly letOut: number }>> | undefined
 }
 
 /** A named point of an edge. Its identity is piece, edge and name, never an index. */

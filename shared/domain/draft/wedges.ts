@@ -51,7 +51,10 @@ export function wedgesOf(frame: Frame, style: BodiceStyle): Wedges {
       return bust.back + gapOf('back', 'bust') - frame.widthsOf(level).back - gapOf('back', level)
     },
   }
-  const shares = { front: sharesByPlace('front', style), back: sharesByPlace('back', style) }
+  const shares = {
+    front: sharesByPlace('front', style, frame.centreShares?.front),
+    back: sharesByPlace('back', style, frame.centreShares?.back),
+  }
   const wedge = (zone: Zone, place: WedgePlace, level: LevelId | 'above') => {
     const own = taken[zone](level)
     return (shares[zone][own < 0 ? 'letOut' : 'takeIn'].get(place) ?? 0) * own

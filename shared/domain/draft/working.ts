@@ -35,7 +35,8 @@ export function bustAngleWorking(input: DraftInput, draft: Draft): Working {
     source: DRAFTING_RULE,
     notes: [
       'The angle makes the front armhole as deep as the back’s although the front is longer over the bust.',
-      `It is 0 where the front is shorter than the back, and held at ${BUST_ANGLE_MOST}°.`,
+      `It is 0 where the front is shorter than the back or is eased, and held at ${BUST_ANGLE_MOST}°.`,
+      'Where it opens into the armhole it is held so that its turned end stays 15 mm above and inside the underarm.',
       'A front waist length measured too long makes it too large.',
     ],
   }

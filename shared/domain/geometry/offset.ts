@@ -66,7 +66,8 @@ function corner(before: Side, after: Side, mitreLimit: number): readonly Point[]
 function turnedCorner(before: Side, after: Side, reach: number): readonly Point[] | null {
   if (before.turned === after.turned) return null
   const [plain, hem] = before.turned ? [after, before] : [before, after]
-  if (!(hem.allowance > 0)) return null
+  // Without an allowance beside it there is nothing to lie on: a fold, where the hem runs on into its own mirror image.
+  if (!(hem.allowance > 0) || !(plain.allowance > 0)) return null
   const at = after.from
   // Into the piece along the plain edge, and its mirror image across the hem, out of the piece.
   const inwards = before.turned ? plain.along : { x: -plain.along.x, y: -plain.along.y }

@@ -7,7 +7,7 @@ export interface TextOutline {
   readonly width: number
 }
 
-const short = (value: number) => Number(value.toFixed(3)).toString()
+const short = (value: number) => String(Math.round(value * 1000) / 1000)
 
 /** Sets a text in the fonts of the print, so that it looks the same where they are not installed. `size` mm. */
 export function textOutline(text: string, size: number, weight: TextWeight, fonts: readonly PrintFont[]): TextOutline {

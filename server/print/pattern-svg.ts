@@ -5,7 +5,7 @@ import type { PrintFont } from './fonts'
 import { textOutline } from './glyph-paths'
 import { LINE_STYLES, type LineStyle } from './line-styles'
 
-const number = (value: number) => Number(value.toFixed(4)).toString()
+const number = (value: number) => String(Math.round(value * 10_000) / 10_000)
 const escaped = (text: string) => text.replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;').replaceAll('"', '&quot;')
 const grey = (level: number) => {
   const value = Math.round(level * 255)

@@ -10,6 +10,9 @@ const TEXT_REACH = 20
 /** A stroke reaches past its path by half its width, mm. */
 const STROKE_REACH = 2
 
+/** Points to a thousandth (.35 µm): finer figures only make the file longer. */
+const fine = (value: number) => Math.round(value * 1000) / 1000
+
 /** A drawing written once into the file, to be placed on any page. */
 export interface PdfForm {
   readonly name: string
@@ -34,7 +37,7 @@ export function writeForm(
   const resources = { ProcSet: ['PDF', 'Text'], Font: {} }
   const shown = layer ? { OC: layer } : {}
   const reference = document.ref({ Type: 'XObject', Subtype: 'Form', BBox: [0, 0, width, height], Resources: resources, ...shown })
-  const place = ({ x, y }: Point): Point => ({ x: (x - bounds.left) * POINTS, y: (bounds.top - y) * POINTS })
+  const place = ({ x, y }: Point): Point => ({ x: fine((x - bounds.left) * POINTS), y: fine((bounds.top - y) * POINTS) })
   drawnInto(document, { width, height, fonts: resources.Font, write: (chunk) => reference.write(chunk) }, () => {
     for (const operation of operations) drawOperation(document, operation, place, fonts)
   })

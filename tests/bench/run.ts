@@ -22,6 +22,7 @@ import { completeBody } from '../../shared/domain/body/complete'
 import { generatedBody, seeded } from '../fixtures/bodies'
 import { measuredOf, widthsOf } from '../fixtures/draft-inputs'
 import { inventedInput } from '../fixtures/garment-inputs'
+import { printFigures } from './prints'
 import { medianOfFresh } from './wide-rings'
 
 function median(work: () => void, runs = 400): number {
@@ -158,4 +159,22 @@ console.log(`${bareParse.toFixed(0)} ms  ×1.0  bare: papaparse, 100,000 rows to
 console.log(
   `${fileTime.toFixed(0)} ms  ×${fileRatio.toFixed(1)} (guard ×4)  machine's file of 100,000 rows read as a test; a process that streams it holds ${held.toFixed(0)} MB (guard ${MOST_HELD})${fileOver ? '  OVER' : ''}`,
 )
+
+const print = printFigures()
+const kilobytes = print.bytes / 1000
+const bare = print.peer ?? NaN
+const printOver =
+  print.tiles < 40 || kilobytes > 400 || print.held > 120 || print.time / bare > 4 || print.dxf / bare > 2 || print.svg / bare > 2
+failed ||= printOver
+console.log(
+  print.peer === null
+    ? 'rsvg-convert is not installed, so prints have no peer'
+    : `${bare.toFixed(0)} ms  ×1.0  peer: rsvg-convert, the same drawing on one page of a PDF`,
+)
+console.log(
+  `${print.time.toFixed(0)} ms  ×${(print.time / bare).toFixed(1)} (guard ×4, under 300 ms)  pattern PDF, 12 sizes of ${print.pieces} pieces on ${print.tiles} tiles of A4: ` +
+    `${kilobytes.toFixed(0)} kB (guard 400), first byte ${print.firstByte.toFixed(0)} ms (under 150), ${print.held.toFixed(0)} MB more held (guard 120), ${print.whole.toFixed(0)} MB in all${printOver ? '  OVER' : ''}`,
+)
+console.log(`${print.dxf.toFixed(0)} ms  ×${(print.dxf / bare).toFixed(1)} (guard ×2, under 100 ms)  DXF of ${print.pieces} pieces`)
+console.log(`${print.svg.toFixed(0)} ms  ×${(print.svg / bare).toFixed(1)} (guard ×2, under 100 ms)  SVG of ${print.pieces} pieces`)
 process.exit(failed ? 1 : 0)

@@ -21,7 +21,8 @@ export const clothUpdate = clothBody.extend({ base: revision })
 /** A photograph of a strip as it comes from a telephone. */
 export const photoUpload = { field: 'photo', limit: 25_000_000, media: ['image/jpeg', 'image/png', 'image/webp'] } as const
 
-const testFields = z.object({
+/** A test as it is entered. */
+export const testFields = z.object({
   testedOn: isoDate,
   tester: optionalLine,
   /** Stretches before the first reading. */

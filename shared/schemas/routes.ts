@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { done, idParams, list, page, pageQuery } from './base'
+import { bundleQuery, bundleUpload, imported, importQuery } from './bundle'
 import { client, clientBody, clientSummary, clientUpdate, clientWhole } from './clients'
 import { cloth, clothBody, clothSummary, clothTest, clothUpdate, clothWhole, photoUpload, testBody, testUpdate } from './cloths'
 import { draft } from './draft'
@@ -421,6 +422,18 @@ export const routes = {
     group: 'Garments',
     summary: 'Start a garment for a wearer, with a fresh working copy.',
   },
+  'garments.import': {
+    ...plain,
+    method: 'POST',
+    path: '/api/garments/import',
+    access: drafting,
+    query: importQuery,
+    upload: bundleUpload,
+    response: imported,
+    status: 201,
+    group: 'Garments',
+    summary: 'Bring in a bundle of another workroom as a garment of a wearer here, its cloths as new lots.',
+  },
   'garments.get': {
     ...of('garment'),
     method: 'GET',
@@ -584,6 +597,17 @@ export const routes = {
     media: 'image/png',
     group: 'Print',
     summary: 'A preview of the pieces, not to measure.',
+  },
+  'print.bundle': {
+    ...of('version'),
+    method: 'GET',
+    path: '/api/versions/:id/bundle.zip',
+    access: drafting,
+    query: bundleQuery,
+    response: null,
+    media: 'application/zip',
+    group: 'Print',
+    summary: 'A version with all it was made from: data with its schema, pieces and prints. With the measuring only where body is 1.',
   },
 
   'stock.list': {

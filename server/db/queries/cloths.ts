@@ -193,3 +193,9 @@ export function setTestPhoto(db: Work, workroom: string, id: string, photo: Phot
     .returning(testColumns)
     .executeTakeFirst()
 }
+
+/** Which of the codes are in use. */
+export async function takenClothCodes(db: Work, workroom: string, codes: readonly string[]): Promise<string[]> {
+  const rows = await db.selectFrom('cloth').select('code').where('workroomId', '=', workroom).where('code', 'in', codes).execute()
+  return rows.map(({ code }) => code)
+}

@@ -211,3 +211,9 @@ export async function keepGoodSolution(
 export async function lockGarmentById(db: Work, workroom: string, id: string): Promise<void> {
   await db.selectFrom('garment').select('id').where('workroomId', '=', workroom).where('id', '=', id).forUpdate().execute()
 }
+
+/** Which of the codes are in use. */
+export async function takenGarmentCodes(db: Work, workroom: string, codes: readonly string[]): Promise<string[]> {
+  const rows = await db.selectFrom('garment').select('code').where('workroomId', '=', workroom).where('code', 'in', codes).execute()
+  return rows.map(({ code }) => code)
+}

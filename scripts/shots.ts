@@ -25,6 +25,7 @@ const screens: readonly Screen[] = [
   { name: 'cloth', open: record('cloths') },
   { name: 'garments', open: goto('/garments') },
   { name: 'garment-new', open: goto('/garments/new') },
+  { name: 'garment-bring-in', open: goto('/garments/bring-in') },
   { name: 'bench-body', open: bench('body') },
   { name: 'bench-cloth', open: bench('cloth') },
   { name: 'bench-layers', open: bench('layers') },

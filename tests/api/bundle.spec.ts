@@ -5,6 +5,7 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { strFromU8, strToU8, unzipSync, zipSync, type Zippable } from 'fflate'
 import { beforeAll, describe, expect, inject, it } from 'vitest'
+import { pathLength } from '../../shared/domain/geometry/path'
 import type { Bundle, Imported } from '../../shared/schemas/bundle'
 import type { GarmentSummary, WorkingCopyView } from '../../shared/schemas/garments'
 import { routePath } from '../../shared/schemas/client'
@@ -101,7 +102,7 @@ describe('a bundle brought into another workroom', () => {
     const copy = (await call('garments.workingCopy', { id: garment.id }, second)).body as WorkingCopyView
     expect(copy.input.measured).toEqual(whole.body!.measured)
     const edges = (draft: VersionWhole['kept']['draft']) =>
-      draft.pieces.flatMap((piece) => piece.edges.map(({ id, length }) => [piece.id, id, length]))
+      draft.pieces.flatMap((piece) => piece.edges.map(({ id, path }) => [piece.id, id, pathLength(path).toFixed(4)]))
     expect(edges(copy.solution!.draft)).toEqual(edges(whole.kept.draft))
 
     const there = new Map(cloths.map((cloth, index) => [cloth.id, sent.cloths[index]!]))

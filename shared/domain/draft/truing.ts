@@ -103,7 +103,7 @@ export interface BentFold {
   readonly off: Mm
 }
 
-/** Points of folds that no longer lie on one straight line, against the fold's greatest run of unmoved points. */
+/** Points of folds that no longer lie on one straight line, against the middle one of its points. */
 export function bentFolds(pieces: readonly DraftPiece[]): readonly BentFold[] {
   return pieces.flatMap((piece) =>
     piece.edges.flatMap((edge) => {
